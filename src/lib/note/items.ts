@@ -1,0 +1,224 @@
+/**
+ * The kinds of item and their fields: one zod schema per kind is the only description of it. The
+ * document (Yjs), its projection, the interchange JSON, the API and a baseline's content follow it.
+ *
+ * Fields that two people may type at once are Y.Text in the document and plain strings here; a choice
+ * is a plain value in both; prose is a Y.XmlFragment; evidence files are a Y.Map by file id.
+ */
+import { z } from 'zod';
+import { proseSchema } from './prose';
+
+const typed = z.string().max(4000);
+const base = { id: z.string().min(1).max(64) };
+
+export const sectionSchema = z.object({ ...base, kind: z.literal('section'), title: typed });
+
+export const textSchema = z.object({ ...base, kind: z.literal('text'), body: proseSchema });
+
+export const givenSchema = z.object({
+	...base,
+	kind: z.literal('given'),
+	symbol: typed,
+	description: typed,
+	/** A number as typed, e.g. "110" or "1.2e-3". */
+	value: typed,
+	unit: typed,
+	/** Standard uncertainty in the unit of the value; empty means exact. */
+	uncertainty: typed,
+	source: typed
+});
+
+export const calculationSchema = z.object({
+	...base,
+	kind: z.literal('calculation'),
+	symbol: typed,
+	description: typed,
+	expression: typed,
+	/** Unit to show the value in; empty lets the engine choose. */
+	unit: typed,
+	/** Significant digits to show, as typed; empty means 4. */
+	digits: typed
+});
+
+export const relationSchema = z.enum(['le', 'ge', 'within']);
+
+export const checkSchema = z.object({
+	...base,
+	kind: z.literal('check'),
+	description: typed,
+	left: typed,
+	/** left ≤ right, left ≥ right, or left within right ± tolerance. */
+	relation: relationSchema,
+	right: typed,
+	tolerance: typed,
+	/** Required margin; empty means 0. */
+	required: typed
+});
+
+export const bodySchema = z.enum(['earth', 'mars', 'moon', 'ceres']);
+export const baseModeSchema = z.enum(['lift', 'area']);
+
+export const lineModelSchema = z.object({
+	...base,
+	kind: z.literal('lineModel'),
+	/** Name before the dot: symbol "line" gives `line.taper`. */
+	symbol: typed,
+	description: typed,
+	body: bodySchema,
+	density: typed,
+	allowable: typed,
+	factorOfSafety: typed,
+	/** Whether the section at the anchor follows from a lift or is given. */
+	baseMode: baseModeSchema,
+	lift: typed,
+	/** Reserve of lift as a fraction; empty means 0. */
+	reserve: typed,
+	area: typed,
+	/** Height of the top above the surface. */
+	top: typed
+});
+
+export const evidenceFileSchema = z.object({
+	fileId: z.string(),
+	name: z.string(),
+	mediaType: z.string(),
+	size: z.number(),
+	sha256: z.string()
+});
+
+export const evidenceSchema = z.object({
+	...base,
+	kind: z.literal('evidence'),
+	description: typed,
+	files: z.array(evidenceFileSchema)
+});
+
+export const itemSchema = z.discriminatedUnion('kind', [
+	sectionSchema,
+	textSchema,
+	givenSchema,
+	calculationSchema,
+	checkSchema,
+	lineModelSchema,
+	evidenceSchema
+]);
+
+export type Item = z.infer<typeof itemSchema>;
+export type ItemKind = Item['kind'];
+export type ItemOf<K extends ItemKind> = Extract<Item, { kind: K }>;
+
+export const noteContentSchema = z.object({
+	format: z.literal('holdfast-note'),
+	version: z.literal(1),
+	/** Margin below which a check that holds is called thin, as typed. */
+	thinLimit: typed,
+	items: z.array(itemSchema)
+});
+export type NoteContent = z.infer<typeof noteContentSchema>;
+
+/** How each field of a kind is held in the document. */
+export type FieldForm = 'typed' | 'choice' | 'prose' | 'files';
+
+type FieldsOf<K extends ItemKind> = {
+	[F in Exclude<keyof ItemOf<K>, 'id' | 'kind'>]: FieldForm;
+};
+
+export const FIELDS: { [K in ItemKind]: FieldsOf<K> } = {
+	section: { title: 'typed' },
+	text: { body: 'prose' },
+	given: {
+		symbol: 'typed',
+		description: 'typed',
+		value: 'typed',
+		unit: 'typed',
+		uncertainty: 'typed',
+		source: 'typed'
+	},
+	calculation: {
+		symbol: 'typed',
+		description: 'typed',
+		expression: 'typed',
+		unit: 'typed',
+		digits: 'typed'
+	},
+	check: {
+		description: 'typed',
+		left: 'typed',
+		relation: 'choice',
+		right: 'typed',
+		tolerance: 'typed',
+		required: 'typed'
+	},
+	lineModel: {
+		symbol: 'typed',
+		description: 'typed',
+		body: 'choice',
+		density: 'typed',
+		allowable: 'typed',
+		factorOfSafety: 'typed',
+		baseMode: 'choice',
+		lift: 'typed',
+		reserve: 'typed',
+		area: 'typed',
+		top: 'typed'
+	},
+	evidence: { description: 'typed', files: 'files' }
+};
+
+/** A new item of a kind before anybody has typed. */
+export const BLANK: { [K in ItemKind]: Omit<ItemOf<K>, 'id'> } = {
+	section: { kind: 'section', title: '' },
+	text: { kind: 'text', body: { type: 'doc', content: [] } },
+	given: {
+		kind: 'given',
+		symbol: '',
+		description: '',
+		value: '',
+		unit: '',
+		uncertainty: '',
+		source: ''
+	},
+	calculation: {
+		kind: 'calculation',
+		symbol: '',
+		description: '',
+		expression: '',
+		unit: '',
+		digits: ''
+	},
+	check: {
+		kind: 'check',
+		description: '',
+		left: '',
+		relation: 'le',
+		right: '',
+		tolerance: '',
+		required: ''
+	},
+	lineModel: {
+		kind: 'lineModel',
+		symbol: '',
+		description: '',
+		body: 'earth',
+		density: '',
+		allowable: '',
+		factorOfSafety: '',
+		baseMode: 'lift',
+		lift: '',
+		reserve: '',
+		area: '',
+		top: ''
+	},
+	evidence: { kind: 'evidence', description: '', files: [] }
+};
+
+/** What people call each kind. */
+export const KIND_NAMES: Record<ItemKind, string> = {
+	section: 'Section',
+	text: 'Text',
+	given: 'Given',
+	calculation: 'Calculation',
+	check: 'Check',
+	lineModel: 'Line model',
+	evidence: 'Evidence'
+};
