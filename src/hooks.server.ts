@@ -1,0 +1,71 @@
+/**
+ * What happens to every request: who is asking, whether they may be here at all, and how a failure is
+ * told. A thrown `Problem` is an answer (problem+json from /api, a sheet with its words elsewhere);
+ * anything else is logged whole and told with a reference only.
+ */
+import {
+	redirect,
+	type Handle,
+	type HandleServerError,
+	type RequestEvent,
+	type ServerInit
+} from '@sveltejs/kit';
+import { randomBytes } from 'node:crypto';
+import { sessionFromCookie } from '$lib/server/auth/sessions';
+import { log } from '$lib/server/log';
+import { startMail } from '$lib/server/mail/queue';
+import { Problem, problemResponse } from '$lib/server/problems';
+import { settings } from '$lib/server/settings';
+
+export const init: ServerInit = async () => {
+	settings();
+	await startMail();
+};
+
+export const handle: Handle = async ({ event, resolve }) => {
+	const found = await sessionFromCookie(event.request.headers.get('cookie'));
+	event.locals.person = found?.person ?? null;
+	event.locals.sessionId = found?.sessionId ?? null;
+
+	const isApi = event.url.pathname.startsWith('/api/');
+	if (isApi) {
+		const problem = forgedElsewhere(event) ?? (found ? null : notSignedIn);
+		if (problem) return problemResponse(problem);
+	} else if (!found && event.route.id?.startsWith('/(app)')) {
+		const to = event.url.pathname + event.url.search;
+		redirect(303, to === '/' ? '/sign-in' : `/sign-in?to=${encodeURIComponent(to)}`);
+	}
+
+	const response = await resolve(event);
+	const { problem } = event.locals;
+	if (problem && isApi) return problemResponse(problem);
+	// SvelteKit knows no status for a Problem and answers 500.
+	if (problem && response.status === 500)
+		return new Response(response.body, { status: problem.status, headers: response.headers });
+	return response;
+};
+
+const notSignedIn = new Problem(401, 'You are not signed in, or no longer.');
+
+/**
+ * SvelteKit refuses forms posted from other sites; this refuses the rest of what changes something, so
+ * that a page elsewhere in the same registrable domain cannot use a person's cookie either.
+ */
+function forgedElsewhere({ request, url }: RequestEvent): Problem | null {
+	if (request.method === 'GET' || request.method === 'HEAD') return null;
+	const origin = request.headers.get('origin');
+	if (origin === null || origin === url.origin) return null;
+	return new Problem(403, `Requests that change something are not taken from ${origin}.`);
+}
+
+export const handleError: HandleServerError = ({ error, event, status, message }) => {
+	if (error instanceof Problem) {
+		event.locals.problem = error;
+		return { message: error.message, status: error.status };
+	}
+	if (status === 404) return { message: 'There is no page at this address.', status };
+	if (status < 500) return { message, status };
+	const reference = randomBytes(4).toString('hex');
+	log.error({ error, reference, path: event.url.pathname }, 'a request failed');
+	return { message: 'Something went wrong here.', status, reference };
+};
