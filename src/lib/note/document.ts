@@ -1,14 +1,22 @@
 /**
  * The note's document and the edits people make to it.
  *
- * `items: Y.Map<id, Y.Map>`: each item has `kind`, `order` (a fractional index, so that a move is one
- * field and concurrent moves converge) and the fields of its kind. `settings: Y.Map` holds the thin
- * limit. Every edit is one transaction whose origin is the caller's, so that undo takes back one's own.
+ * `items: Y.Map<id, Y.Map>`: each item has `kind`, `order` (see `order.ts`) and the fields of its
+ * kind. `settings: Y.Map` holds the thin limit. Every edit is one transaction whose origin is the
+ * caller's, so that undo takes back one's own.
  */
-import { generateKeyBetween } from 'fractional-indexing';
 import * as Y from 'yjs';
-import { BLANK, FIELDS, type FieldForm, type Item, type ItemKind } from './items';
+import {
+	BLANK,
+	FIELDS,
+	itemIdSchema,
+	type EvidenceFile,
+	type FieldForm,
+	type ItemKind,
+	type ItemOf
+} from './items';
 import { proseToFragment } from './fragment';
+import { keyAfter } from './order';
 
 export type ItemMap = Y.Map<unknown>;
 
@@ -17,48 +25,27 @@ export const settingsMap = (doc: Y.Doc) => doc.getMap<unknown>('settings');
 
 export const DEFAULT_THIN_LIMIT = '0.10';
 
-/** Ids in the order of the sheet. Equal order keys (two inserts at once) fall back to the id. */
-export function orderedIds(doc: Y.Doc): string[] {
-	const keyed: [string, string][] = [];
-	itemsMap(doc).forEach((item, id) => {
-		if (isItem(item)) keyed.push([String(item.get('order') ?? ''), id]);
-	});
-	keyed.sort(([a, i], [b, j]) => (a < b ? -1 : a > b ? 1 : i < j ? -1 : 1));
-	return keyed.map(([, id]) => id);
+/** The kind of a map that is an item of a kind known here; null for anything else. */
+export function kindOf(map: unknown): ItemKind | null {
+	const kind = map instanceof Y.Map ? map.get('kind') : undefined;
+	return typeof kind === 'string' && Object.hasOwn(FIELDS, kind) ? (kind as ItemKind) : null;
 }
 
-/** Whether a map is an item of a kind known here; anything else in the document is passed over. */
-export function isItem(item: unknown): item is ItemMap {
-	return item instanceof Y.Map && Object.hasOwn(FIELDS, String(item.get('kind')));
+/** The item under an id; null where the document holds none, or something that is no item. */
+export function heldItem(doc: Y.Doc, id: string): ItemMap | null {
+	const map: unknown = itemsMap(doc).get(id);
+	return kindOf(map) && itemIdSchema.safeParse(id).success ? (map as ItemMap) : null;
 }
 
-/** The order key for a place below `after` (null: above all). */
-function keyAfter(doc: Y.Doc, after: string | null, skip?: string): string {
-	const ids = orderedIds(doc).filter((id) => id !== skip);
-	const index = after === null ? -1 : ids.indexOf(after);
-	const key = (id: string | undefined) =>
-		id === undefined ? null : String(itemsMap(doc).get(id)!.get('order'));
-	const below = key(index >= 0 ? ids[index] : undefined);
-	// Equal keys leave no room between them: go past all that are equal.
-	const next = ids.slice(index + 1).find((id) => below === null || key(id)! > below);
-	return generateKeyBetween(below, key(next));
-}
-
-export function newItemId(): string {
-	return crypto.randomUUID();
-}
-
-type NewItem = {
-	[K in ItemKind]: { kind: K } & Partial<Omit<Extract<Item, { kind: K }>, 'kind'>>;
+export type NewItem = {
+	[K in ItemKind]: { kind: K } & Partial<Omit<ItemOf<K>, 'kind'>>;
 }[ItemKind];
 
+type Place = { after: string | null; origin?: unknown };
+
 /** Adds an item below `after` (null: at the top) and returns its id. */
-export function addItem(
-	doc: Y.Doc,
-	item: NewItem,
-	{ after, origin = null }: { after: string | null; origin?: unknown }
-): string {
-	const id = item.id ?? newItemId();
+export function addItem(doc: Y.Doc, item: NewItem, { after, origin = null }: Place): string {
+	const id = item.id ?? crypto.randomUUID();
 	const content = { ...BLANK[item.kind], ...item } as Record<string, unknown>;
 	doc.transact(() => {
 		const map: ItemMap = new Y.Map();
@@ -72,6 +59,15 @@ export function addItem(
 	return id;
 }
 
+/** Adds items one below the other and returns their ids. */
+export function addItems(doc: Y.Doc, items: NewItem[], { after, origin = null }: Place): string[] {
+	const ids: string[] = [];
+	doc.transact(() => {
+		for (const item of items) ids.push(addItem(doc, item, { after: ids.at(-1) ?? after, origin }));
+	}, origin);
+	return ids;
+}
+
 function held(form: FieldForm, value: unknown): unknown {
 	switch (form) {
 		case 'typed':
@@ -79,11 +75,11 @@ function held(form: FieldForm, value: unknown): unknown {
 		case 'choice':
 			return value;
 		case 'prose':
-			return proseToFragment(value as Extract<Item, { kind: 'text' }>['body']);
+			return proseToFragment(value as ItemOf<'text'>['body']);
 		case 'files': {
 			const files = new Y.Map<unknown>();
-			(value as Extract<Item, { kind: 'evidence' }>['files']).forEach((file, index) =>
-				files.set(file.fileId, { ...file, position: index })
+			(value as EvidenceFile[]).forEach((file, position) =>
+				files.set(file.fileId, { ...file, position })
 			);
 			return files;
 		}
@@ -91,15 +87,9 @@ function held(form: FieldForm, value: unknown): unknown {
 }
 
 /** Moves an item below `after` (null: to the top). */
-export function moveItem(
-	doc: Y.Doc,
-	id: string,
-	{ after, origin = null }: { after: string | null; origin?: unknown }
-): void {
-	if (after === id) return;
-	const item = itemsMap(doc).get(id);
-	if (!item) return;
-	doc.transact(() => item.set('order', keyAfter(doc, after, id)), origin);
+export function moveItem(doc: Y.Doc, id: string, { after, origin = null }: Place): void {
+	const item = heldItem(doc, id);
+	if (item && after !== id) doc.transact(() => item.set('order', keyAfter(doc, after, id)), origin);
 }
 
 export function removeItem(doc: Y.Doc, id: string, origin: unknown = null): void {
@@ -112,17 +102,32 @@ export function setChoice(
 	field: string,
 	value: string,
 	origin: unknown = null
-) {
-	const item = itemsMap(doc).get(id);
+): void {
+	const item = heldItem(doc, id);
 	if (item) doc.transact(() => item.set(field, value), origin);
 }
 
+export function setThinLimit(doc: Y.Doc, typed: string, origin: unknown = null): void {
+	doc.transact(() => settingsMap(doc).set('thinLimit', typed), origin);
+}
+
+export function putFile(doc: Y.Doc, id: string, file: EvidenceFile, origin: unknown = null): void {
+	const files = heldItem(doc, id)?.get('files');
+	if (files instanceof Y.Map)
+		doc.transact(() => files.set(file.fileId, { ...file, position: files.size }), origin);
+}
+
+export function dropFile(doc: Y.Doc, id: string, fileId: string, origin: unknown = null): void {
+	const files = heldItem(doc, id)?.get('files');
+	if (files instanceof Y.Map) doc.transact(() => files.delete(fileId), origin);
+}
+
 export function textField(doc: Y.Doc, id: string, field: string): Y.Text | null {
-	const text = itemsMap(doc).get(id)?.get(field);
+	const text = heldItem(doc, id)?.get(field);
 	return text instanceof Y.Text ? text : null;
 }
 
 export function proseField(doc: Y.Doc, id: string): Y.XmlFragment | null {
-	const body = itemsMap(doc).get(id)?.get('body');
+	const body = heldItem(doc, id)?.get('body');
 	return body instanceof Y.XmlFragment ? body : null;
 }

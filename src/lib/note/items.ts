@@ -8,8 +8,12 @@
 import { z } from 'zod';
 import { proseSchema } from './prose';
 
-const typed = z.string().max(4000);
-const base = { id: z.string().min(1).max(64) };
+/** Longest text of one field; what a document holds beyond it is cut. */
+export const LONGEST_TYPED = 4000;
+
+const typed = z.string().max(LONGEST_TYPED);
+export const itemIdSchema = z.string().min(1).max(64);
+const base = { id: itemIdSchema };
 
 export const sectionSchema = z.object({ ...base, kind: z.literal('section'), title: typed });
 
@@ -86,12 +90,25 @@ export const evidenceFileSchema = z.object({
 	sha256: z.string()
 });
 
+export type EvidenceFile = z.infer<typeof evidenceFileSchema>;
+
 export const evidenceSchema = z.object({
 	...base,
 	kind: z.literal('evidence'),
 	description: typed,
 	files: z.array(evidenceFileSchema)
 });
+
+/** The schema of each kind, for looking up a single field. */
+export const ITEM_SCHEMAS = {
+	section: sectionSchema,
+	text: textSchema,
+	given: givenSchema,
+	calculation: calculationSchema,
+	check: checkSchema,
+	lineModel: lineModelSchema,
+	evidence: evidenceSchema
+};
 
 export const itemSchema = z.discriminatedUnion('kind', [
 	sectionSchema,

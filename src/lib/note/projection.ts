@@ -1,42 +1,45 @@
 /** The plain JSON of a document: what the engine, the API and a baseline read. */
 import * as Y from 'yjs';
-import {
-	DEFAULT_THIN_LIMIT,
-	isItem,
-	itemsMap,
-	orderedIds,
-	settingsMap,
-	type ItemMap
-} from './document';
+import { DEFAULT_THIN_LIMIT, heldItem, kindOf, settingsMap } from './document';
 import { fragmentToProse } from './fragment';
 import {
 	BLANK,
 	FIELDS,
+	ITEM_SCHEMAS,
 	evidenceFileSchema,
-	itemSchema,
+	type EvidenceFile,
 	type FieldForm,
 	type Item,
-	type ItemKind,
 	type NoteContent
 } from './items';
+import { orderedIds } from './order';
+import { plainText, typedText } from './plain-text';
 
-/** One item as plain JSON; null when the map is no item. A field that is missing or of a wrong form is blank. */
-export function projectItem(id: string, map: ItemMap | undefined): Item | null {
-	if (!isItem(map)) return null;
-	const kind = map.get('kind') as ItemKind;
+/**
+ * One item as plain JSON; null where the document holds no item. A document can hold anything, so
+ * each field is read on its own: one of a wrong form is blank and leaves the others as they are.
+ */
+export function projectItem(doc: Y.Doc, id: string): Item | null {
+	const map = heldItem(doc, id);
+	const kind = kindOf(map);
+	if (!map || !kind) return null;
 	const blank = BLANK[kind] as Record<string, unknown>;
+	const schemas = ITEM_SCHEMAS[kind].shape as Record<
+		string,
+		{ safeParse(value: unknown): { success: boolean; data?: unknown } }
+	>;
 	const item: Record<string, unknown> = { id, kind };
 	for (const [field, form] of Object.entries(FIELDS[kind]) as [string, FieldForm][]) {
-		item[field] = plain(form, map.get(field)) ?? blank[field];
+		const parsed = schemas[field]!.safeParse(plain(form, map.get(field)));
+		item[field] = parsed.success ? parsed.data : blank[field];
 	}
-	const parsed = itemSchema.safeParse(item);
-	return parsed.success ? parsed.data : ({ ...blank, id } as Item);
+	return item as Item;
 }
 
 function plain(form: FieldForm, value: unknown): unknown {
 	switch (form) {
 		case 'typed':
-			return value instanceof Y.Text ? value.toString() : undefined;
+			return value instanceof Y.Text ? typedText(value.toString()) : undefined;
 		case 'choice':
 			return value;
 		case 'prose':
@@ -46,24 +49,30 @@ function plain(form: FieldForm, value: unknown): unknown {
 	}
 }
 
-function plainFiles(files: Y.Map<unknown>) {
+function plainFiles(files: Y.Map<unknown>): EvidenceFile[] {
 	return [...files.values()]
 		.sort((a, b) => position(a) - position(b))
 		.flatMap((file) => {
 			const parsed = evidenceFileSchema.safeParse(file);
-			return parsed.success ? [parsed.data] : [];
+			return parsed.success ? [{ ...parsed.data, name: plainText(parsed.data.name) }] : [];
 		});
 }
 
-const position = (file: unknown) => Number((file as { position?: unknown })?.position ?? 0);
+function position(file: unknown): number {
+	const at = (file as { position?: unknown } | null)?.position;
+	return typeof at === 'number' && Number.isFinite(at) ? at : 0;
+}
+
+export function projectThinLimit(doc: Y.Doc): string {
+	const typed = settingsMap(doc).get('thinLimit');
+	return typeof typed === 'string' ? typedText(typed) : DEFAULT_THIN_LIMIT;
+}
 
 export function projectNote(doc: Y.Doc): NoteContent {
-	const items = itemsMap(doc);
-	const thin = settingsMap(doc).get('thinLimit');
 	return {
 		format: 'holdfast-note',
 		version: 1,
-		thinLimit: typeof thin === 'string' ? thin : DEFAULT_THIN_LIMIT,
-		items: orderedIds(doc).flatMap((id) => projectItem(id, items.get(id)) ?? [])
+		thinLimit: projectThinLimit(doc),
+		items: orderedIds(doc).flatMap((id) => projectItem(doc, id) ?? [])
 	};
 }

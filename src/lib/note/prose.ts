@@ -4,18 +4,30 @@
  */
 import { z } from 'zod';
 
+/**
+ * Where a link may lead: the web, mail, or a page of this site. Anything else (javascript:, data:,
+ * another host written as // or /\\) would run or mislead when somebody follows it.
+ */
+const hrefSchema = z
+	.string()
+	.max(2000)
+	.regex(/^(https?:\/\/|mailto:|\/(?![/\\]))/i);
+
+/** Deepest nesting of lists that is read; a document cannot make readers recurse without end. */
+export const DEEPEST_LIST = 8;
+
 export const markSchema = z.discriminatedUnion('type', [
 	z.object({ type: z.literal('bold') }),
 	z.object({ type: z.literal('italic') }),
 	z.object({ type: z.literal('subscript') }),
 	z.object({ type: z.literal('superscript') }),
-	z.object({ type: z.literal('link'), attrs: z.object({ href: z.string() }) })
+	z.object({ type: z.literal('link'), attrs: z.object({ href: hrefSchema }) })
 ]);
 export type ProseMark = z.infer<typeof markSchema>;
 
 const marks = z.array(markSchema).optional();
 
-const inlineSchema = z.discriminatedUnion('type', [
+export const inlineSchema = z.discriminatedUnion('type', [
 	z.object({ type: z.literal('text'), text: z.string(), marks }),
 	z.object({ type: z.literal('hardBreak'), marks }),
 	/** A formula in TeX, set by KaTeX. */

@@ -1,0 +1,54 @@
+/** Changes of a document as plain items: only what a transaction touched is projected. */
+import * as Y from 'yjs';
+import { itemsMap, settingsMap } from './document';
+import type { Item } from './items';
+import { orderedIds } from './order';
+import { projectItem, projectThinLimit } from './projection';
+
+export type NoteChange = {
+	upsert: Item[];
+	remove: string[];
+	/** All ids in sheet order, where the order or the set of items changed. */
+	order: string[] | null;
+	/** As typed, where it changed. */
+	thinLimit: string | null;
+};
+
+/** Calls the listener once per transaction that changed the note; returns what ends it. */
+export function watchNote(doc: Y.Doc, listener: (change: NoteChange) => void): () => void {
+	const items = itemsMap(doc);
+	const settings = settingsMap(doc);
+
+	const itemsChanged = (events: Y.YEvent<Y.AbstractType<unknown>>[]) => {
+		const touched = new Set<string>();
+		let reordered = false;
+		for (const event of events) {
+			const id = event.path[0];
+			if (id === undefined) {
+				for (const key of event.changes.keys.keys()) touched.add(key);
+				reordered = true;
+			} else {
+				touched.add(String(id));
+				if (event.path.length === 1 && ['order', 'kind'].some((key) => event.changes.keys.has(key)))
+					reordered = true;
+			}
+		}
+		const upsert: Item[] = [];
+		const remove: string[] = [];
+		for (const id of touched) {
+			const item = projectItem(doc, id);
+			if (item) upsert.push(item);
+			else remove.push(id);
+		}
+		listener({ upsert, remove, order: reordered ? orderedIds(doc) : null, thinLimit: null });
+	};
+	const settingsChanged = () =>
+		listener({ upsert: [], remove: [], order: null, thinLimit: projectThinLimit(doc) });
+
+	items.observeDeep(itemsChanged);
+	settings.observe(settingsChanged);
+	return () => {
+		items.unobserveDeep(itemsChanged);
+		settings.unobserve(settingsChanged);
+	};
+}
