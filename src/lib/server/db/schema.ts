@@ -17,7 +17,8 @@ import {
 	timestamp,
 	unique,
 	uniqueIndex,
-	uuid
+	uuid,
+	varchar
 } from 'drizzle-orm/pg-core';
 import type { PinnedValue, Waiver, EvidenceDigest } from '$lib/note/frozen';
 import type { LineMark, CheckCounts } from '$lib/note/summary';
@@ -43,6 +44,10 @@ export const user = pgTable('user', {
 	name: text('name').notNull(),
 	passwordHash: text('password_hash').notNull(),
 	isAdministrator: boolean('is_administrator').notNull().default(false),
+	/** Last use of a session, to a few minutes. */
+	lastHereAt: moment('last_here_at'),
+	/** End of the visit before the present one: what moved since then is news. */
+	lastVisitEndedAt: moment('last_visit_ended_at'),
 	createdAt: createdAt()
 });
 
@@ -67,6 +72,13 @@ export const passwordReset = pgTable('password_reset', {
 	expiresAt: moment('expires_at').notNull(),
 	usedAt: moment('used_at'),
 	createdAt: createdAt()
+});
+
+/** Tries counted against a limit; `key` holds digests of addresses, `expire` is in milliseconds. */
+export const rateLimit = pgTable('rate_limit', {
+	key: varchar('key', { length: 255 }).primaryKey(),
+	points: integer('points').notNull().default(0),
+	expire: bigint('expire', { mode: 'number' })
 });
 
 // Programmes --------------------------------------------------------------------------------------
