@@ -5,10 +5,13 @@ import { z } from 'zod';
 export const pinnedValueSchema = z.object({
 	number: z.string(),
 	symbol: z.string(),
+	symbolTex: z.string(),
 	description: z.string(),
 	/** Value of a quantity or margin of a check in the shown unit; null where there was none. */
 	value: z.number().nullable(),
 	unit: z.string(),
+	/** Significant digits to show. */
+	digits: z.number(),
 	/** State of a check, or why there was no value ("waits for σ_d"). */
 	state: z.string()
 });

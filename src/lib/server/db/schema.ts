@@ -297,7 +297,8 @@ export const remark = pgTable(
 			.notNull()
 			.references(() => note.id, { onDelete: 'cascade' }),
 		itemId: text('item_id').notNull(),
-		/** The item as it was when pinned. */
+		/** The item as the server computed it when pinned, at this update of the document. */
+		seq: bigint('seq', { mode: 'number' }).notNull(),
 		pinned: jsonb('pinned').$type<PinnedValue>().notNull(),
 		authorId: uuid('author_id')
 			.notNull()

@@ -1,0 +1,1 @@
+ALTER TABLE "remark" ADD COLUMN "seq" bigint NOT NULL;
