@@ -1,0 +1,20 @@
+import anchor from './cordillera-anchor';
+import climber from './cordillera-climber';
+import debris from './cordillera-debris';
+import mission from './cordillera-mission';
+import sizing from './cordillera-sizing';
+import tape from './cordillera-tape';
+import type { DemoProgramme } from '.';
+
+/** An Earth line from a floating anchor near the equator, coming up to its PDR. */
+export const cordillera: DemoProgramme = {
+	code: 'CL',
+	title: 'Cordillera Line',
+	summary: 'Earth, ocean-anchored, 14 t climbers',
+	gates: [
+		{ kind: 'SRR', name: 'System requirements review', date: '2026-06-04' },
+		{ kind: 'PDR', name: 'Preliminary design review', date: '2027-02-16' },
+		{ kind: 'CDR', name: 'Critical design review', date: '2027-10-12' }
+	],
+	notes: [mission, tape, climber, sizing, anchor, debris]
+};
