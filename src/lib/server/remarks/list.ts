@@ -1,7 +1,7 @@
 import { and, asc, eq, inArray } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/pg-core';
 import { db } from '../db';
-import { note, noteItem, programme, remark, remarkReply, user } from '../db/schema';
+import { noteItem, remark, remarkReply, user } from '../db/schema';
 
 const author = alias(user, 'author');
 const settler = alias(user, 'settler');
@@ -66,15 +66,4 @@ async function repliesTo(remarkIds: string[]): Promise<Map<string, ReplyView[]>>
 		]);
 	}
 	return threads;
-}
-
-/** The remark with its note and programme; undefined when there is none. */
-export async function findRemark(remarkId: string) {
-	const [found] = await db
-		.select({ remark, note, programme })
-		.from(remark)
-		.innerJoin(note, eq(note.id, remark.noteId))
-		.innerJoin(programme, eq(programme.id, note.programmeId))
-		.where(eq(remark.id, remarkId));
-	return found;
 }
