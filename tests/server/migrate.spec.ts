@@ -1,6 +1,6 @@
 import pg from 'pg';
 import { expect, inject, test } from 'vitest';
-import { migrateDatabase } from '../../server/launch/migrate';
+import { migrateDatabase, pendingMigrations } from '../../server/launch/migrate';
 import { openConnections } from './database';
 
 async function freshDatabase(name: string): Promise<string> {
@@ -15,7 +15,9 @@ async function freshDatabase(name: string): Promise<string> {
 
 test('processes that start at once migrate a database once', async () => {
 	const url = await freshDatabase('migrated_at_once');
+	expect(await pendingMigrations(url)).toBeGreaterThan(0);
 	await Promise.all([migrateDatabase(url), migrateDatabase(url), migrateDatabase(url)]);
+	expect(await pendingMigrations(url)).toBe(0);
 
 	const client = new pg.Client({ connectionString: url });
 	await client.connect();

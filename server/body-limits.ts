@@ -1,0 +1,39 @@
+/**
+ * How much a request may carry. Attack stopped here: filling the memory of the process with bodies,
+ * before anybody has signed in.
+ */
+import type { IncomingMessage, ServerResponse } from 'node:http';
+
+const KB = 1024;
+/** Forms and JSON. */
+const LIMIT = 512 * KB;
+
+const UPLOAD = /^\/api\/notes\/[^/?]+\/evidence(\?|$)/;
+
+type Refusal = { send(response: ServerResponse): void };
+
+/** Evidence has its own limit: it is streamed to the store and does not gather here. */
+export function bodyRefusal(request: IncomingMessage, evidenceMaxMb: number): Refusal | null {
+	const isUpload = request.method === 'POST' && UPLOAD.test(request.url ?? '');
+	const length = request.headers['content-length'];
+	if (length === undefined) {
+		// The uploading route counts for itself.
+		if (isUpload || !request.headers['transfer-encoding']) return null;
+		return refusal(411, 'The request does not say how long it is (Content-Length).');
+	}
+	const limit = isUpload ? evidenceMaxMb * KB * KB : LIMIT;
+	if (Number(length) <= limit) return null;
+	const most = isUpload ? `${evidenceMaxMb} MB` : `${limit / KB} kB`;
+	return refusal(413, `The request carries more than ${most}.`);
+}
+
+function refusal(status: 411 | 413, detail: string): Refusal {
+	const title = status === 413 ? 'Too large' : 'Length required';
+	return {
+		send(response) {
+			response
+				.writeHead(status, { 'content-type': 'application/problem+json', connection: 'close' })
+				.end(JSON.stringify({ type: 'about:blank', title, status, detail }));
+		}
+	};
+}
