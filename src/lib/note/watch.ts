@@ -14,12 +14,15 @@ export type NoteChange = {
 	thinLimit: string | null;
 };
 
-/** Calls the listener once per transaction that changed the note; returns what ends it. */
-export function watchNote(doc: Y.Doc, listener: (change: NoteChange) => void): () => void {
+/** Called with a change and the origin of the transaction that made it. */
+export type NoteListener = (change: NoteChange, origin: unknown) => void;
+
+/** Calls the listener for every transaction that changed the note; returns what ends it. */
+export function watchNote(doc: Y.Doc, listener: NoteListener): () => void {
 	const items = itemsMap(doc);
 	const settings = settingsMap(doc);
 
-	const itemsChanged = (events: Y.YEvent<Y.AbstractType<unknown>>[]) => {
+	const itemsChanged = (events: Y.YEvent<Y.AbstractType<unknown>>[], { origin }: Y.Transaction) => {
 		const touched = new Set<string>();
 		let reordered = false;
 		for (const event of events) {
@@ -40,10 +43,13 @@ export function watchNote(doc: Y.Doc, listener: (change: NoteChange) => void): (
 			if (item) upsert.push(item);
 			else remove.push(id);
 		}
-		listener({ upsert, remove, order: reordered ? orderedIds(doc) : null, thinLimit: null });
+		listener(
+			{ upsert, remove, order: reordered ? orderedIds(doc) : null, thinLimit: null },
+			origin
+		);
 	};
-	const settingsChanged = () =>
-		listener({ upsert: [], remove: [], order: null, thinLimit: projectThinLimit(doc) });
+	const settingsChanged = (_event: unknown, { origin }: Y.Transaction) =>
+		listener({ upsert: [], remove: [], order: null, thinLimit: projectThinLimit(doc) }, origin);
 
 	items.observeDeep(itemsChanged);
 	settings.observe(settingsChanged);
