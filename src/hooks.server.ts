@@ -12,6 +12,7 @@ import {
 } from '@sveltejs/kit';
 import { randomBytes } from 'node:crypto';
 import { sessionFromCookie } from '$lib/server/auth/sessions';
+import { startSweeping } from '$lib/server/auth/sweep';
 import { log } from '$lib/server/log';
 import { startMail } from '$lib/server/mail/queue';
 import { Problem, problemResponse } from '$lib/server/problems';
@@ -20,6 +21,7 @@ import { settings } from '$lib/server/settings';
 export const init: ServerInit = async () => {
 	settings();
 	await startMail();
+	startSweeping();
 };
 
 export const handle: Handle = async ({ event, resolve }) => {
@@ -36,14 +38,20 @@ export const handle: Handle = async ({ event, resolve }) => {
 		redirect(303, to === '/' ? '/sign-in' : `/sign-in?to=${encodeURIComponent(to)}`);
 	}
 
-	const response = await resolve(event);
-	const { problem } = event.locals;
-	if (problem && isApi) return problemResponse(problem);
-	// SvelteKit knows no status for a Problem and answers 500.
-	if (problem && response.status === 500)
-		return new Response(response.body, { status: problem.status, headers: response.headers });
+	const response = told(await resolve(event), event.locals.problem, isApi);
+	// Links with a secret in their path are told to no other site, and no file is run as another kind.
+	response.headers.set('referrer-policy', 'same-origin');
+	response.headers.set('x-content-type-options', 'nosniff');
 	return response;
 };
+
+/** SvelteKit knows no status for a Problem and answers 500. */
+function told(response: Response, problem: Problem | undefined, isApi: boolean): Response {
+	if (!problem) return response;
+	if (isApi) return problemResponse(problem);
+	const { body, status, headers } = response;
+	return new Response(body, { status: status === 500 ? problem.status : status, headers });
+}
 
 const notSignedIn = new Problem(401, 'You are not signed in, or no longer.');
 

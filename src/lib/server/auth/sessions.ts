@@ -6,7 +6,7 @@
  * decides, because use over the socket prolongs a session and cannot set a cookie.
  */
 import { DrizzlePostgreSQLAdapter } from '@lucia-auth/adapter-drizzle';
-import { and, eq, ne } from 'drizzle-orm';
+import { and, eq, ne, sql } from 'drizzle-orm';
 import { Lucia, TimeSpan } from 'lucia';
 import { db, type Db } from '../db';
 import { session, user } from '../db/schema';
@@ -62,9 +62,23 @@ export async function sessionFromCookie(
 	if (!found.session) return null;
 	const { id, email, name, isAdministrator } = found.user;
 	const expiry = new Date(Date.now() + LIFE.milliseconds());
-	if (expiry.getTime() - found.session.expiresAt.getTime() > GRAIN)
+	if (expiry.getTime() - found.session.expiresAt.getTime() > GRAIN) {
 		await adapter.updateSessionExpiration(sessionId, expiry);
+		await recordUse(id);
+	}
 	return { person: { id, email, name, isAdministrator }, sessionId };
+}
+
+/** A visit ends when half an hour passes without use. */
+async function recordUse(userId: string): Promise<void> {
+	const newVisit = sql`${user.lastHereAt} < now() - interval '30 minutes'`;
+	await db
+		.update(user)
+		.set({
+			lastVisitEndedAt: sql`case when ${newVisit} then ${user.lastHereAt} else ${user.lastVisitEndedAt} end`,
+			lastHereAt: sql`now()`
+		})
+		.where(eq(user.id, userId));
 }
 
 /** Name, value and attributes of a cookie, as SvelteKit's `cookies.set` takes them. */
@@ -84,6 +98,7 @@ export async function startSession(
 	userId: string
 ): Promise<{ sessionId: string; cookie: SessionCookie }> {
 	const { id } = await lucia().createSession(userId, {});
+	await recordUse(userId);
 	return { sessionId: id, cookie: asCookie(lucia().createSessionCookie(id)) };
 }
 
