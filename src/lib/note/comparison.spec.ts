@@ -44,7 +44,7 @@ const check = (
 	right: gigapascal(50),
 	tolerance: null,
 	required: 0,
-	margin: { kind: 'ratio', value: margin, unit: '' },
+	margin: { kind: 'ratio', value: margin, unit: '', relative: margin },
 	shortBy: null,
 	faults: [],
 	tex: '',

@@ -1,5 +1,4 @@
 /** Two baselines, or a baseline and now, held against each other: what moved, by what, and what reads otherwise. */
-import type { CheckResult } from '../engine/calc/results';
 import { changedFields, readingMoved, readingsOf, relativeChange } from './readings';
 import type { Reading, Side } from './readings';
 import { FIELD_WORDS } from './compare';
@@ -122,9 +121,7 @@ const mostFirst = (a: Movement, b: Movement) =>
 function weight({ before, after, change }: Omit<Movement, 'cause'>): number {
 	if (change === null) return Infinity;
 	if (change !== 0) return Math.abs(change);
-	const ratio = (margin: CheckResult['margin'] | undefined) =>
-		margin?.kind === 'ratio' ? margin.value : 0;
-	return Math.abs(ratio(after.check?.margin) - ratio(before.check?.margin));
+	return Math.abs((after.check?.margin?.relative ?? 0) - (before.check?.margin?.relative ?? 0));
 }
 
 function wording(before: Item, { item, number }: Entry, field: string): Wording {

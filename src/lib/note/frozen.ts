@@ -1,5 +1,6 @@
 /** Shapes that are kept as they were: what a remark was pinned to, what a baseline was frozen with. */
 import { z } from 'zod';
+import { plainText } from './plain-text';
 
 /** An item as it stood when a remark was pinned to it. Figures are in the unit that was shown. */
 export const pinnedValueSchema = z.object({
@@ -20,7 +21,15 @@ export type PinnedValue = z.infer<typeof pinnedValueSchema>;
 /** Why a failing check may be frozen. */
 export const waiverSchema = z.object({
 	itemId: z.string(),
-	reason: z.string().trim().min(10, 'A waiver says why, in at least ten characters.').max(2000)
+	reason: z
+		.string()
+		.transform((text) => plainText(text).trim())
+		.pipe(
+			z
+				.string()
+				.min(10, 'A waiver says why, in at least ten characters.')
+				.max(2000, 'A waiver has at most 2 000 characters.')
+		)
 });
 export type Waiver = z.infer<typeof waiverSchema>;
 

@@ -1,5 +1,5 @@
 /** The figures of an item, one by one, and how far they moved. */
-import type { CheckResult, ItemResult, Outcome } from '../engine/calc/results';
+import type { CheckResult, Dimension, ItemResult, Outcome } from '../engine/calc/results';
 import { canonicalJson, sameFigure } from './canonical';
 import { FIELDS, type FieldForm, type Item, type NoteContent } from './items';
 
@@ -50,11 +50,15 @@ export function readingsOf(item: Item, result: ItemResult | undefined): Reading[
 export function relativeChange(before: Outcome, after: Outcome): number | null {
 	if (before.state !== 'value' || after.state !== 'value') return null;
 	const [from, to] = [before.quantity, after.quantity];
-	if (String(from.dimension) !== String(to.dimension)) return null;
+	if (!sameDimension(from.dimension, to.dimension)) return null;
 	if (sameFigure(from.si, to.si)) return 0;
 	const change = (to.si - from.si) / Math.abs(from.si);
 	return Number.isFinite(change) ? change : null;
 }
+
+/** A third as an exponent is 0.333333333333 in a baseline, with more digits in a fresh result. */
+const sameDimension = (a: Dimension, b: Dimension) =>
+	a.every((exponent, index) => Math.abs(exponent - (b[index] ?? 0)) < 1e-6);
 
 export function outcomeMoved(before: Outcome, after: Outcome): boolean {
 	if (before.state === 'value' && after.state === 'value') {

@@ -1,0 +1,12 @@
+/** What a lead sends to freeze a note. */
+import { z } from 'zod';
+import { waiverSchema } from '$lib/note/frozen';
+
+export const freezeInput = z.object({
+	gateId: z.guid('Choose the gate at which the note is frozen.'),
+	/** The revision that the lead means to freeze, and the update at which they looked. */
+	revision: z.string().min(1).max(8),
+	seenSeq: z.int().min(0),
+	waivers: z.array(waiverSchema).max(1000)
+});
+export type FreezeInput = z.infer<typeof freezeInput>;
