@@ -2,6 +2,8 @@
  * A stand-in for the S3-compatible store, for the demo and the tests: files in a folder.
  * It verifies no signatures, so it listens on loopback only and never runs in production.
  */
+import { rm } from 'node:fs/promises';
+import { basename, join } from 'node:path';
 import S3rver from 's3rver';
 
 export type S3Fake = { environment: Record<string, string>; stop(): Promise<void> };
@@ -14,6 +16,7 @@ export async function startS3Fake(folder: string, port: number, bucket: string):
 		silent: true,
 		configureBuckets: [{ name: bucket, configs: [] }]
 	});
+	server.middleware.unshift(abortMultipartUpload(folder));
 	await server.run();
 	return {
 		environment: {
@@ -28,5 +31,16 @@ export async function startS3Fake(folder: string, port: number, bucket: string):
 			server.httpServer?.closeAllConnections();
 			await server.close();
 		}
+	};
+}
+
+/** AbortMultipartUpload, which s3rver does not answer: forgets the parts of an upload. */
+function abortMultipartUpload(folder: string): S3rver['middleware'][number] {
+	return async (context, next) => {
+		const id = new URL(context.url, 'http://fake').searchParams.get('uploadId');
+		if (context.method !== 'DELETE' || !id) return next();
+		const bucket = basename(context.path.split('/')[1] ?? '');
+		await rm(join(folder, bucket, '._S3rver_uploads', basename(id)), { recursive: true });
+		context.status = 204;
 	};
 }

@@ -11,6 +11,10 @@ declare module 's3rver' {
 			configureBuckets: { name: string; configs: string[] }[];
 		});
 		httpServer?: Server;
+		middleware: ((
+			context: { method: string; url: string; path: string; status: number },
+			next: () => Promise<void>
+		) => Promise<void>)[];
 		run(): Promise<unknown>;
 		close(): Promise<void>;
 	}

@@ -8,6 +8,7 @@
 import { chown, mkdir, readdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { existsSync } from 'node:fs';
 import { join } from 'node:path';
+import { setTimeout as pause } from 'node:timers/promises';
 import { freePort } from './ports';
 import { run, type Outcome } from './run';
 
@@ -64,9 +65,11 @@ export async function startCluster(plan: ClusterPlan): Promise<Cluster> {
 
 	const log = join(plan.folder, 'server.log');
 	let outcome: Outcome = { code: 1, output: '' };
-	// Somebody else may take the port between the look and the start, and a server that was killed a
-	// moment ago may still hold its shared memory: both pass.
-	for (let attempt = 0; attempt < 5; attempt++) {
+	// Somebody else may take the port between the look and the start, and the children of a server that
+	// was killed a moment ago still hold its memory: both pass.
+	for (let attempt = 0; attempt < 10; attempt++) {
+		if (attempt > 0) await pause(400);
+		await removeForeignPidFile(plan.folder);
 		const port = await freePort(attempt === 0 ? plan.preferredPort : 0);
 		const options = [
 			`-c listen_addresses=127.0.0.1 -p ${port} -c unix_socket_directories=''`,
@@ -114,10 +117,20 @@ async function create(
 	}
 }
 
-/** The port in the server's own pid file, its fourth line; stale after a power cut or `kill -9`. */
+/** Lines of the server's own pid file; stale after a power cut or `kill -9`. */
+async function pidFile(folder: string): Promise<string[]> {
+	return (await readFile(join(folder, 'postmaster.pid'), 'utf8').catch(() => '')).split('\n');
+}
+
 async function runningPort(folder: string): Promise<number | null> {
-	const text = await readFile(join(folder, 'postmaster.pid'), 'utf8').catch(() => '');
-	return Number(text.split('\n')[3]) || null;
+	return Number((await pidFile(folder))[3]) || null;
+}
+
+/** After a restart of the machine the pid may be another program's, which PostgreSQL takes for itself. */
+async function removeForeignPidFile(folder: string): Promise<void> {
+	const [pid] = await pidFile(folder);
+	const program = await readFile(`/proc/${pid}/comm`, 'utf8').catch(() => null);
+	if (pid && program && program.trim() !== 'postgres') await rm(join(folder, 'postmaster.pid'));
 }
 
 async function ready(programs: string, port: number): Promise<boolean> {

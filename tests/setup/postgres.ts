@@ -23,6 +23,8 @@ declare module 'vitest' {
 		adminUrl: string;
 		/** S3_* variables of the fake store. */
 		store: Record<string, string>;
+		/** Where the fake keeps its files. */
+		storeFolder: string;
 	}
 }
 
@@ -30,6 +32,7 @@ export default async function setup(project: TestProject) {
 	const run = await startTestServices();
 	project.provide('adminUrl', run.adminUrl);
 	project.provide('store', run.store);
+	project.provide('storeFolder', run.storeFolder);
 	return run.stop;
 }
 
@@ -56,6 +59,7 @@ export async function startTestServices() {
 	return {
 		adminUrl,
 		store: store.environment,
+		storeFolder: objects,
 		databaseUrl: cluster.url,
 		async stop() {
 			await store.stop();
