@@ -32,7 +32,7 @@ function refusal(status: 411 | 413, detail: string): Refusal {
 	return {
 		send(response) {
 			response
-				.writeHead(status, { 'content-type': 'application/problem+json', connection: 'close' })
+				.writeHead(status, { 'content-type': 'application/problem+json' })
 				.end(JSON.stringify({ type: 'about:blank', title, status, detail }));
 		}
 	};

@@ -32,12 +32,21 @@ export function inspect(
 		return chunk;
 	}
 
+	async function recognise(head: Uint8Array): Promise<void> {
+		try {
+			kind = await recogniseKind(head, name);
+		} catch (error) {
+			refusal = error as Problem;
+		}
+	}
+
 	async function* pass(): AsyncGenerator<Uint8Array> {
 		let head: Uint8Array[] | null = [];
 		for await (const chunk of source) {
 			size += chunk.length;
-			if (size > maxMb * 1024 * 1024)
-				throw new Problem(413, `${name} is larger than ${maxMb} MB, the most that is taken.`);
+			if (size > maxMb * 1024 * 1024) throw (refusal = tooLarge(name, maxMb));
+			// The rest of what is refused is still read: a browser hears the answer only when it has sent all.
+			if (refusal) continue;
 			if (!head) {
 				yield note(chunk);
 				continue;
@@ -46,27 +55,20 @@ export function inspect(
 			if (size < HEAD) continue;
 			const first = Buffer.concat(head);
 			head = null;
-			kind = await recogniseKind(first, name);
-			yield note(first);
+			await recognise(first);
+			if (!refusal) yield note(first);
 		}
-		if (size === 0) throw new Problem(422, `${name} is empty.`);
-		if (!head) return;
-		const whole = Buffer.concat(head);
-		kind = await recogniseKind(whole, name);
-		yield note(whole);
-	}
-
-	async function* guarded(): AsyncGenerator<Uint8Array> {
-		try {
-			yield* pass();
-		} catch (error) {
-			if (error instanceof Problem) refusal = error;
-			throw error;
+		if (head) {
+			const whole = Buffer.concat(head);
+			if (size === 0) refusal = new Problem(422, `${name} is empty.`);
+			else await recognise(whole);
+			if (!refusal) yield note(whole);
 		}
+		if (refusal) throw refusal;
 	}
 
 	return {
-		bytes: guarded(),
+		bytes: pass(),
 		refusal: () => refusal,
 		findings() {
 			const textAfterAll = isText && decodes(utf8);
@@ -75,6 +77,9 @@ export function inspect(
 		}
 	};
 }
+
+const tooLarge = (name: string, maxMb: number) =>
+	new Problem(413, `${name} is larger than ${maxMb} MB, the most that is taken.`);
 
 /** Without a chunk: whether the text ended with a whole character. */
 function decodes(utf8: TextDecoder, chunk?: Uint8Array): boolean {

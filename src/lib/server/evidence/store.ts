@@ -30,11 +30,14 @@ export async function putObject(key: string, bytes: AsyncIterable<Uint8Array>): 
 	await upload.done();
 }
 
+/** Node's web streams can be iterated over; the browser's types do not say so. */
+export type Bytes = ReadableStream<Uint8Array> & AsyncIterable<Uint8Array>;
+
 /** The bytes from `first` to `last`, both included; null when the store lacks the object. */
 export async function getObject(
 	key: string,
 	{ first, last }: { first: number; last: number }
-): Promise<ReadableStream<Uint8Array> | null> {
+): Promise<Bytes | null> {
 	try {
 		const { Body } = await client().send(
 			new GetObjectCommand({
@@ -43,7 +46,7 @@ export async function getObject(
 				Range: `bytes=${first}-${last}`
 			})
 		);
-		return Body?.transformToWebStream() ?? null;
+		return (Body?.transformToWebStream() as Bytes | undefined) ?? null;
 	} catch (error) {
 		if (error instanceof NoSuchKey) return null;
 		throw error;

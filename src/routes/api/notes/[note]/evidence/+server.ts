@@ -1,6 +1,7 @@
 import { json } from '@sveltejs/kit';
 import { requireNote } from '$lib/server/auth/guard';
 import { fileName, storeEvidence } from '$lib/server/evidence/evidence';
+import type { Bytes } from '$lib/server/evidence/store';
 import { Problem } from '$lib/server/problems';
 
 /** The body is the file as it is; `?name=` is its name. */
@@ -14,7 +15,7 @@ export async function POST(event) {
 		noteId: note.id,
 		userId: person.id,
 		name: name.data,
-		body: event.request.body
+		body: event.request.body as Bytes
 	});
 	return json(file, { status: 201 });
 }
