@@ -1,11 +1,8 @@
 /** What the sheet answers for each item. Plain data: it crosses from a worker and is kept in baselines. */
 
-/**
- * Exponents of the base dimensions: mass, length, time, temperature, current, amount, luminous
- * intensity, angle, information. Angle is kept as a dimension of its own only for display of units;
- * see `quantities/dimension` for how the engine treats it.
- */
-export type Dimension = readonly number[];
+import type { Dimension } from '../quantities/dimension';
+
+export type { Dimension };
 
 /** A value that could be computed. Never NaN or Infinity. */
 export type Quantity = {
@@ -53,6 +50,8 @@ export type Fault = {
 	span: Span | null;
 	/** Names near an unknown one, best first. */
 	near: string[];
+	/** Other items that it is about: where else a symbol is defined, what else stands in a cycle. */
+	items: string[];
 };
 
 /** A quantity, or the reason why there is none. */
@@ -95,6 +94,8 @@ export type CheckResult = Common & {
 		kind: 'ratio' | 'difference';
 		value: number;
 		unit: string;
+		/** The margin as a pure number: what the thin limit and the width of the line go by. */
+		relative: number;
 	} | null;
 	/** For a failing check: by how much, in a unit to show, e.g. "2.8 GPa". */
 	shortBy: { value: number; unit: string } | null;

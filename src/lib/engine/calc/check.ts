@@ -1,0 +1,168 @@
+/** A check: left ≤ right, left ≥ right, or left within right ± tolerance. */
+import { equal, inWords, isPure } from '../quantities/dimension';
+import { fromSi, parseUnit } from '../quantities/units';
+import { conditionTex } from './condition-tex';
+import { fault } from './faults';
+import type { Formula, FormulaOutcome } from './formula';
+import type { ValueType } from './infer';
+import type { CheckItem } from './items';
+import { marginKind, marginOf } from './margin';
+import { DEFAULT_DIGITS, shown } from './quantity';
+import type { CheckResult, Fault, Outcome } from './results';
+import type { Scope } from './scope';
+
+export type CheckFormulas = Record<'left' | 'right' | 'tolerance' | 'required', Formula>;
+type Body = Omit<CheckResult, 'id' | 'kind' | 'uses' | 'usedIn'>;
+type Value = FormulaOutcome & { state: 'value' };
+type Figures = { left: Value; right: Value; tolerance: Value | null; required: Value | null };
+
+/** Equal to twelve digits is equal: exp and log differ in the last one between platforms. */
+const TWELVE_DIGITS = 1e-12;
+
+export function evaluateCheck(
+	item: CheckItem,
+	formulas: CheckFormulas,
+	scope: Scope,
+	thinLimit: number
+): Body {
+	const left = formulas.left.evaluate(scope);
+	const right = formulas.right.evaluate(scope);
+	const tolerance = item.relation === 'within' ? formulas.tolerance.evaluate(scope) : null;
+	const required = formulas.required.blank ? null : formulas.required.evaluate(scope);
+	const waiting: Body = {
+		state: 'waits',
+		left: alone(left),
+		right: alone(right),
+		tolerance: tolerance && alone(tolerance),
+		required: 0,
+		margin: null,
+		shortBy: null,
+		faults: [left, right, tolerance, required].flatMap((side) =>
+			side?.state === 'fault' ? side.faults : []
+		),
+		tex: conditionTex(item.relation, formulas, null)
+	};
+	if (left.state !== 'value' || right.state !== 'value') return waiting;
+	if (tolerance && tolerance.state !== 'value') return waiting;
+	if (required && required.state !== 'value') return waiting;
+	return decide(item, formulas, { left, right, tolerance, required }, thinLimit, waiting);
+}
+
+/** A side shown by itself, in a unit of its own. */
+function alone(side: FormulaOutcome): Outcome {
+	if (side.state !== 'value') return side;
+	return shown(side.si, side.type, { unit: '', hint: side.unit, digits: digitsOf(side) });
+}
+
+const digitsOf = (side: Value) => side.digits ?? DEFAULT_DIGITS;
+
+function decide(
+	item: CheckItem,
+	formulas: CheckFormulas,
+	figures: Figures,
+	thinLimit: number,
+	waiting: Body
+): Body {
+	const { left, right, tolerance, required } = figures;
+	const lead = formulas.right.isZero ? left : right;
+	const misfit = unfitSide(formulas, figures, lead.type);
+	if (misfit) return { ...waiting, faults: [misfit] };
+
+	const unit = commonUnit(lead, left);
+	const show = (side: Value) => shown(side.si, lead.type, { unit, digits: digitsOf(side) });
+	const sides = {
+		left: show(left),
+		right: show(right),
+		tolerance: tolerance && show(tolerance)
+	};
+	const given = {
+		relation: item.relation,
+		left: left.si,
+		right: right.si,
+		tolerance: tolerance?.si ?? 0,
+		required: required?.si ?? 0,
+		pure: isPure(lead.type.dimension)
+	};
+	const unfit = required && unfitRequired(formulas.required, required, given, lead.type);
+	if (unfit) return { ...waiting, ...sides, faults: [unfit] };
+
+	const margin = marginOf(given);
+	const ratio = margin.kind === 'ratio';
+	const slack = TWELVE_DIGITS * (ratio ? 1 : Math.max(Math.abs(left.si), Math.abs(right.si)));
+	const holds = margin.size >= given.required - slack;
+	const thin = margin.relative < thinLimit - TWELVE_DIGITS;
+	const inUnit = (si: number) => difference(si, unit);
+	return {
+		...waiting,
+		...sides,
+		state: !holds ? 'fails' : thin ? 'thin' : 'holds',
+		required: ratio ? given.required : inUnit(given.required),
+		margin: {
+			kind: margin.kind,
+			value: ratio ? margin.size : inUnit(margin.size),
+			unit: ratio ? '' : unit,
+			relative: margin.relative
+		},
+		shortBy: holds ? null : { value: inUnit(margin.shortBy), unit },
+		tex: conditionTex(item.relation, formulas, { ...sides, unit })
+	};
+}
+
+/** The unit in which both sides are shown: that of the right side as long as it has a size of its own. */
+function commonUnit(lead: Value, left: Value): string {
+	const side = lead.si === 0 ? left : lead;
+	const measure = shown(side.si, lead.type, {
+		unit: '',
+		hint: lead.unit ?? left.unit,
+		digits: DEFAULT_DIGITS
+	});
+	return measure.state === 'value' ? measure.quantity.unit : '';
+}
+
+/** A length of the scale, without its zero: 10 K is 10 °C apart. */
+function difference(si: number, unit: string): number {
+	const parsed = parseUnit(unit);
+	return parsed.ok ? fromSi(si, { ...parsed.unit, offset: 0 }) : si;
+}
+
+function unfitSide(formulas: CheckFormulas, figures: Figures, type: ValueType): Fault | null {
+	const { left, tolerance } = figures;
+	if (!formulas.left.isZero && !equal(left.type.dimension, type.dimension)) {
+		return fault(
+			'dimension',
+			`The two sides cannot be compared: the left is ${inWords(left.type.dimension)}, ` +
+				`the right ${inWords(figures.right.type.dimension)}.`
+		);
+	}
+	if (!tolerance) return null;
+	if (tolerance.si < 0) return fault('domain', 'A tolerance is not negative.');
+	if (formulas.tolerance.isZero || equal(tolerance.type.dimension, type.dimension)) return null;
+	return fault(
+		'dimension',
+		`The tolerance is ${inWords(tolerance.type.dimension)}, the sides are ${inWords(type.dimension)}.`
+	);
+}
+
+function unfitRequired(
+	formula: Formula,
+	required: Value,
+	sides: Parameters<typeof marginKind>[0],
+	type: ValueType
+): Fault | null {
+	if (formula.isZero) return null;
+	if (marginKind(sides) === 'ratio') {
+		if (!isPure(required.type.dimension)) {
+			return fault(
+				'dimension',
+				`The required margin is ${inWords(required.type.dimension)}; the margin is a pure number.`
+			);
+		}
+		if (required.si > -1) return null;
+		return fault('domain', 'A required margin of −1 or less asks for nothing.');
+	}
+	if (equal(required.type.dimension, type.dimension)) return null;
+	return fault(
+		'dimension',
+		`The required margin is ${inWords(required.type.dimension)}; the margin is ${inWords(type.dimension)}.`
+	);
+}

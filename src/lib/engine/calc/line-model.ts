@@ -1,0 +1,195 @@
+/** A line model in its first form: the constant-stress taper on one body, with its refusals in words. */
+import {
+	AREA,
+	DENSITY,
+	LENGTH,
+	MASS,
+	PRESSURE,
+	PURE,
+	equal,
+	inWords,
+	type Dimension
+} from '../quantities/dimension';
+import { formatFigure } from '../quantities/format';
+import { BODIES } from '../line/bodies';
+import { bodyField, type Field } from '../line/field';
+import { profileTaper, sizeTaper, type TaperInput, type Told } from '../line/taper';
+import { fault } from './faults';
+import type { Formula, FormulaOutcome } from './formula';
+import { valueType } from './infer';
+import type { LineModelItem } from './items';
+import { OUTPUTS } from './model-outputs';
+import { DEFAULT_DIGITS, shown } from './quantity';
+import type { Fault, LineModelResult, ModelOutput, Outcome } from './results';
+import type { Scope } from './scope';
+import { warnings } from './model-warnings';
+
+export const MODEL_FIELDS = [
+	'density',
+	'allowable',
+	'factorOfSafety',
+	'lift',
+	'area',
+	'reserve',
+	'top'
+] as const;
+export type ModelField = (typeof MODEL_FIELDS)[number];
+export type ModelFormulas = Record<ModelField, Formula>;
+
+type Body = Omit<LineModelResult, 'id' | 'kind' | 'uses' | 'usedIn' | 'symbol'>;
+
+const WANTED: Record<ModelField, { what: string; dimension: Dimension; atLeast: 'above 0' | '0' }> =
+	{
+		density: { what: 'density', dimension: DENSITY, atLeast: 'above 0' },
+		allowable: { what: 'allowable', dimension: PRESSURE, atLeast: 'above 0' },
+		factorOfSafety: { what: 'factor of safety', dimension: PURE, atLeast: 'above 0' },
+		lift: { what: 'lift', dimension: MASS, atLeast: 'above 0' },
+		area: { what: 'section at the anchor', dimension: AREA, atLeast: 'above 0' },
+		reserve: { what: 'reserve', dimension: PURE, atLeast: '0' },
+		top: { what: 'height of the top', dimension: LENGTH, atLeast: 'above 0' }
+	};
+
+/** The fields that the chosen way of sizing reads. */
+export const fieldsRead = (item: LineModelItem): ModelField[] =>
+	MODEL_FIELDS.filter((field) => field !== (item.baseMode === 'lift' ? 'area' : 'lift'));
+
+export function evaluateLineModel(
+	item: LineModelItem,
+	formulas: ModelFormulas,
+	scope: Scope,
+	/** What speaks against the model as a whole: its symbol, or a cycle. */
+	objection: Fault | null
+): Body {
+	const fields = fieldsRead(item);
+	const found = fields.map((field) => ({ field, outcome: formulas[field].evaluate(scope) }));
+	const faults = found.flatMap(({ field, outcome }) =>
+		inputFaults(field, outcome).map((fault) => ({ field: field as string, fault }))
+	);
+	if (objection)
+		faults.unshift({ field: objection.code === 'cycle' ? '' : 'symbol', fault: objection });
+	const waits = found.flatMap(({ outcome }) => (outcome.state === 'waits' ? [outcome] : []));
+	const inputs = found.map(({ field, outcome }) => ({
+		field,
+		outcome: inputShown(field, outcome),
+		tex: formulas[field].tex
+	}));
+	const without = (reason: Outcome, more: Partial<Body> = {}): Body => ({
+		faults,
+		waitsFor: [],
+		inputs,
+		outputs: OUTPUTS.map((output) => describe(output, reason)),
+		profile: null,
+		warnings: [],
+		...more
+	});
+	if (faults.length > 0) return without({ state: 'waits', for: [], rootIds: [item.id] });
+	if (waits.length > 0) {
+		const waitsFor = [...new Set(waits.flatMap((outcome) => outcome.for))];
+		const rootIds = [...new Set(waits.flatMap((outcome) => outcome.rootIds))];
+		return without({ state: 'waits', for: waitsFor, rootIds }, { waitsFor });
+	}
+	const values = Object.fromEntries(
+		found.map(({ field, outcome }) => [field, outcome.state === 'value' ? outcome.si : null])
+	) as Partial<Record<ModelField, number | null>>;
+	const input = taperInput(values, BODIES[item.body].radius.value);
+	if (!input) return without({ state: 'blank' });
+
+	const field = bodyField(BODIES[item.body]);
+	const refusal = topRefusal(field, input.top);
+	if (refusal) {
+		const reason = { field: '', fault: refusal };
+		return without({ state: 'waits', for: [], rootIds: [item.id] }, { faults: [reason] });
+	}
+	const result = sizeTaper(field, input);
+	return {
+		faults,
+		waitsFor: [],
+		inputs,
+		outputs: OUTPUTS.map((output) =>
+			describe(output, outcomeOf(output.value(result), output.dimension, output.description))
+		),
+		profile: profileTaper(field, input),
+		warnings: warnings(item.body, field, values.factorOfSafety!)
+	};
+}
+
+type Output = (typeof OUTPUTS)[number];
+
+const describe = ({ name, description, tex }: Output, outcome: Outcome): ModelOutput => ({
+	name,
+	description,
+	symbolTex: tex,
+	outcome
+});
+
+function outcomeOf(told: Told, dimension: Dimension, what: string): Outcome {
+	if (typeof told === 'number') {
+		return shown(told, valueType(dimension), { unit: '', digits: DEFAULT_DIGITS });
+	}
+	const reason = fault(
+		'beyond-any-build',
+		`Beyond any build: ${what} is 10 to the power ${formatFigure(told.log10, 4)} in SI units.`,
+		{ remedy: 'A stronger or lighter material, or another body, brings it down.' }
+	);
+	return { state: 'fault', faults: [reason] };
+}
+
+function inputShown(field: ModelField, outcome: FormulaOutcome): Outcome {
+	if (outcome.state !== 'value') return outcome;
+	const { si, type, unit, digits } = outcome;
+	return shown(si, type, { unit: '', hint: unit, digits: digits ?? DEFAULT_DIGITS });
+}
+
+function inputFaults(field: ModelField, outcome: FormulaOutcome): Fault[] {
+	if (outcome.state === 'fault') return outcome.faults;
+	if (outcome.state !== 'value') return [];
+	const { what, dimension, atLeast } = WANTED[field];
+	if (!equal(outcome.type.dimension, dimension)) {
+		return [
+			fault(
+				'dimension',
+				`The ${what} must be ${inWords(dimension)}; this is ${inWords(outcome.type.dimension)}.`
+			)
+		];
+	}
+	const fits = atLeast === '0' ? outcome.si >= 0 : outcome.si > 0;
+	return fits
+		? []
+		: [fault('refused', `The ${what} must be ${atLeast === '0' ? '0 or more' : 'above 0'}.`)];
+}
+
+function taperInput(
+	values: Partial<Record<ModelField, number | null>>,
+	radius: number
+): TaperInput | null {
+	const { density, allowable, factorOfSafety, lift, area, reserve, top } = values;
+	if (!density || !allowable || !factorOfSafety || !top) return null;
+	const base = area ? { area } : lift ? { lift } : null;
+	if (!base) return null;
+	return {
+		density,
+		designStress: allowable / factorOfSafety,
+		base,
+		reserve: reserve ?? 0,
+		top: radius + top
+	};
+}
+
+/** Why a line cannot end at this radius; null when it can. */
+function topRefusal(field: Field, top: number): Fault | null {
+	const km = (metres: number) => `${formatFigure(Math.round(metres / 1e3), 6)} km`;
+	const synchronous = field.synchronous - field.base;
+	if (top <= field.synchronous * (1 + 1e-9)) {
+		return fault(
+			'refused',
+			`The top is ${km(top - field.base)} up, not above synchronous height at ${km(synchronous)}: ` +
+				'nothing there pulls outwards to hold the line up.',
+			{ remedy: `Set the top above ${km(synchronous)}.` }
+		);
+	}
+	if (top <= field.synchronous * 1000) return null;
+	return fault(
+		'refused',
+		`The top is ${km(top - field.base)} up, more than a thousand synchronous radii: one body alone says nothing there.`
+	);
+}

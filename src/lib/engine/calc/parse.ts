@@ -1,0 +1,252 @@
+/** From the typed text to the closed tree. mathjs parses; only what is listed here gets through. */
+import { create, parseDependencies, type MathNode } from 'mathjs/number';
+import { CONSTANTS } from '../quantities/constants';
+import { Refusal, type Place } from './faults';
+import { functionNamed, isFunction } from './functions';
+import { DEEPEST, scan, type Leaf, type Scanned } from './scan';
+import type { Arithmetic, Comparison, Expr } from './tree';
+
+const { parse: parseStructure } = create(parseDependencies!);
+
+export type Parsed = {
+	expr: Expr;
+	/** Names that must be quantities of the note, in order of mention, each once. */
+	names: string[];
+	/** Names read as units, which must not be quantities of the note as well, with where they stand. */
+	unitNames: (Place & { name: string })[];
+};
+
+export const MOST_NODES = 2000;
+
+/** @throws Refusal in words. */
+export function parse(text: string): Parsed {
+	const scanned = scan(text);
+	const expr = new Builder(text, scanned).build(structure(text, scanned), 0);
+	const leaves = scanned.leaves;
+	return {
+		expr,
+		names: unique(leaves.flatMap(quantityName)),
+		unitNames: leaves.flatMap((leaf) => (leaf.kind === 'literal' ? leaf.unit.names : []))
+	};
+}
+
+const unique = (names: string[]) => [...new Set(names)];
+
+function quantityName(leaf: Leaf): string[] {
+	if (leaf.kind !== 'name' || CONSTANTS.has(leaf.name)) return [];
+	return leaf.called && isFunction(leaf.name) ? [] : [leaf.name];
+}
+
+function structure(text: string, { source, origin }: Scanned): MathNode {
+	try {
+		return parseStructure!(source);
+	} catch (error) {
+		if (error instanceof RangeError) throw tooDeep();
+		const { message, char } = error as { message: string; char?: number };
+		const from = origin[Math.max(0, (char ?? 1) - 1)] ?? text.length;
+		throw inOwnWords(text, message, from);
+	}
+}
+
+function inOwnWords(text: string, message: string, from: number): Refusal {
+	const rest = text.slice(from).trimStart();
+	const start = text.length - text.slice(from).trimStart().length;
+	const piece = /^([\p{L}_][\p{L}\p{Nd}_]*|[\d.]+|.)/u.exec(rest)?.[0] ?? '';
+	const place = piece === '' ? null : { from: start, to: start + piece.length };
+	if (/end of expression|Value expected/.test(message) && piece === '') {
+		const last = /(\S)\s*$/.exec(text)?.[1] ?? '';
+		return new Refusal('syntax', `Something is missing after “${last}”.`);
+	}
+	if (/Parenthesis/.test(message)) {
+		const opened = text.split('(').length > text.split(')').length;
+		if (opened) return new Refusal('syntax', 'A closing parenthesis is missing.', { place });
+	}
+	if (piece === ')' && text.split(')').length > text.split('(').length) {
+		return new Refusal('syntax', 'A parenthesis is closed that was not opened.', { place });
+	}
+	if (/Value expected/.test(message)) {
+		return new Refusal('syntax', `Something is missing before “${piece}”.`, { place });
+	}
+	if (/False part/.test(message)) {
+		return new Refusal('syntax', 'The condition says only what holds if it is met.', {
+			remedy: 'Write condition ? value : other value.'
+		});
+	}
+	return new Refusal('syntax', `“${piece}” cannot stand here.`, { place });
+}
+
+const tooDeep = () =>
+	new Refusal('too-long', `The expression is nested more than ${DEEPEST} deep.`, {
+		remedy: 'Split it into several calculations.'
+	});
+
+const ARITHMETIC: Record<string, Arithmetic> = {
+	add: '+',
+	subtract: '-',
+	multiply: '*',
+	divide: '/',
+	pow: '^'
+};
+const COMPARISON: Record<string, Comparison> = {
+	smaller: '<',
+	smallerEq: '<=',
+	larger: '>',
+	largerEq: '>=',
+	equal: '==',
+	unequal: '!='
+};
+
+/** The parts of mathjs's nodes that are read. */
+type Node = {
+	type: string;
+	value?: unknown;
+	name?: string;
+	fn?: string | Node;
+	args?: Node[];
+	content?: Node;
+	condition?: Node;
+	trueExpr?: Node;
+	falseExpr?: Node;
+	conditionals?: string[];
+	params?: Node[];
+};
+
+class Builder {
+	private count = 0;
+
+	constructor(
+		private text: string,
+		private scanned: Scanned
+	) {}
+
+	build(given: unknown, depth: number): Expr {
+		const node = given as Node;
+		this.count += 1;
+		if (depth > DEEPEST) throw tooDeep();
+		if (this.count > MOST_NODES) {
+			throw new Refusal('too-long', `The expression has more than ${MOST_NODES} parts.`, {
+				remedy: 'Split it into several calculations.'
+			});
+		}
+		const sub = (child: Node) => this.build(child, depth + 1);
+		switch (node.type) {
+			case 'ConstantNode':
+				if (typeof node.value === 'number' && Number.isFinite(node.value)) {
+					return { kind: 'number', value: node.value };
+				}
+				throw notAllowed();
+			case 'ParenthesisNode':
+				return sub(node.content!);
+			case 'SymbolNode':
+				return this.leaf(node.name!);
+			case 'FunctionNode':
+				return this.call(node, sub);
+			case 'OperatorNode':
+				return operation(node, sub);
+			case 'RelationalNode':
+				return chain(node, sub);
+			case 'ConditionalNode':
+				return {
+					kind: 'choose',
+					condition: sub(node.condition!),
+					yes: sub(node.trueExpr!),
+					no: sub(node.falseExpr!)
+				};
+			default:
+				throw notAllowed();
+		}
+	}
+
+	private leafAt(placeholder: string): Leaf {
+		const leaf = /^\$\d+$/.test(placeholder)
+			? this.scanned.leaves[Number(placeholder.slice(1))]
+			: undefined;
+		if (!leaf) throw notAllowed();
+		return leaf;
+	}
+
+	private leaf(placeholder: string): Expr {
+		const leaf = this.leafAt(placeholder);
+		const place: Place = { from: leaf.from, to: leaf.to };
+		if (leaf.kind === 'literal') {
+			const { number, digits, unit, si } = leaf;
+			return { kind: 'literal', number, digits, unit, si, place };
+		}
+		const { name } = leaf;
+		const constant = CONSTANTS.get(name);
+		if (constant) return { kind: 'constant', name, constant, place };
+		if (isFunction(name)) {
+			throw new Refusal('syntax', `${name} is a function and needs its argument.`, {
+				remedy: `Write ${name}(…).`,
+				place
+			});
+		}
+		return { kind: 'name', name, place };
+	}
+
+	private call(node: Node, sub: (child: Node) => Expr): Expr {
+		const leaf = this.leafAt((node.fn as Node).name ?? '');
+		const place: Place = { from: leaf.from, to: leaf.to };
+		if (leaf.kind === 'literal') {
+			const written = this.text.slice(leaf.from, leaf.to);
+			throw new Refusal('syntax', `“${written}” stands directly before a parenthesis.`, {
+				remedy: `Write ${written} * (…).`,
+				place
+			});
+		}
+		const { name } = leaf;
+		if (!isFunction(name)) {
+			throw new Refusal('unknown-function', `${name} is not a function known here.`, {
+				remedy: `To multiply, write ${name} * (…).`,
+				place,
+				near: []
+			});
+		}
+		const args = node.args!.map(sub);
+		const [fewest, most] = functionNamed(name).takes;
+		if (args.length < fewest || args.length > most) {
+			const wanted = fewest === most ? `${fewest}` : `${fewest} to ${most}`;
+			const noun = wanted === '1' ? 'argument' : 'arguments';
+			throw new Refusal('syntax', `${name} takes ${wanted} ${noun}, not ${args.length}.`, {
+				place
+			});
+		}
+		return { kind: 'call', name, args, place };
+	}
+}
+
+function operation(node: Node, sub: (child: Node) => Expr): Expr {
+	const fn = String(node.fn);
+	const [first, second] = node.args!;
+	if (fn === 'unaryMinus') return { kind: 'negate', of: sub(first!) };
+	if (fn === 'unaryPlus') return sub(first!);
+	if (fn === 'not') return { kind: 'not', of: sub(first!) };
+	if (Object.hasOwn(ARITHMETIC, fn)) {
+		return { kind: 'binary', op: ARITHMETIC[fn]!, left: sub(first!), right: sub(second!) };
+	}
+	if (Object.hasOwn(COMPARISON, fn)) {
+		return { kind: 'compare', op: COMPARISON[fn]!, left: sub(first!), right: sub(second!) };
+	}
+	if (fn === 'and' || fn === 'or') {
+		return { kind: 'logic', op: fn, left: sub(first!), right: sub(second!) };
+	}
+	throw notAllowed();
+}
+
+/** a < b < c is a < b and b < c. */
+function chain(node: Node, sub: (child: Node) => Expr): Expr {
+	const parts = node.params!.map(sub);
+	return node
+		.conditionals!.map((fn, i): Expr => ({
+			kind: 'compare',
+			op: COMPARISON[fn]!,
+			left: parts[i]!,
+			right: parts[i + 1]!
+		}))
+		.reduce((left, right): Expr => ({ kind: 'logic', op: 'and', left, right }));
+}
+
+const notAllowed = () =>
+	new Refusal('not-allowed', 'This is no expression of numbers, units, symbols and functions.', {
+		remedy: 'Use + − * / ^, parentheses, comparisons and the functions offered while typing.'
+	});
