@@ -53,6 +53,7 @@ export function opened(row: Row) {
 	return {
 		id,
 		revision,
+		frozenAt: row.frozenAt.toISOString(),
 		head: headSchema.parse(JSON.parse(row.head)),
 		content: noteContentSchema.parse(JSON.parse(row.content)),
 		results: JSON.parse(row.results) as ItemResult[],
