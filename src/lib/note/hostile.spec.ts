@@ -31,7 +31,7 @@ const value: fc.Arbitrary<() => unknown> = fc.letrec<{ value: () => unknown }>((
 		}),
 		fc
 			.array(fc.constantFrom(1, 'a', null, { a: [] }), { maxLength: 3 })
-			.map((values) => () => Y.Array.from<unknown>(values)),
+			.map((values) => () => Y.Array.from<string | number | object | null>(values)),
 		fc.array(fc.tuple(names, tie('value')), { maxLength: 6 }).map((entries) => () => {
 			const map = new Y.Map();
 			for (const [name, make] of entries) map.set(name, make());

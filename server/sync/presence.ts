@@ -1,0 +1,94 @@
+/**
+ * Who is on a note and where. A client may speak only for itself, under the client id that it used
+ * first, and who it is is written by the server. Attack stopped here: somebody typing under another
+ * person's name, or taking others off the note.
+ */
+import * as decoding from 'lib0/decoding';
+import * as encoding from 'lib0/encoding';
+import {
+	Awareness,
+	applyAwarenessUpdate,
+	encodeAwarenessUpdate,
+	removeAwarenessStates
+} from 'y-protocols/awareness';
+import type * as Y from 'yjs';
+import type { SignedIn } from '$lib/server/auth/sessions';
+import { ownStateSchema, type SharedState } from '$lib/sync/presence';
+
+/** Longest state that one client may share, in characters of JSON. */
+const LONGEST_STATE = 4000;
+
+export type Speaker = { readonly person: SignedIn; clientId: number | null };
+
+export class Presence {
+	readonly #awareness: Awareness;
+	readonly #speakers = new Map<number, Speaker>();
+
+	constructor(doc: Y.Doc, broadcast: (update: Uint8Array) => void) {
+		this.#awareness = new Awareness(doc);
+		this.#awareness.setLocalState(null);
+		this.#awareness.on(
+			'update',
+			({ added, updated, removed }: Record<'added' | 'updated' | 'removed', number[]>) =>
+				broadcast(encodeAwarenessUpdate(this.#awareness, [...added, ...updated, ...removed]))
+		);
+	}
+
+	/** Everybody's states, for a newcomer; null when nobody is there. */
+	all(): Uint8Array | null {
+		const clients = [...this.#awareness.getStates().keys()];
+		return clients.length > 0 ? encodeAwarenessUpdate(this.#awareness, clients) : null;
+	}
+
+	/** Takes what a client says of itself. What it says of others (stock clients repeat it) is dropped. */
+	hear(speaker: Speaker, update: Uint8Array): void {
+		const decoder = decoding.createDecoder(update);
+		const count = decoding.readVarUint(decoder);
+		for (let entry = 0; entry < count; entry++) {
+			const clientId = decoding.readVarUint(decoder);
+			const clock = decoding.readVarUint(decoder);
+			const json = decoding.readVarString(decoder);
+			if (json.length > LONGEST_STATE || !this.#speaksAs(speaker, clientId)) continue;
+			const state: unknown = JSON.parse(json);
+			this.#apply(clientId, clock, state === null ? null : stamped(state, speaker.person));
+		}
+	}
+
+	leave(speaker: Speaker): void {
+		const { clientId } = speaker;
+		if (clientId === null || this.#speakers.get(clientId) !== speaker) return;
+		this.#speakers.delete(clientId);
+		removeAwarenessStates(this.#awareness, [clientId], null);
+		this.#awareness.meta.delete(clientId);
+	}
+
+	destroy(): void {
+		this.#awareness.destroy();
+	}
+
+	#speaksAs(speaker: Speaker, clientId: number): boolean {
+		if (clientId === this.#awareness.clientID) return false;
+		if (speaker.clientId !== null) return speaker.clientId === clientId;
+		const holder = this.#speakers.get(clientId);
+		// The same person coming back before the old socket was seen to be gone takes it over.
+		if (holder && holder.person.id !== speaker.person.id) return false;
+		this.#speakers.set(clientId, speaker);
+		speaker.clientId = clientId;
+		return true;
+	}
+
+	#apply(clientId: number, clock: number, state: SharedState | null): void {
+		const encoder = encoding.createEncoder();
+		encoding.writeVarUint(encoder, 1);
+		encoding.writeVarUint(encoder, clientId);
+		encoding.writeVarUint(encoder, clock);
+		encoding.writeVarString(encoder, JSON.stringify(state));
+		applyAwarenessUpdate(this.#awareness, encoding.toUint8Array(encoder), null);
+	}
+}
+
+function stamped(state: unknown, { id, name }: SignedIn): SharedState {
+	const own = ownStateSchema.safeParse(state);
+	const said = own.success ? own.data : ownStateSchema.parse({});
+	return { ...said, user: { id, name } };
+}
