@@ -10,3 +10,9 @@ export const freezeInput = z.object({
 	waivers: z.array(waiverSchema).max(1000)
 });
 export type FreezeInput = z.infer<typeof freezeInput>;
+
+/** Which sides a comparison holds against each other, as in the address of its page. */
+export const comparedInput = z.object({
+	from: z.string().min(1).max(8),
+	to: z.string().min(1).max(8).default('now')
+});

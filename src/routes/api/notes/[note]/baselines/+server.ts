@@ -3,7 +3,7 @@ import { requireNote } from '$lib/server/auth/guard';
 import { freeze } from '$lib/server/baselines/freeze';
 import { freezeInput } from '$lib/server/baselines/input';
 import { baselinesOfNote } from '$lib/server/baselines/read';
-import { readJson } from '$lib/server/read-json';
+import { readJson } from '$lib/server/reading';
 
 export async function GET(event) {
 	const { note } = await requireNote(event, event.params.note, 'baseline.read');

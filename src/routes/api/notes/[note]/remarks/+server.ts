@@ -1,6 +1,6 @@
 import { json } from '@sveltejs/kit';
 import { requireNote } from '$lib/server/auth/guard';
-import { readJson } from '$lib/server/read-json';
+import { readJson } from '$lib/server/reading';
 import { remarkInput } from '$lib/server/remarks/input';
 import { remarksOf } from '$lib/server/remarks/list';
 import { pinRemark } from '$lib/server/remarks/pin';

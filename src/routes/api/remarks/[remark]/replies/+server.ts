@@ -1,4 +1,4 @@
-import { readJson } from '$lib/server/read-json';
+import { readJson } from '$lib/server/reading';
 import { requireRemark } from '$lib/server/remarks/guard';
 import { replyInput } from '$lib/server/remarks/input';
 import { answerRemark } from '$lib/server/remarks/thread';

@@ -1,4 +1,4 @@
-import { readJson } from '$lib/server/read-json';
+import { readJson } from '$lib/server/reading';
 import { requireRemark } from '$lib/server/remarks/guard';
 import { settledInput } from '$lib/server/remarks/input';
 import { settleRemark } from '$lib/server/remarks/thread';

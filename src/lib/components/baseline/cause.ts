@@ -1,0 +1,18 @@
+import { FIELD_WORDS } from '$lib/note/compare';
+import type { Cause } from '$lib/note/comparison';
+
+/** Why a figure moved, in a few words. */
+export function causeWords(cause: Cause): string {
+	switch (cause.kind) {
+		case 'typed': {
+			if (cause.fields.includes('value')) return 'given';
+			return `by its ${cause.fields.map((field) => FIELD_WORDS[field] ?? field).join(', ')}`;
+		}
+		case 'upstream':
+			return `by ${cause.number}`;
+		case 'thin limit':
+			return 'by the thin limit';
+		case 'engine':
+			return 'by another version of the engine';
+	}
+}

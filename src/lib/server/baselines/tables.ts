@@ -1,0 +1,81 @@
+/** Baselines and comparisons as tables to take away. Figures stand in the unit shown, at full precision. */
+import type { Outcome } from '$lib/engine/calc/results';
+import { outcomeWords } from '$lib/components/note/figures';
+import type { CsvCell } from '$lib/csv';
+import { causeWords } from '$lib/components/baseline/cause';
+import { numberItems } from '$lib/note/numbering';
+import { readingsOf } from '$lib/note/readings';
+import type { Baseline } from './read';
+import type { ComparedSides } from './sides';
+
+const CAUTION = 'Preliminary design data. Not for construction or operation.';
+
+/** Value, unit, standard uncertainty and, where there is no value, why. */
+function figureCells(outcome: Outcome): CsvCell[] {
+	if (outcome.state !== 'value') return [null, '', null, outcomeWords(outcome)];
+	const { value, unit, uncertainty } = outcome.quantity;
+	return [value, unit, uncertainty, ''];
+}
+
+export function quantityTable({ content, results, head, digest }: Baseline): CsvCell[][] {
+	const numbers = numberItems(content.items);
+	const byId = new Map(results.map((result) => [result.id, result]));
+	return [
+		[`${head.note.number} baseline ${head.revision}`, `SHA-256 ${digest}`, CAUTION],
+		[
+			'number',
+			'symbol',
+			'what it is',
+			'value',
+			'unit',
+			'std uncertainty',
+			'without value',
+			'margin',
+			'state'
+		],
+		...content.items.flatMap((item) =>
+			readingsOf(item, byId.get(item.id)).map((reading) => [
+				numbers.get(item.id) ?? '',
+				reading.symbol,
+				reading.description,
+				...figureCells(reading.outcome),
+				reading.check?.margin?.value ?? null,
+				reading.check?.state ?? ''
+			])
+		)
+	];
+}
+
+export function comparisonTable(name: string, { comparison }: ComparedSides): CsvCell[][] {
+	return [
+		[name, CAUTION],
+		[
+			'number',
+			'symbol',
+			'what it is',
+			'before',
+			'unit',
+			'after',
+			'unit',
+			'relative change',
+			'by',
+			'margin before',
+			'state before',
+			'margin after',
+			'state after'
+		],
+		...comparison.movements.map(({ number, before, after, change, cause }) => [
+			number,
+			after.symbol,
+			after.description,
+			...figureCells(before.outcome).slice(0, 2),
+			...figureCells(after.outcome).slice(0, 2),
+			change,
+			causeWords(cause),
+			before.check?.margin?.value ?? null,
+			before.check?.state ?? '',
+			after.check?.margin?.value ?? null,
+			after.check?.state ?? ''
+		])
+	];
+}
