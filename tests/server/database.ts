@@ -2,13 +2,21 @@ import { randomBytes } from 'node:crypto';
 import pg from 'pg';
 import { TEMPLATE } from '../setup/postgres';
 
-/** A fresh database with the present schema, cloned from the migrated template. */
-export async function cloneDatabase(adminUrl: string): Promise<{ url: string; name: string }> {
+/** A fresh database, cloned from a template; the usual one has the present schema and no rows. */
+export async function cloneDatabase(
+	adminUrl: string,
+	template = TEMPLATE
+): Promise<{ url: string; name: string }> {
 	const name = `test_${randomBytes(6).toString('hex')}`;
-	await asAdmin(adminUrl, (admin) => admin.query(`create database ${name} template ${TEMPLATE}`));
+	await asAdmin(adminUrl, (admin) => admin.query(`create database ${name} template ${template}`));
 	const url = new URL(adminUrl);
 	url.pathname = `/${name}`;
 	return { url: url.href, name };
+}
+
+/** Nobody may be connected to it. */
+export async function renameDatabase(adminUrl: string, from: string, to: string): Promise<void> {
+	await asAdmin(adminUrl, (admin) => admin.query(`alter database ${from} rename to ${to}`));
 }
 
 /** Connections that are still open to the database, by what they ran last. */

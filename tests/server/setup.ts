@@ -12,6 +12,7 @@ const smtp = await startSmtpFake(0);
 
 Object.assign(process.env, inject('store'), smtp.environment, {
 	DATABASE_URL: database.url,
+	ENGINE_WORKER: inject('engineWorker'),
 	ORIGIN: 'http://127.0.0.1:4173'
 });
 

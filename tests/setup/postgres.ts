@@ -8,6 +8,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import pg from 'pg';
 import type { TestProject } from 'vitest/node';
+import { bundleEngineWorker } from '../../server/engine/bundle';
 import { startS3Fake } from '../../server/fakes/s3';
 import { migrateDatabase } from '../../server/launch/migrate';
 import { freePort } from '../../server/launch/ports';
@@ -25,6 +26,8 @@ declare module 'vitest' {
 		store: Record<string, string>;
 		/** Where the fake keeps its files. */
 		storeFolder: string;
+		/** The bundled worker of the server's engine pool. */
+		engineWorker: string;
 	}
 }
 
@@ -33,6 +36,7 @@ export default async function setup(project: TestProject) {
 	project.provide('adminUrl', run.adminUrl);
 	project.provide('store', run.store);
 	project.provide('storeFolder', run.storeFolder);
+	project.provide('engineWorker', run.engineWorker);
 	return run.stop;
 }
 
@@ -52,6 +56,9 @@ export async function startTestServices() {
 	await execute(adminUrl, `create database ${TEMPLATE}`);
 	await migrateDatabase(cluster.url(TEMPLATE));
 
+	const engineWorker = join(folder, 'engine-worker.mjs');
+	await bundleEngineWorker(engineWorker);
+
 	const objects = join(folder, 'objects');
 	await mkdir(objects);
 	const store = await startS3Fake(objects, await freePort(), 'evidence');
@@ -60,6 +67,7 @@ export async function startTestServices() {
 		adminUrl,
 		store: store.environment,
 		storeFolder: objects,
+		engineWorker,
 		databaseUrl: cluster.url,
 		async stop() {
 			await store.stop();
