@@ -9,7 +9,7 @@ import { fault } from './faults';
 import { components, reach, wayRound } from './graph';
 import type { SheetChange } from './items';
 import { nearest } from './near';
-import type { Fault, ItemResult } from './results';
+import type { Fault, ItemResult, Outcome } from './results';
 import { same } from './same';
 import type { Scope, Supply } from './scope';
 
@@ -32,8 +32,8 @@ export interface Sheet {
 	apply(change: SheetChange): SheetAnswer;
 	/** All results in sheet order. */
 	results(): ItemResult[];
-	/** Names that can be used, with what stands behind each. */
-	names(): Iterable<[name: string, id: string, supply: Supply]>;
+	/** Names that others may use, with the item and the outcome behind each. */
+	symbols(): Iterable<{ name: string; id: string; outcome: Outcome }>;
 }
 
 export function createSheet(): Sheet {
@@ -85,9 +85,14 @@ class LiveSheet implements Sheet {
 		return this.inOrder([...this.held.keys()]).map((id) => this.held.get(id)!.result!);
 	}
 
-	*names(): Iterable<[string, string, Supply]> {
-		for (const [id, { supplies }] of this.held) {
-			for (const [name, supply] of supplies) yield [name, id, supply];
+	*symbols() {
+		for (const [id, { entry, body }] of this.held) {
+			if (entry.symbol === '' || !body) continue;
+			if (body.kind === 'lineModel') {
+				for (const { name, outcome } of body.outputs) {
+					yield { name: `${entry.symbol}.${name}`, id, outcome };
+				}
+			} else if (body.kind !== 'check') yield { name: entry.symbol, id, outcome: body.outcome };
 		}
 	}
 

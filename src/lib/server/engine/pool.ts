@@ -1,0 +1,65 @@
+/**
+ * Worker threads for the engine on the server. A task that takes too long or too much memory ends with
+ * its thread; the pool starts another. So no note, however hostile, holds up the process.
+ *
+ * The clock runs from the moment the thread takes the task up, not while it waits for a thread.
+ */
+import { MessageChannel } from 'node:worker_threads';
+import { Piscina } from 'piscina';
+
+export type Limits = { worker: string; milliseconds: number; megabytes: number; threads: number };
+
+/** Said to the person whose note it is. */
+export class EngineLimitError extends Error {}
+
+const LONGEST_QUEUE = 200;
+const IDLE_MILLISECONDS = 60_000;
+
+export class EnginePool<Input, Answer> {
+	private piscina: Piscina<unknown, Answer>;
+
+	constructor(private limits: Limits) {
+		this.piscina = new Piscina<unknown, Answer>({
+			filename: limits.worker,
+			minThreads: 1,
+			maxThreads: limits.threads,
+			maxQueue: LONGEST_QUEUE,
+			idleTimeout: IDLE_MILLISECONDS,
+			resourceLimits: { maxOldGenerationSizeMb: limits.megabytes }
+		});
+	}
+
+	/** @throws EngineLimitError when time or memory ran out. */
+	async run(input: Input): Promise<Answer> {
+		const { milliseconds, megabytes } = this.limits;
+		const { port1: ours, port2: begun } = new MessageChannel();
+		const deadline = new AbortController();
+		let timer: NodeJS.Timeout | undefined;
+		ours.once('message', () => (timer = setTimeout(() => deadline.abort(), milliseconds)));
+		try {
+			return await this.piscina.run(
+				{ input, begun },
+				{ signal: deadline.signal, transferList: [begun] }
+			);
+		} catch (error) {
+			if (deadline.signal.aborted) {
+				throw new EngineLimitError(
+					`The note could not be computed within ${milliseconds / 1000} s.`
+				);
+			}
+			if ((error as { code?: string }).code === 'ERR_WORKER_OUT_OF_MEMORY') {
+				throw new EngineLimitError(
+					`The note could not be computed within ${megabytes} MB of memory.`
+				);
+			}
+			throw error;
+		} finally {
+			clearTimeout(timer);
+			ours.close();
+		}
+	}
+
+	close(): Promise<void> {
+		return this.piscina.destroy();
+	}
+}
