@@ -73,8 +73,8 @@ async function enter(tx: Db, found: Found, userId: string): Promise<void> {
 	await announce(tx, { kind: 'people', programmeId: found.programme.id });
 }
 
-export async function decline(token: string): Promise<{ inviter: string; programme: string }> {
-	return db.transaction(async (tx) => {
+export async function decline(token: string): Promise<void> {
+	await db.transaction(async (tx) => {
 		const found = await lockInvitation(tx, token);
 		await tx.update(invitation).set({ declinedAt: new Date() }).where(eq(invitation.id, found.id));
 		await queueMail(tx, {
@@ -82,6 +82,5 @@ export async function decline(token: string): Promise<{ inviter: string; program
 			subject: `Declined: invitation to ${found.programme.title}`,
 			text: `${found.email} declined your invitation to ${found.programme.title} as ${found.role}.`
 		});
-		return { inviter: found.inviter.name, programme: found.programme.title };
 	});
 }
