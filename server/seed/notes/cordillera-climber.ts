@@ -71,7 +71,7 @@ const climber: DemoNote = {
 			'cl3-du',
 			'ΔU',
 			'Work per mass to the balance radius',
-			'earth.GM (1/earth.radius - 1/r_s) - earth.rate^2 (r_s^2 - earth.radius^2)/2',
+			'earth.GM * (1/earth.radius - 1/r_s) - earth.rate^2 * (r_s^2 - earth.radius^2)/2',
 			'MJ/kg'
 		),
 		calculation(

@@ -183,6 +183,14 @@ const sizing: DemoNote = {
 	],
 	remarks: [
 		{
+			pinned: 'before the baseline',
+			by: 'cordeiro',
+			item: 'cl4-tot',
+			body: 'A lower top saves time in deployment. What does it cost in counterweight?',
+			replies: [{ by: 'quispe', body: 'We shall try 88 000 km after the SRR.' }]
+		},
+		{
+			pinned: 'before the baseline',
 			by: 'haddad',
 			item: 'cl4-rho',
 			body: 'Is this with the binder, and at what humidity was it weighed?',
@@ -194,12 +202,14 @@ const sizing: DemoNote = {
 			]
 		},
 		{
+			pinned: 'since',
 			by: 'cordeiro',
 			item: 'cl4-c-joint',
 			body: 'The joints do not carry what the tape does. Thicken them, or size the whole line for the joint?',
 			replies: []
 		},
 		{
+			pinned: 'before the baseline',
 			by: 'haddad',
 			item: 'cl4-fs',
 			body: 'Which table of the standard?',

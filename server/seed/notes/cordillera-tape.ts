@@ -101,6 +101,7 @@ const tape: DemoNote = {
 	additions: [],
 	remarks: [
 		{
+			pinned: 'before the baseline',
 			by: 'haddad',
 			item: 'cl2-n',
 			body: 'Thirty coupons from three batches: was it tested that the batches may be pooled?',

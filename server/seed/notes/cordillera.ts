@@ -12,9 +12,9 @@ export const cordillera: DemoProgramme = {
 	title: 'Cordillera Line',
 	summary: 'Earth, ocean-anchored, 14 t climbers',
 	gates: [
-		{ kind: 'SRR', name: 'System requirements review', date: '2026-06-04' },
-		{ kind: 'PDR', name: 'Preliminary design review', date: '2027-02-16' },
-		{ kind: 'CDR', name: 'Critical design review', date: '2027-10-12' }
+		{ kind: 'SRR', name: 'System requirements review', inDays: 0 },
+		{ kind: 'PDR', name: 'Preliminary design review', inDays: 77 },
+		{ kind: 'CDR', name: 'Critical design review', inDays: 315 }
 	],
 	notes: [mission, tape, climber, sizing, anchor, debris]
 };

@@ -4,6 +4,7 @@ import type { Item } from '../../../src/lib/note/items';
 export type LaterEdit = { by: string; item: string; field: string; value: string };
 
 export type DemoRemark = {
+	pinned: 'before the baseline' | 'since';
 	by: string;
 	item: string;
 	body: string;
@@ -30,7 +31,8 @@ export type DemoNote = {
 	files: { item: string; name: string; by: string }[];
 };
 
-export type DemoGate = { kind: string; name: string; date: string };
+/** Gates lie some days from the day on which the demo is written. */
+export type DemoGate = { kind: string; name: string; inDays: number };
 
 export type DemoProgramme = {
 	code: 'CL' | 'ML';

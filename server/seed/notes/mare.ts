@@ -124,21 +124,21 @@ const line: DemoNote = {
 			'ml2-gl1',
 			'g_1',
 			'Net acceleration at L1, should vanish',
-			'moon.GM/s_1^2 - earth.GM/(d - s_1)^2 + ω_2 (x_2 - s_1)',
+			'moon.GM/s_1^2 - earth.GM/(d - s_1)^2 + ω_2 * (x_2 - s_1)',
 			'mm/s^2'
 		),
 		calculation(
 			'ml2-gm',
 			'g_M',
 			'Net gravity at the surface',
-			'moon.GM/moon.radius^2 - earth.GM/(d - moon.radius)^2 + ω_2 (x_2 - moon.radius)',
+			'moon.GM/moon.radius^2 - earth.GM/(d - moon.radius)^2 + ω_2 * (x_2 - moon.radius)',
 			'm/s^2'
 		),
 		calculation(
 			'ml2-du',
 			'ΔU',
 			'Potential from the surface to L1',
-			'moon.GM (1/moon.radius - 1/s_1) + earth.GM (1/(d - moon.radius) - 1/(d - s_1)) + ω_2/2 ((x_2 - moon.radius)^2 - (x_2 - s_1)^2)',
+			'moon.GM * (1/moon.radius - 1/s_1) + earth.GM * (1/(d - moon.radius) - 1/(d - s_1)) + ω_2/2 * ((x_2 - moon.radius)^2 - (x_2 - s_1)^2)',
 			'MJ/kg'
 		),
 		calculation('ml2-taper', 'τ', 'Taper ratio, surface to L1', 'exp(ρ ΔU/σ_d)'),
@@ -154,6 +154,7 @@ const line: DemoNote = {
 	additions: [],
 	remarks: [
 		{
+			pinned: 'since',
 			by: 'haddad',
 			item: 'ml2-al',
 			body: 'The lowest of five lots is no basis value. When do the coupons come?',
@@ -169,9 +170,9 @@ export const mare: DemoProgramme = {
 	title: 'Mare Line',
 	summary: 'Moon to L1, 2 t climbers',
 	gates: [
-		{ kind: 'SRR', name: 'System requirements review', date: '2027-01-19' },
-		{ kind: 'PDR', name: 'Preliminary design review', date: '2027-09-14' },
-		{ kind: 'CDR', name: 'Critical design review', date: '2028-06-06' }
+		{ kind: 'SRR', name: 'System requirements review', inDays: 49 },
+		{ kind: 'PDR', name: 'Preliminary design review', inDays: 287 },
+		{ kind: 'CDR', name: 'Critical design review', inDays: 553 }
 	],
 	notes: [concept, line]
 };
