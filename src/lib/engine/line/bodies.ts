@@ -50,7 +50,7 @@ export const BODIES: Record<BodyName, Body> = {
 		rate: { value: turn / (27.321661 * 86_400), uncertainty: null, source: 'IAU WGCCRE' },
 		j2: { value: 2.0321e-4, uncertainty: null, source: 'JPL' },
 		l1: {
-			value: 5.802e7,
+			value: 5.8019e7,
 			uncertainty: null,
 			source: 'circular three-body problem at the mean distance of 384 400 km'
 		}
