@@ -5,12 +5,13 @@
  * to it.
  */
 import type * as Y from 'yjs';
+import { EngineLimitError } from '$lib/server/engine/pool';
 import { log } from '$lib/server/log';
-import { evaluatedSeq, observe, type Touch } from '$lib/server/notes/observe';
+import { evaluatedSeq, observe } from '$lib/server/notes/observe';
+import { Touches } from '$lib/server/notes/touches';
 import type { ItemResult } from '$lib/engine/calc/results';
-import type { Item, NoteContent } from '$lib/note/items';
+import type { NoteContent } from '$lib/note/items';
 import { projectNote } from '$lib/note/projection';
-import { watchNote, type NoteChange } from '$lib/note/watch';
 
 export type Evaluate = (content: NoteContent) => Promise<ItemResult[]>;
 
@@ -21,15 +22,12 @@ const ELSEWHERE = 3000;
 const AGAIN = 5000;
 
 export class Watcher {
-	/** Items as last seen; null until `begin`. */
-	#known: Map<string, Item> | null = null;
-	#touched = new Map<string, Touch>();
+	#touches: Touches | null = null;
 	#results: ItemResult[] = [];
 	#timer: NodeJS.Timeout | null = null;
 	#due = 0;
 	#first = 0;
 	#running: Promise<void> = Promise.resolve();
-	#end = () => {};
 
 	constructor(
 		private readonly noteId: string,
@@ -45,10 +43,7 @@ export class Watcher {
 
 	/** From here on, changes of the document are somebody's edits. */
 	begin(): void {
-		if (this.#known) return;
-		const content = projectNote(this.doc);
-		this.#known = new Map(content.items.map((item) => [item.id, item]));
-		this.#end = watchNote(this.doc, (change, origin) => this.#noticed(change, origin));
+		this.#touches ??= new Touches(this.doc);
 	}
 
 	wake(): void {
@@ -68,7 +63,7 @@ export class Watcher {
 	destroy(): void {
 		if (this.#timer) clearTimeout(this.#timer);
 		this.#timer = null;
-		this.#end();
+		this.#touches?.end();
 	}
 
 	#runIn(milliseconds: number): void {
@@ -85,38 +80,24 @@ export class Watcher {
 		this.#running = this.#running.then(() => this.#run());
 	}
 
-	#noticed({ upsert, remove }: NoteChange, origin: unknown): void {
-		const userId = (origin as { userId?: string | null } | null)?.userId ?? null;
-		const at = new Date();
-		const touch = (id: string, before: Item | null) =>
-			this.#touched.set(id, { userId, at, before: this.#touched.get(id)?.before ?? before });
-		const known = this.#known!;
-		for (const item of upsert) {
-			const before = known.get(item.id) ?? null;
-			known.set(item.id, item);
-			// Moving an item does not make one its author.
-			if (JSON.stringify(before) !== JSON.stringify(item)) touch(item.id, before);
-		}
-		for (const id of remove) {
-			touch(id, known.get(id) ?? null);
-			known.delete(id);
-		}
-	}
-
 	async #run(): Promise<void> {
-		const touched = this.#touched;
-		this.#touched = new Map();
+		const touched = this.#touches?.take() ?? new Map();
 		try {
 			const seq = this.seq();
 			const content = projectNote(this.doc);
-			const results = await this.evaluate(content);
+			const results = await this.evaluate(content).catch(beyondLimits);
 			await observe(this.noteId, { seq, content, touched, results, earlier: this.#results });
-			this.#results = results;
+			this.#results = results ?? [];
 		} catch (error) {
 			log.warn({ error, noteId: this.noteId }, 'a note could not be evaluated yet');
-			for (const [id, touch] of touched)
-				this.#touched.set(id, { ...(this.#touched.get(id) ?? touch), before: touch.before });
+			this.#touches?.putBack(touched);
 			this.#runIn(AGAIN);
 		}
 	}
+}
+
+/** A note too heavy for the engine stays so until it is edited: there is no use in trying again. */
+function beyondLimits(error: unknown): null {
+	if (error instanceof EngineLimitError) return null;
+	throw error;
 }

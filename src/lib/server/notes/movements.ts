@@ -7,14 +7,15 @@ import type { Db } from '../db';
 import { checkMovement } from '../db/schema';
 import { announce } from '../events';
 import { editTexts } from './edit-texts';
-import type { Observation, Touch } from './observe';
+import type { Observation } from './observe';
+import type { Touch } from './touches';
 
 export type Movement = Omit<typeof checkMovement.$inferSelect, 'noteId'>;
 
 /** Edits of one item by one person go on as long as no pause between them is longer (ms). */
 const ONE_EDIT = 60_000;
 
-type Seen = Pick<Observation, 'content' | 'results' | 'touched' | 'earlier'>;
+type Seen = Pick<Observation, 'content' | 'touched' | 'earlier'> & { results: ItemResult[] };
 
 /** Movements to write, and checks whose movement was taken back by going on with the same edit. */
 export function findMovements(
@@ -35,7 +36,7 @@ export function findMovements(
 		const cause = causeOf(check, uses, seen.touched);
 		const movement = cause
 			? movementBy(cause, check, stateBefore, items)
-			: { ...nobody(check, stateBefore) };
+			: nobody(check, stateBefore);
 		const earlier = last.get(check.id);
 		if (cause && earlier && goesOn(earlier, movement)) {
 			if (earlier.stateBefore === check.state) drop.push(check.id);

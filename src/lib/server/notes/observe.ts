@@ -5,21 +5,20 @@
  */
 import { eq, sql } from 'drizzle-orm';
 import type { ItemResult } from '$lib/engine/calc/results';
-import type { Item, NoteContent } from '$lib/note/items';
+import type { NoteContent } from '$lib/note/items';
 import { db } from '../db';
 import { noteSummary } from '../db/schema';
 import { writeAuthorship } from './authorship';
 import { writeMovements } from './movements';
 import { summarise } from './summary';
-
-/** Who edited an item last since the note was last observed, and the item as it was before. */
-export type Touch = { userId: string | null; at: Date; before: Item | null };
+import type { Touch } from './touches';
 
 export type Observation = {
 	/** The update up to which everything is seen. */
 	seq: number;
 	content: NoteContent;
-	results: ItemResult[];
+	/** Null when the engine could not compute the note within its limits. */
+	results: ItemResult[] | null;
 	touched: ReadonlyMap<string, Touch>;
 	/** Results when last observed, for what an item was used in before it was removed. */
 	earlier: ItemResult[];
@@ -42,8 +41,10 @@ export async function observe(noteId: string, seen: Observation): Promise<void> 
 			.for('update');
 		if (before && before.seq > seen.seq) return;
 		await writeAuthorship(tx, noteId, seen);
-		await writeMovements(tx, noteId, seen, before?.marks ?? []);
-		const summary = { seq: seen.seq, ...summarise(seen.content, seen.results) };
+		const { results } = seen;
+		if (!results) return;
+		await writeMovements(tx, noteId, { ...seen, results }, before?.marks ?? []);
+		const summary = { seq: seen.seq, ...summarise(seen.content, results) };
 		await tx
 			.insert(noteSummary)
 			.values({ noteId, ...summary })
