@@ -1,0 +1,91 @@
+/** How the fields of each kind stand in an open row. */
+import type { Item, ItemKind } from '$lib/note/items';
+
+export type FieldPlan = {
+	field: string;
+	label: string;
+	/** Expression: monospaced, with completion and underlined faults. "name" is monospaced only. */
+	typed: 'words' | 'name' | 'expression';
+	/** Columns of twelve. */
+	span: number;
+	hint?: string;
+	shown?: (item: Item) => boolean;
+};
+
+const words = (field: string, label: string, span: number, hint = ''): FieldPlan => ({
+	field,
+	label,
+	typed: 'words',
+	span,
+	hint
+});
+const name = (field: string, label: string, span: number, hint = ''): FieldPlan => ({
+	...words(field, label, span, hint),
+	typed: 'name'
+});
+const expression = (field: string, label: string, span: number, hint = ''): FieldPlan => ({
+	...words(field, label, span, hint),
+	typed: 'expression'
+});
+
+const model = (test: (item: Extract<Item, { kind: 'lineModel' }>) => boolean) => (item: Item) =>
+	item.kind === 'lineModel' && test(item);
+
+/** Text items have an editor of their own. */
+export const PLANS: Record<Exclude<ItemKind, 'text'>, FieldPlan[]> = {
+	section: [words('title', 'Title of the section', 12)],
+	given: [
+		name('symbol', 'Symbol', 2),
+		words('description', 'What it is', 10),
+		name('value', 'Value', 3),
+		name('unit', 'Unit', 2),
+		name('uncertainty', 'Standard uncertainty', 2, 'in the unit of the value; empty is exact'),
+		words('source', 'Source', 5)
+	],
+	calculation: [
+		name('symbol', 'Symbol', 2),
+		words('description', 'What it is', 6),
+		name('unit', 'Show in', 2, 'a unit; empty lets it choose'),
+		name('digits', 'Digits', 2, 'significant; empty is 4'),
+		expression('expression', 'Expression', 12)
+	],
+	check: [
+		words('description', 'What must hold', 12),
+		expression('left', 'Left side', 5),
+		expression('right', 'Right side', 5),
+		{
+			...expression('tolerance', 'Tolerance ±', 3),
+			shown: (item) => item.kind === 'check' && item.relation === 'within'
+		},
+		expression('required', 'Required margin', 3, 'empty is 0')
+	],
+	lineModel: [
+		name('symbol', 'Name', 2, 'outputs are name.taper …'),
+		words('description', 'What it is', 7),
+		expression('density', 'Density ρ', 4),
+		expression('allowable', 'Allowable strength', 4),
+		expression('factorOfSafety', 'Factor of safety', 4),
+		{ ...expression('lift', 'Lift at the anchor', 4), shown: model((m) => m.baseMode === 'lift') },
+		{
+			...expression('reserve', 'Reserve of lift', 4, 'a fraction; empty is 0'),
+			shown: model((m) => m.baseMode === 'lift')
+		},
+		{
+			...expression('area', 'Section at the anchor', 4),
+			shown: model((m) => m.baseMode === 'area')
+		},
+		expression('top', 'Height of the top', 4)
+	],
+	evidence: [words('description', 'What it shows', 12)]
+};
+
+export const RELATIONS = [
+	{ value: 'le', label: '≤  at most' },
+	{ value: 'ge', label: '≥  at least' },
+	{ value: 'within', label: 'within ±' }
+];
+
+export const BASE_MODES = [
+	{ value: 'lift', label: 'from the lift' },
+	{ value: 'area', label: 'given as an area' }
+];

@@ -1,0 +1,13 @@
+/** Our own API from the page: JSON, or the server's words for what went wrong (RFC 9457). */
+export async function fetchJson<T>(path: string, init?: RequestInit): Promise<T> {
+	const response = await fetch(path, init);
+	if (response.ok) return (await response.json()) as T;
+	throw new Error(await problemWords(response));
+}
+
+export async function problemWords(response: Response): Promise<string> {
+	const fallback = `The server answered ${response.status}. Try again in a moment.`;
+	const problem: unknown = await response.json().catch(() => null);
+	const detail = (problem as { detail?: unknown } | null)?.detail;
+	return typeof detail === 'string' && detail !== '' ? detail : fallback;
+}

@@ -1,0 +1,137 @@
+/**
+ * What stands around the note's text and is fetched beside it: people, remarks, what moved checks, the
+ * last baseline and what changed since. Fetched anew when the server says that it changed.
+ */
+import { createQuery, QueryClient } from '@tanstack/svelte-query';
+import type { ItemChange } from '$lib/note/compare';
+import type { Side } from '$lib/note/readings';
+import type { Role } from '$lib/server/auth/permissions';
+import type { RemarkView } from '$lib/server/remarks/list';
+import type { NoteSession } from '$lib/sync/note-session.svelte';
+import type { PersonHere } from '$lib/sync/presence';
+import { fetchJson } from './fetch-json';
+import { groupBy } from './group';
+import type { NoteSheet } from './sheet.svelte';
+import type { Was } from './sheet-view';
+
+export type Movement = {
+	itemId: string;
+	stateBefore: string;
+	state: string;
+	causeItemId: string | null;
+	causeBefore: string;
+	causeAfter: string;
+	movedBy: string | null;
+	movedAt: string;
+};
+
+/** The last frozen sheet. */
+export type Baseline = Side & { id: string; revision: string; frozenAt: string; digest: string };
+
+type Given = {
+	noteId: string;
+	me: { id: string; name: string };
+	role: Role;
+	session: NoteSession;
+	sheet: NoteSheet;
+};
+
+/** Pause after the last result before changes since the baseline are told anew, in milliseconds. */
+const SETTLED = 250;
+
+export class NoteSurroundings {
+	readonly noteId: string;
+	readonly me: Given['me'];
+	readonly role: Role;
+	changes = $state.raw<ReadonlyMap<string, ItemChange> | null>(null);
+
+	#session: NoteSession;
+	#sheet: NoteSheet;
+	#client = new QueryClient({ defaultOptions: { queries: { staleTime: Infinity, retry: 2 } } });
+	#remarks;
+	#movements;
+	#baseline;
+
+	/** Called while a component is being set up: its queries live as long as the component. */
+	constructor({ noteId, me, role, session, sheet }: Given) {
+		this.noteId = noteId;
+		this.me = me;
+		this.role = role;
+		this.#session = session;
+		this.#sheet = sheet;
+		const query = <T>(kind: string, path: string) =>
+			createQuery(
+				() => ({
+					queryKey: [kind],
+					queryFn: () => fetchJson<T>(`/api/notes/${noteId}/${path}`),
+					// What is beside the text comes after the text.
+					enabled: sheet.evaluated
+				}),
+				() => this.#client
+			);
+		this.#remarks = query<RemarkView[]>('remarks', 'remarks');
+		this.#movements = query<Movement[]>('movements', 'movements');
+		this.#baseline = query<Baseline | null>('baselines', 'baselines/latest');
+
+		$effect(() =>
+			session.on('event', ({ kind }) => void this.#client.invalidateQueries({ queryKey: [kind] }))
+		);
+		$effect(() => this.#tellChanges(sheet));
+	}
+
+	get baseline(): Baseline | null {
+		return this.#baseline.data ?? null;
+	}
+
+	get remarks(): RemarkView[] {
+		return this.#remarks.data ?? [];
+	}
+
+	readonly #remarksByItem = $derived.by(() => groupBy(this.remarks, ({ itemId }) => itemId));
+	readonly #peopleByItem = $derived.by(() =>
+		groupBy(this.#session.people, ({ itemId }) => itemId ?? '')
+	);
+	readonly #movementByItem = $derived.by(() =>
+		groupBy(this.#movements.data ?? [], ({ itemId }) => itemId)
+	);
+
+	remarksOn(id: string): RemarkView[] {
+		return this.#remarksByItem.get(id) ?? [];
+	}
+
+	peopleAt(id: string): PersonHere[] {
+		return this.#peopleByItem.get(id) ?? [];
+	}
+
+	someoneRemarks(id: string): boolean {
+		return this.peopleAt(id).some(({ activity }) => activity === 'remarks');
+	}
+
+	/** What brought a check to the state that it is in; what brought it to an earlier one is over. */
+	movementOf(id: string): Movement | undefined {
+		const movement = this.#movementByItem.get(id)?.[0];
+		const result = this.#sheet.result(id);
+		return result?.kind === 'check' && movement?.state === result.state ? movement : undefined;
+	}
+
+	wasOf(id: string): Was | null {
+		const change = this.changes?.get(id);
+		return change && this.baseline ? { letter: this.baseline.revision, words: change.words } : null;
+	}
+
+	refetchRemarks(): void {
+		void this.#client.invalidateQueries({ queryKey: ['remarks'] });
+	}
+
+	#tellChanges(sheet: NoteSheet) {
+		const { baseline } = this;
+		if (!baseline) return;
+		// Read whole so that any edit or result sets the pause anew.
+		const now: Side = { content: sheet.content(), results: sheet.results() };
+		const timer = setTimeout(async () => {
+			const { changesSince } = await import('$lib/note/compare');
+			this.changes = changesSince(baseline.revision, baseline, now).items;
+		}, SETTLED);
+		return () => clearTimeout(timer);
+	}
+}
