@@ -11,6 +11,7 @@ import {
 	type ServerInit
 } from '@sveltejs/kit';
 import { randomBytes } from 'node:crypto';
+import { startSync } from '$server/sync';
 import { sessionFromCookie } from '$lib/server/auth/sessions';
 import { startSweeping } from '$lib/server/auth/sweep';
 import { log } from '$lib/server/log';
@@ -21,6 +22,7 @@ import { settings } from '$lib/server/settings';
 export const init: ServerInit = async () => {
 	settings();
 	await startMail();
+	await startSync();
 	startSweeping();
 };
 

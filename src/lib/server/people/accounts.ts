@@ -1,5 +1,6 @@
 /** Accounts of the site: what their owner and the administrator do with them. */
 import { asc, eq, sql } from 'drizzle-orm';
+import { forget, signInsOfAccount, take } from '../auth/limits';
 import { hashPassword, verifyPassword } from '../auth/passwords';
 import { endSession, endSessions, type SessionCookie } from '../auth/sessions';
 import { db } from '../db';
@@ -30,15 +31,22 @@ export async function rename(userId: string, name: string): Promise<void> {
 	await db.update(user).set({ name }).where(eq(user.id, userId));
 }
 
-/** Changes the password of somebody who knows the old one; every other session ends. */
+/**
+ * Changes the password of somebody who knows the old one; every other session ends. Wrong tries count
+ * as at sign-in: a session left open at a desk gives no more guesses than the door.
+ */
 export async function changePassword(
-	userId: string,
+	person: { id: string; email: string },
 	sessionId: string,
 	passwords: { old: string; new: string }
 ): Promise<void> {
+	const userId = person.id;
+	if ((await take(signInsOfAccount, person.email)).until)
+		throw new Problem(429, 'Too many tries; wait for 15 minutes.');
 	const [found] = await db.select().from(user).where(eq(user.id, userId));
 	if (!(await verifyPassword(found?.passwordHash ?? null, passwords.old)))
 		throw new Problem(403, 'This is not your present password.');
+	await forget(signInsOfAccount, person.email);
 	const passwordHash = await hashPassword(passwords.new);
 	await db.transaction(async (tx) => {
 		await tx.update(user).set({ passwordHash }).where(eq(user.id, userId));

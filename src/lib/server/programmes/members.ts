@@ -1,5 +1,5 @@
 /** Who is in a programme, and as what. */
-import { and, asc, eq } from 'drizzle-orm';
+import { and, asc, eq, sql } from 'drizzle-orm';
 import { db } from '../db';
 import { membership, programme, user } from '../db/schema';
 import type { Role } from '../auth/permissions';
@@ -38,4 +38,18 @@ export function programmesOf(userId: string) {
 		.innerJoin(programme, eq(programme.id, membership.programmeId))
 		.where(eq(membership.userId, userId))
 		.orderBy(asc(programme.code));
+}
+
+/** Notes that somebody is in the programme now, to a minute. */
+export async function recordHere(userId: string, programmeId: string): Promise<void> {
+	await db
+		.update(membership)
+		.set({ lastHereAt: sql`now()` })
+		.where(
+			and(
+				eq(membership.userId, userId),
+				eq(membership.programmeId, programmeId),
+				sql`coalesce(${membership.lastHereAt} < now() - interval '1 minute', true)`
+			)
+		);
 }
