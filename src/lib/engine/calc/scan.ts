@@ -6,7 +6,8 @@
  * A number and its unit are one thing: `100 km / 200 km/h` is a time. In mathjs's own reading the last
  * division would fall on the whole.
  */
-import { scanUnit, toSi, type Unit } from '../quantities/units';
+import { scanUnit, type Unit } from '../quantities/unit-reader';
+import { toSi } from '../quantities/units';
 import { significant } from '../quantities/number';
 import { Refusal, type Place } from './faults';
 import { NAME, OPERATOR_WORDS, canonical } from './names';

@@ -4,7 +4,8 @@
  * ISO 1144 for tex.
  *
  * A table of our own and not mathjs's unit module: that one adds 50 kB gzipped and 130 ms to the
- * worker's start, rounds psi in the eleventh digit, and lacks t, ksi, tex and strain.
+ * worker's start, rounds psi and kip, has the electronvolt of before 2019, and lacks t,
+ * ksi, tex and strain.
  */
 import {
 	dimension,

@@ -1,146 +1,8 @@
-/**
- * Units as typed: "kg/m^3", "kg m^-3", "kg·m⁻³", "N/tex", "mm²", "J/(kg K)".
- *
- * A product after a division is refused unless the divisor is in parentheses: J/kg K may be read in
- * two ways (SI Brochure, 5.4.1).
- */
-import { PURE, equal, times, toPower, type Dimension } from './dimension';
-import { OFFERED_UNITS, UNITS } from './unit-table';
+/** A unit in a field of its own, and values to and from it. */
+import { OFFERED_UNITS } from './unit-table';
+import { NO_UNIT, scanUnit, type Unit } from './unit-reader';
 
-export type Unit = {
-	/** As typed. */
-	text: string;
-	factor: number;
-	/** SI value of the zero of the scale: 273.15 for °C, 0 for all but °C and °F. */
-	offset: number;
-	dimension: Dimension;
-	/** The units named in it, with where each stands in the text it was read from. */
-	names: { name: string; from: number; to: number }[];
-};
-
-export const NO_UNIT: Unit = { text: '', factor: 1, offset: 0, dimension: PURE, names: [] };
-
-const NAME = /sidereal[ _]day|[\p{L}°Ω]+|%/uy;
-const POWER =
-	/\^\s*([-\u2212]?\d{1,2})(?![\d.])|\^\s*\(\s*([-\u2212]?\d{1,2})(?:\/([1-9]))?\s*\)|(⁻?[⁰¹²³⁴⁵⁶⁷⁸⁹]{1,2})/y;
-const SPACE = /[ \t\u00a0\u2009\u202f]*/y;
-
-/** A unit written in a longer text from `from` on; null when none stands there. */
-export function scanUnit(text: string, from: number, { tight }: { tight: boolean }) {
-	const reader = new UnitReader(text, from, tight);
-	const unit = reader.product(true);
-	if (!unit || !(unit.factor > 1e-200 && unit.factor < 1e200)) return null;
-	return { unit: { ...unit, text: text.slice(from, reader.at) }, to: reader.at };
-}
-
-/** Reads one unit. In an expression (`tight`) no space may stand around / and ·: there it means an operation. */
-class UnitReader {
-	constructor(
-		private text: string,
-		public at: number,
-		private tight: boolean
-	) {}
-
-	/** Factors up to the first thing that cannot go on the unit. */
-	product(outermost: boolean): Unit | null {
-		let unit = this.factor();
-		let divided = false;
-		while (unit) {
-			const before = this.at;
-			const sign = this.separator(outermost);
-			const next = sign === '' || (sign === '·' && divided) ? null : this.factor(sign === '/');
-			if (!next) {
-				this.at = before;
-				return unit;
-			}
-			divided ||= sign === '/';
-			unit = joined(unit, next, sign === '/' ? -1 : 1);
-		}
-		return null;
-	}
-
-	private separator(outermost: boolean): '' | '/' | '·' {
-		const start = this.at;
-		this.skip(SPACE);
-		const spaced = this.at > start;
-		const sign = this.text[this.at] ?? '';
-		if (sign !== '' && '/*·⋅×'.includes(sign)) {
-			this.at += 1;
-			const after = this.at;
-			this.skip(SPACE);
-			if (this.tight && outermost && (spaced || this.at > after)) return '';
-			return sign === '/' ? '/' : '·';
-		}
-		return spaced ? '·' : '';
-	}
-
-	private factor(divisor = false): Unit | null {
-		if (divisor && this.text[this.at] === '(') return this.group();
-		const from = this.at;
-		const name = this.take(NAME)?.[0].replace(' ', '_');
-		const definition = name === undefined ? undefined : UNITS.get(name);
-		// A longer name only begins like a unit (m_lift, h2), and what opens a parenthesis is a function.
-		if (!definition || /[\p{L}\p{Nd}_(.]/u.test(this.text[this.at] ?? '')) {
-			this.at = from;
-			return null;
-		}
-		const names = [{ name: name!, from, to: this.at }];
-		const power = this.power();
-		const { factor, dimension, offset = 0 } = definition;
-		if (power === 1) return { text: '', factor, offset, dimension, names };
-		return {
-			text: '',
-			factor: factor ** power,
-			offset: 0,
-			dimension: toPower(dimension, power),
-			names
-		};
-	}
-
-	private group(): Unit | null {
-		const from = this.at;
-		this.at += 1;
-		const unit = this.product(false);
-		if (unit && this.text[this.at] === ')') {
-			this.at += 1;
-			return unit;
-		}
-		this.at = from;
-		return null;
-	}
-
-	private power(): number {
-		const found = this.take(POWER);
-		if (!found) return 1;
-		if (found[4]) return raisedNumber(found[4]);
-		return Number((found[1] ?? found[2])!.replace('\u2212', '-')) / Number(found[3] ?? 1);
-	}
-
-	private take(pattern: RegExp) {
-		pattern.lastIndex = this.at;
-		const found = pattern.exec(this.text);
-		if (found) this.at = pattern.lastIndex;
-		return found;
-	}
-
-	private skip(pattern: RegExp) {
-		this.take(pattern);
-	}
-}
-
-/** In a product a temperature unit is a difference: W/(m °C) is W/(m K). */
-function joined(a: Unit, b: Unit, sign: 1 | -1): Unit {
-	return {
-		text: '',
-		factor: sign === 1 ? a.factor * b.factor : a.factor / b.factor,
-		offset: 0,
-		dimension: times(a.dimension, toPower(b.dimension, sign)),
-		names: [...a.names, ...b.names]
-	};
-}
-
-const raisedNumber = (raised: string) =>
-	Number([...raised].map((sign) => (sign === '⁻' ? '-' : '⁰¹²³⁴⁵⁶⁷⁸⁹'.indexOf(sign))).join(''));
+export type { Unit };
 
 export type ParsedUnit = { ok: true; unit: Unit } | { ok: false; message: string; remedy: string };
 
@@ -158,12 +20,7 @@ export function parseUnit(text: string): ParsedUnit {
 
 function readUnit(typed: string): ParsedUnit {
 	if (typed === '' || typed === '1') return { ok: true, unit: NO_UNIT };
-	const lead = /^1\s*\/\s*/.exec(typed)?.[0].length;
-	const from = lead === undefined ? 0 : lead - 1;
-	const scanned =
-		lead === undefined
-			? scanUnit(typed, 0, { tight: false })
-			: inverse(scanUnit(typed, from + 1, { tight: false }));
+	const scanned = scanUnit(typed, 0, { tight: false });
 	if (scanned && scanned.to === typed.length) {
 		return { ok: true, unit: { ...scanned.unit, text: typed } };
 	}
@@ -185,13 +42,10 @@ function readUnit(typed: string): ParsedUnit {
 	};
 }
 
-const inverse = (scanned: ReturnType<typeof scanUnit>) =>
-	scanned && { ...scanned, unit: joined(NO_UNIT, scanned.unit, -1) };
-
 /** Units that differ only in capitals: "mpa" is near MPa and mPa. */
 export function nearUnits(name: string): string[] {
 	const lower = name.toLowerCase();
-	return OFFERED_UNITS.filter((unit) => unit.toLowerCase() === lower).slice(0, 3);
+	return OFFERED_UNITS.filter((unit) => unit !== name && unit.toLowerCase() === lower).slice(0, 3);
 }
 
 export const toSi = (value: number, unit: Unit) =>
@@ -199,5 +53,3 @@ export const toSi = (value: number, unit: Unit) =>
 
 export const fromSi = (si: number, unit: Unit) =>
 	unit.offset === 0 ? si / unit.factor : (si - unit.offset) / unit.factor;
-
-export const sameDimension = (a: Unit, b: Unit) => equal(a.dimension, b.dimension);
