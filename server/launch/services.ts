@@ -1,5 +1,4 @@
 /** What the demo runs on: a private PostgreSQL, and the S3 and mail fakes, all in .data on loopback. */
-import { spawnSync } from 'node:child_process';
 import { mkdirSync } from 'node:fs';
 import { join } from 'node:path';
 import pg from 'pg';
@@ -12,6 +11,7 @@ import type { OnEnd } from './launch';
 import { migrateDatabase } from './migrate';
 import { freePort } from './ports';
 import { startCluster } from './postgres';
+import { runSeed } from './seed';
 
 const DATABASE = 'holdfast';
 
@@ -50,7 +50,9 @@ export async function startServices(engineWorker: string, onEnd: OnEnd): Promise
 		ORIGIN: process.env.ORIGIN ?? `http://localhost:${ports.web}`,
 		HOST: process.env.HOST ?? '127.0.0.1',
 		PORT: `${ports.web}`,
-		ENGINE_WORKER: engineWorker
+		ENGINE_WORKER: engineWorker,
+		// A forecast about versions of Node.js, for those who maintain this and not for who starts it.
+		AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true'
 	};
 
 	const first = !installation.seeded;
@@ -58,7 +60,7 @@ export async function startServices(engineWorker: string, onEnd: OnEnd): Promise
 	await migrateDatabase(environment.DATABASE_URL);
 	if (first) {
 		console.log('Writing the demo programmes …');
-		seed(environment);
+		await runSeed(environment);
 		keepInstallation({ ...installation, seeded: true });
 	}
 
@@ -89,14 +91,6 @@ async function makeDatabase(adminUrl: string, anew: boolean): Promise<void> {
 	} finally {
 		await client.end();
 	}
-}
-
-function seed(environment: Record<string, string>): void {
-	const { status } = spawnSync(process.execPath, ['--import', 'tsx', 'server/seed/run.ts'], {
-		stdio: ['ignore', 'inherit', 'inherit'],
-		env: { ...process.env, ...environment }
-	});
-	if (status !== 0) throw new Error('The demo programmes cannot be written (see above).');
 }
 
 function ownFolder(name: string): string {

@@ -1,6 +1,6 @@
 /** Once a run: the services, and a database with the demo programmes that each worker clones. */
-import { spawnSync } from 'node:child_process';
 import { startSmtpFake } from '../../server/fakes/smtp';
+import { runSeed } from '../../server/launch/seed';
 import { cloneDatabase, renameDatabase } from '../server/database';
 import { startTestServices } from '../setup/postgres';
 
@@ -10,19 +10,14 @@ export default async function setup() {
 	const services = await startTestServices();
 	const { url, name } = await cloneDatabase(services.adminUrl);
 	const smtp = await startSmtpFake(0);
-	const seeding = spawnSync(process.execPath, ['--import', 'tsx', 'server/seed/run.ts'], {
-		stdio: 'inherit',
-		env: {
-			...process.env,
-			...services.store,
-			...smtp.environment,
-			DATABASE_URL: url,
-			ORIGIN: 'http://localhost',
-			ENGINE_WORKER: 'build/engine-worker.js'
-		}
+	await runSeed({
+		...services.store,
+		...smtp.environment,
+		DATABASE_URL: url,
+		ORIGIN: 'http://localhost',
+		ENGINE_WORKER: 'build/engine-worker.js'
 	});
 	await smtp.stop();
-	if (seeding.status !== 0) throw new Error('The demo programmes cannot be written (see above).');
 	await renameDatabase(services.adminUrl, name, DEMO_TEMPLATE);
 
 	// Workers are processes of their own and inherit the environment.
