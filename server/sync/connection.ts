@@ -36,6 +36,7 @@ export class Connection implements Speaker {
 	#isAlive = true;
 	readonly #allowance: Allowance;
 	readonly #pings: NodeJS.Timeout;
+	#resting: NodeJS.Timeout | undefined;
 
 	constructor(
 		readonly socket: WebSocket,
@@ -53,6 +54,7 @@ export class Connection implements Speaker {
 			socket.once('close', () => {
 				this.#isOpen = false;
 				clearInterval(this.#pings);
+				clearTimeout(this.#resting);
 				room.leave(this);
 				resolve();
 			})
@@ -121,10 +123,14 @@ export class Connection implements Speaker {
 			return this.close(CLOSE.UNREADABLE);
 		}
 		const wait = this.#allowance.spend(1 + data.byteLength / 4096);
-		if (wait > 0) {
-			this.socket.pause();
-			setTimeout(() => this.socket.resume(), wait);
-		}
+		if (wait > 0) this.#rest(wait);
+	}
+
+	/** Does not read for a while. What the library holds already still comes, and lengthens it. */
+	#rest(milliseconds: number): void {
+		clearTimeout(this.#resting);
+		this.socket.pause();
+		this.#resting = setTimeout(() => this.socket.resume(), milliseconds);
 	}
 
 	#read(decoder: decoding.Decoder): void {

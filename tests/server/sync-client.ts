@@ -99,16 +99,14 @@ export async function rawSocket(server: TestServer, path: string, headers: Recor
 		socket.terminate();
 	});
 	socket.on('error', () => {});
-	await vi.waitFor(() => {
-		if (socket.readyState === WebSocket.CONNECTING) throw new Error('still connecting');
-	});
+	await vi.waitUntil(() => socket.readyState !== WebSocket.CONNECTING, { interval: 5 });
 	return {
 		socket,
 		received,
 		code: () => code,
 		status: () => status,
 		/** The socket is closed; the answer is its code. */
-		closed: () => vi.waitUntil(() => code, { timeout: 4000 }),
+		closed: () => vi.waitUntil(() => code, { timeout: 4000, interval: 5 }),
 		of: (type: number) => received.filter((message) => message.type === type)
 	};
 }

@@ -16,7 +16,7 @@ import {
 	type ItemOf
 } from './items';
 import { proseToFragment } from './fragment';
-import { keyAfter } from './order';
+import { gapAfter, keyIn } from './order';
 
 export type ItemMap = Y.Map<unknown>;
 
@@ -44,28 +44,34 @@ export type NewItem = {
 type Place = { after: string | null; origin?: unknown };
 
 /** Adds an item below `after` (null: at the top) and returns its id. */
-export function addItem(doc: Y.Doc, item: NewItem, { after, origin = null }: Place): string {
-	const id = item.id ?? crypto.randomUUID();
-	const content = { ...BLANK[item.kind], ...item } as Record<string, unknown>;
-	doc.transact(() => {
-		const map: ItemMap = new Y.Map();
-		map.set('kind', item.kind);
-		map.set('order', keyAfter(doc, after));
-		for (const [field, form] of Object.entries(FIELDS[item.kind]) as [string, FieldForm][]) {
-			map.set(field, held(form, content[field]));
-		}
-		itemsMap(doc).set(id, map);
-	}, origin);
-	return id;
+export function addItem(doc: Y.Doc, item: NewItem, place: Place): string {
+	return addItems(doc, [item], place)[0]!;
 }
 
 /** Adds items one below the other and returns their ids. */
 export function addItems(doc: Y.Doc, items: NewItem[], { after, origin = null }: Place): string[] {
-	const ids: string[] = [];
-	doc.transact(() => {
-		for (const item of items) ids.push(addItem(doc, item, { after: ids.at(-1) ?? after, origin }));
-	}, origin);
-	return ids;
+	const gap = gapAfter(doc, after);
+	return doc.transact(
+		() =>
+			items.map((item) => {
+				gap.below = keyIn(gap);
+				return putItem(doc, item, gap.below);
+			}),
+		origin
+	);
+}
+
+function putItem(doc: Y.Doc, item: NewItem, order: string): string {
+	const id = item.id ?? crypto.randomUUID();
+	const content = { ...BLANK[item.kind], ...item } as Record<string, unknown>;
+	const map: ItemMap = new Y.Map();
+	map.set('kind', item.kind);
+	map.set('order', order);
+	for (const [field, form] of Object.entries(FIELDS[item.kind]) as [string, FieldForm][]) {
+		map.set(field, held(form, content[field]));
+	}
+	itemsMap(doc).set(id, map);
+	return id;
 }
 
 function held(form: FieldForm, value: unknown): unknown {
@@ -89,7 +95,8 @@ function held(form: FieldForm, value: unknown): unknown {
 /** Moves an item below `after` (null: to the top). */
 export function moveItem(doc: Y.Doc, id: string, { after, origin = null }: Place): void {
 	const item = heldItem(doc, id);
-	if (item && after !== id) doc.transact(() => item.set('order', keyAfter(doc, after, id)), origin);
+	if (item && after !== id)
+		doc.transact(() => item.set('order', keyIn(gapAfter(doc, after, id))), origin);
 }
 
 export function removeItem(doc: Y.Doc, id: string, origin: unknown = null): void {

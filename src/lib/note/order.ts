@@ -34,21 +34,24 @@ export function orderedIds(doc: Y.Doc): string[] {
 	return keyed(doc).map(({ id }) => id);
 }
 
-/** A key for a place below `after` (null: above all), with `skip` taken out of the order first. */
-export function keyAfter(doc: Y.Doc, after: string | null, skip?: string): string {
+/** A gap in the order, between two keys or at an end. */
+export type Gap = { below: string | null; above: string | null };
+
+/** The gap below `after` (null: above all), with `skip` taken out of the order first. */
+export function gapAfter(doc: Y.Doc, after: string | null, skip?: string): Gap {
 	const order = keyed(doc).filter(({ id }) => id !== skip);
 	const index = after === null ? -1 : order.findIndex(({ id }) => id === after);
 	const below = order[index]?.key ?? null;
 	// Equal keys leave no room between them: go past all that are equal.
 	const above = order.slice(index + 1).find(({ key }) => below === null || key > below)?.key;
-	return scatteredKey(below, above ?? null);
+	return { below, above: above ?? null };
 }
 
 /**
- * Two people who insert in the same place at once would get the same key if it were always the
- * middle; a few random halvings keep them apart, at the cost of about two characters.
+ * A key in the gap. Two people who insert in the same place at once would get the same key if it were
+ * always the middle; a few random halvings keep them apart, at the cost of about two characters.
  */
-function scatteredKey(below: string | null, above: string | null): string {
+export function keyIn({ below, above }: Gap): string {
 	let [low, high] = [below, above];
 	let key = generateKeyBetween(low, high);
 	for (let halving = 0; halving < 12; halving++) {
