@@ -11,11 +11,14 @@ import {
 	type ServerInit
 } from '@sveltejs/kit';
 import { randomBytes } from 'node:crypto';
+import { provide } from '$server/lifecycle';
 import { startSync } from '$server/sync';
 import { sessionFromCookie } from '$lib/server/auth/sessions';
 import { startSweeping } from '$lib/server/auth/sweep';
+import { pool } from '$lib/server/db';
+import { closeEngine } from '$lib/server/engine/evaluate';
 import { log } from '$lib/server/log';
-import { startMail } from '$lib/server/mail/queue';
+import { startMail, stopMail } from '$lib/server/mail/queue';
 import { Problem, problemResponse } from '$lib/server/problems';
 import { settings } from '$lib/server/settings';
 
@@ -24,6 +27,11 @@ export const init: ServerInit = async () => {
 	await startMail();
 	await startSync();
 	startSweeping();
+	provide('close', async () => {
+		await stopMail();
+		await closeEngine();
+		await pool.end();
+	});
 };
 
 export const handle: Handle = async ({ event, resolve }) => {

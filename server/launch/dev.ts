@@ -24,6 +24,6 @@ await launch(async (onEnd) => {
 		vite.kill('SIGTERM');
 		await ended;
 	});
-	console.log(`Caught mails: ${mailsAddress}`);
+	console.log(`Holdfast in development: ${environment.ORIGIN}   Caught mails: ${mailsAddress}`);
 	return { ended };
 });
