@@ -43,6 +43,7 @@ export default {
 		borderRadius: { none: '0' },
 		boxShadow: { none: 'none' },
 		borderWidth: { 0: '0', DEFAULT: '1px', mid: '1.5px', 2: '2px' },
-		screens: { phone: { max: '639px' }, narrow: { max: '1099px' }, sm: '640px', lg: '1100px' }
+		// Where both hold the later one wins: a phone is narrow too.
+		screens: { narrow: { max: '1099px' }, phone: { max: '639px' }, sm: '640px', lg: '1100px' }
 	}
 } satisfies Config;
