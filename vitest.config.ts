@@ -29,7 +29,7 @@ export default mergeConfig(
 					extends: true,
 					test: {
 						name: 'crash',
-						include: ['tests/crash/**/*.spec.ts'],
+						include: ['tests/{crash,process}/**/*.spec.ts'],
 						...database,
 						testTimeout: 120_000
 					}

@@ -40,4 +40,8 @@ export async function buildAll(): Promise<void> {
 	stampBuild(digest);
 }
 
-if (process.argv[1] === import.meta.filename) await buildAll();
+if (process.argv[1] === import.meta.filename)
+	await buildAll().catch((error: Error) => {
+		console.error(error.message);
+		process.exitCode = 1;
+	});
