@@ -16,3 +16,12 @@ export const comparedInput = z.object({
 	from: z.string().min(1).max(8),
 	to: z.string().min(1).max(8).default('now')
 });
+
+const WAIVER_FIELD = 'waiver:';
+
+/** The waivers of the freeze form: one field for each failing check; an empty one is no waiver. */
+export function waiversFromForm(form: FormData): { itemId: string; reason: string }[] {
+	return [...form]
+		.filter(([name, value]) => name.startsWith(WAIVER_FIELD) && String(value).trim() !== '')
+		.map(([name, value]) => ({ itemId: name.slice(WAIVER_FIELD.length), reason: String(value) }));
+}

@@ -1,7 +1,7 @@
 /** The two sides of a comparison: baselines by their revision letter, or the note as it is now. */
 import { and, desc, eq, isNotNull } from 'drizzle-orm';
 import { compare } from '$lib/note/comparison';
-import type { Side } from '$lib/note/readings';
+import { readingsOf, type Side } from '$lib/note/readings';
 import type { Note } from '../auth/guard';
 import { db } from '../db';
 import { noteItem, user } from '../db/schema';
@@ -36,10 +36,22 @@ export async function compareSides(note: Note, from: string, to: string) {
 		from: before.head,
 		to: after.head,
 		comparison: compare(before.side, after.side),
+		symbols: { ...symbolsOf(before.side), ...symbolsOf(after.side) },
 		authors: to === NOW ? await authorsOf(note.id) : {}
 	};
 }
 export type ComparedSides = Awaited<ReturnType<typeof compareSides>>;
+
+/** TeX of each quantity's symbol, for live values within a text. */
+function symbolsOf({ content, results }: Side): Record<string, string> {
+	const byId = new Map(results.map((result) => [result.id, result]));
+	const readings = content.items.flatMap((item) => readingsOf(item, byId.get(item.id)));
+	return Object.fromEntries(
+		readings
+			.filter(({ symbolTex }) => symbolTex !== '')
+			.map(({ itemId, output, symbolTex }) => [output ? `${itemId}.${output}` : itemId, symbolTex])
+	);
+}
 
 async function sideOf(note: Note, which: string): Promise<{ head: SideHead; side: Side }> {
 	if (which === NOW) {
