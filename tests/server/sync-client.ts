@@ -18,13 +18,15 @@ const ORIGIN = process.env.ORIGIN!;
 
 export async function startServer(
 	limits: Partial<Limits> = {},
-	evaluate: Evaluate = () => Promise.resolve([])
+	evaluate: Evaluate = () => Promise.resolve([]),
+	/** That of a server that was stopped, to take its place. */
+	port = 0
 ) {
 	const sync = new SyncServer(evaluate, limits);
 	await sync.start();
 	const http = createServer();
 	http.on('upgrade', (request, socket, head) => sync.upgrade(request, socket, head));
-	await new Promise<void>((resolve) => http.listen(0, '127.0.0.1', resolve));
+	await new Promise<void>((resolve) => http.listen(port, '127.0.0.1', resolve));
 	return {
 		sync,
 		url: `ws://127.0.0.1:${(http.address() as AddressInfo).port}`,
