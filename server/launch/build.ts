@@ -12,6 +12,7 @@ import { digestOfSources, stampBuild } from './build-stamp';
 const PROGRAMS = {
 	serve: 'server/main.ts',
 	migrate: 'server/launch/migrate-command.ts',
+	'make-administrator': 'server/make-administrator.ts',
 	'verify-baseline': 'server/verify-baseline.ts'
 };
 

@@ -35,6 +35,11 @@ export function keepInstallation(installation: Installation): void {
 	writeFileSync(FILE, JSON.stringify(installation, null, '\t'), { mode: 0o600 });
 }
 
+/** For programs that are run beside `npm start` and have no environment of their own. */
+export function keepEnvironment(environment: Record<string, string>): void {
+	writeFileSync(join(DATA, 'environment.json'), JSON.stringify(environment), { mode: 0o600 });
+}
+
 export function makeDataFolder(): void {
 	mkdirSync(DATA, { recursive: true });
 	if (statSync(DATA).uid !== process.getuid?.())

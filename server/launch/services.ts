@@ -6,7 +6,7 @@ import { startMailPage } from '../fakes/mail-page';
 import { startS3Fake } from '../fakes/s3';
 import { startSmtpFake } from '../fakes/smtp';
 import { clusterFolder } from './cluster-folder';
-import { DATA, keepInstallation, readInstallation } from './installation';
+import { DATA, keepEnvironment, keepInstallation, readInstallation } from './installation';
 import type { OnEnd } from './launch';
 import { migrateDatabase } from './migrate';
 import { freePort } from './ports';
@@ -54,6 +54,8 @@ export async function startServices(engineWorker: string, onEnd: OnEnd): Promise
 		// A forecast about versions of Node.js, for those who maintain this and not for who starts it.
 		AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true'
 	};
+
+	keepEnvironment(environment);
 
 	const first = !installation.seeded;
 	await makeDatabase(cluster.url('postgres'), first);
