@@ -70,7 +70,7 @@ async function refuseTaken(tx: Db, programmeId: string, number: string): Promise
 }
 
 /** The number after the highest of the usual form, e.g. CL-DN-005 after CL-DN-004. */
-async function nextNumber(tx: Db, programmeId: string, code: string): Promise<string> {
+export async function nextNumber(tx: Db, programmeId: string, code: string): Promise<string> {
 	const prefix = `${code}-DN-`;
 	const rows = await tx
 		.select({ number: note.number })
