@@ -13,5 +13,7 @@ export function featureAt(item: Item, strand: Strand): number {
 /** Sections are parted by 2 px, rows by 1 px. Padding only: a margin would break the line. */
 export function ruleAbove(item: Item, first: boolean): string {
 	if (first) return '';
-	return item.kind === 'section' ? 'border-t-2 border-ink' : 'border-t border-rule';
+	return item.kind === 'section'
+		? 'rule-above border-t-2 border-ink'
+		: 'rule-above border-t border-rule';
 }

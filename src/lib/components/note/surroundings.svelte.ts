@@ -5,6 +5,8 @@
 import { createQuery, QueryClient } from '@tanstack/svelte-query';
 import type { ItemChange } from '$lib/note/compare';
 import type { Side } from '$lib/note/readings';
+import type { Baseline } from '$lib/server/baselines/read';
+import type { CheckMovement } from '$lib/server/notes/written';
 import type { Role } from '$lib/server/auth/permissions';
 import type { RemarkView } from '$lib/server/remarks/list';
 import type { NoteSession } from '$lib/sync/note-session.svelte';
@@ -14,24 +16,11 @@ import { groupBy } from './group';
 import type { NoteSheet } from './sheet.svelte';
 import type { Was } from './sheet-view';
 
-export type Movement = {
-	itemId: string;
-	stateBefore: string;
-	state: string;
-	causeItemId: string | null;
-	causeBefore: string;
-	causeAfter: string;
-	movedBy: string | null;
-	movedAt: string;
-};
-
-/** The last frozen sheet. */
-export type Baseline = Side & { id: string; revision: string; frozenAt: string; digest: string };
-
 type Given = {
 	noteId: string;
 	me: { id: string; name: string };
-	role: Role;
+	/** A role may change while the note is open. */
+	role: () => Role;
 	session: NoteSession;
 	sheet: NoteSheet;
 };
@@ -42,9 +31,9 @@ const SETTLED = 250;
 export class NoteSurroundings {
 	readonly noteId: string;
 	readonly me: Given['me'];
-	readonly role: Role;
 	changes = $state.raw<ReadonlyMap<string, ItemChange> | null>(null);
 
+	#role: () => Role;
 	#session: NoteSession;
 	#sheet: NoteSheet;
 	#client = new QueryClient({ defaultOptions: { queries: { staleTime: Infinity, retry: 2 } } });
@@ -56,7 +45,7 @@ export class NoteSurroundings {
 	constructor({ noteId, me, role, session, sheet }: Given) {
 		this.noteId = noteId;
 		this.me = me;
-		this.role = role;
+		this.#role = role;
 		this.#session = session;
 		this.#sheet = sheet;
 		const query = <T>(kind: string, path: string) =>
@@ -70,13 +59,17 @@ export class NoteSurroundings {
 				() => this.#client
 			);
 		this.#remarks = query<RemarkView[]>('remarks', 'remarks');
-		this.#movements = query<Movement[]>('movements', 'movements');
+		this.#movements = query<CheckMovement[]>('movements', 'movements');
 		this.#baseline = query<Baseline | null>('baselines', 'baselines/latest');
 
 		$effect(() =>
 			session.on('event', ({ kind }) => void this.#client.invalidateQueries({ queryKey: [kind] }))
 		);
 		$effect(() => this.#tellChanges(sheet));
+	}
+
+	get role(): Role {
+		return this.#role();
 	}
 
 	get baseline(): Baseline | null {
@@ -108,7 +101,7 @@ export class NoteSurroundings {
 	}
 
 	/** What brought a check to the state that it is in; what brought it to an earlier one is over. */
-	movementOf(id: string): Movement | undefined {
+	movementOf(id: string): CheckMovement | undefined {
 		const movement = this.#movementByItem.get(id)?.[0];
 		const result = this.#sheet.result(id);
 		return result?.kind === 'check' && movement?.state === result.state ? movement : undefined;

@@ -33,10 +33,9 @@ export function upload(
 	};
 	request.onerror = () => (state.failure = 'The connection was lost. Try again.');
 	request.onabort = () => (state.failure = 'You cancelled it.');
-	request.open('POST', `/api/notes/${noteId}/evidence`);
+	request.open('POST', `/api/notes/${noteId}/evidence?name=${encodeURIComponent(file.name)}`);
 	// The body is the file itself: nothing is held in memory whole on either side.
 	request.setRequestHeader('content-type', file.type || 'application/octet-stream');
-	request.setRequestHeader('x-file-name', encodeURIComponent(file.name));
 	request.send(file);
 	return state;
 }

@@ -43,8 +43,13 @@ export class NoteWork {
 	constructor(
 		readonly session: NoteSession,
 		readonly sheet: NoteSheet,
-		readonly can: Can
+		/** A role may change while the note is open. */
+		private readonly granted: () => Can
 	) {}
+
+	get can(): Can {
+		return this.granted();
+	}
 
 	get mayEdit(): boolean {
 		return this.can.edit && this.wide && !['refused', 'closed'].includes(this.session.status);
