@@ -95,6 +95,30 @@ describe('A document holding anything at all', () => {
 		);
 	});
 
+	it('takes an item at any place, whatever stands for the order of those around it', () => {
+		const order = fc.oneof(
+			fc.string({ maxLength: 30 }),
+			fc.stringMatching(/^[A-Za-z][0-9A-Za-z]{0,30}$/),
+			fc.stringMatching(/^[a-c][0-9A-Za-z]{1,4}0*$/)
+		);
+		fc.assert(
+			fc.property(fc.array(order, { minLength: 1, maxLength: 6 }), fc.nat(6), (orders, place) => {
+				const doc = new Y.Doc();
+				for (const key of orders)
+					itemsMap(doc)
+						.get(addItem(doc, { kind: 'section' }, { after: null }))!
+						.set('order', key);
+				const before = orderedIds(doc);
+				const after = before[place % before.length]!;
+				const id = addItem(doc, { kind: 'section' }, { after });
+				const now = orderedIds(doc);
+				expect(now.filter((other) => other !== id)).toEqual(before);
+				expect(now.indexOf(id)).toBeGreaterThan(now.indexOf(after));
+			}),
+			{ numRuns: 500 }
+		);
+	});
+
 	it('blanks a field of a wrong form and keeps the others', () => {
 		const doc = new Y.Doc();
 		const id = addItem(

@@ -11,7 +11,8 @@ const FIRST_KEY = generateKeyBetween(null, null);
 /** An item's key. A document can hold anything there; what is no key counts as the first one. */
 function orderKey(item: ItemMap): string {
 	const key = item.get('order');
-	if (typeof key !== 'string') return FIRST_KEY;
+	// The library looks at the form of a key, not at its letters.
+	if (typeof key !== 'string' || !/^[0-9A-Za-z]+$/.test(key)) return FIRST_KEY;
 	try {
 		generateKeyBetween(key, null);
 		return key;
