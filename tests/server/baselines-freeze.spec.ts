@@ -56,7 +56,9 @@ test('a failing check without a waiver refuses the freeze, and is named', async 
 	await expect(frozenBy()).rejects.toMatchObject({
 		status: 422,
 		message: `${note.number} cannot be frozen: 1.4 fails.`,
-		details: { inTheWay: [{ kind: 'fails', itemId: 'c', reason: 'Margin −0.056.' }] }
+		details: {
+			inTheWay: [{ kind: 'fails', itemId: 'c', reason: 'Short by 2.80\u202fGPa, margin −0.056.' }]
+		}
 	});
 	expect(await rows()).toEqual([]);
 });

@@ -111,8 +111,8 @@ test('a comparison gives each figure that moved, by how much and by what', () =>
 	const { movements } = compare(before, now);
 	expect(movements.map(({ number, change, cause }) => [number, change, cause])).toEqual([
 		['1.1', expect.closeTo(-0.056, 12), { kind: 'typed', fields: ['value'] }],
-		['1.3', expect.closeTo(-0.056, 12), { kind: 'upstream', itemId: 'eta', number: '1.1' }],
-		['1.4', expect.closeTo(-0.056, 12), { kind: 'upstream', itemId: 'sigma', number: '1.3' }]
+		['1.3', expect.closeTo(-0.056, 12), { kind: 'upstream', numbers: ['1.1'] }],
+		['1.4', expect.closeTo(-0.056, 12), { kind: 'upstream', numbers: ['1.3'] }]
 	]);
 	expect(movements[2]!.before.check).toMatchObject({ state: 'holds' });
 	expect(movements[2]!.after.check).toMatchObject({ state: 'fails', margin: { value: -0.056 } });

@@ -9,8 +9,8 @@ import { differenceOf, proseTokens, textTokens, type TextDifference } from './wo
 export type Cause =
 	/** Its own text was changed: the names of the fields. */
 	| { kind: 'typed'; fields: string[] }
-	/** An item that it uses moved: the one that moved most. */
-	| { kind: 'upstream'; itemId: string; number: string }
+	/** Items that it uses moved: their numbers, what moved most first. */
+	| { kind: 'upstream'; numbers: string[] }
 	| { kind: 'thin limit' }
 	/** Nothing that it reads changed: another version of the engine. */
 	| { kind: 'engine' };
@@ -56,10 +56,10 @@ export function compare(from: Side, to: Side): Comparison {
 		const id = movement.after.itemId;
 		const typed = (fieldsOf.get(id) ?? []).filter((field) => !WORDING_ONLY.has(field));
 		if (typed.length > 0) return { ...movement, cause: { kind: 'typed', fields: typed } };
-		const upstream = mostMoved(moved.filter(({ after }) => uses.get(id)?.includes(after.itemId)));
-		if (upstream) {
-			const { number } = upstream;
-			return { ...movement, cause: { kind: 'upstream', itemId: upstream.after.itemId, number } };
+		const upstream = moved.filter(({ after }) => uses.get(id)?.includes(after.itemId));
+		if (upstream.length > 0) {
+			const numbers = new Set(upstream.sort(mostFirst).map(({ number }) => number));
+			return { ...movement, cause: { kind: 'upstream', numbers: [...numbers] } };
 		}
 		return { ...movement, cause: { kind: limitMoved ? 'thin limit' : 'engine' } };
 	});
@@ -98,7 +98,9 @@ function entriesOf({ content, results }: Side): Map<string, Entry> {
 	);
 }
 
-function movedReadings(was: Entry, now: Entry): Omit<Movement, 'cause'>[] {
+type Moved = Omit<Movement, 'cause'>;
+
+function movedReadings(was: Entry, now: Entry): Moved[] {
 	return now.readings.flatMap((after) => {
 		const before = was.readings.find(({ output }) => output === after.output);
 		if (!before || !readingMoved(before, after)) return [];
@@ -107,18 +109,10 @@ function movedReadings(was: Entry, now: Entry): Omit<Movement, 'cause'>[] {
 	});
 }
 
-function mostMoved<T extends Omit<Movement, 'cause'>>(movements: T[]): T | undefined {
-	return movements.reduce<T | undefined>(
-		(most, next) => (most && weight(most) >= weight(next) ? most : next),
-		undefined
-	);
-}
-
-const mostFirst = (a: Movement, b: Movement) =>
-	weight(a) === weight(b) ? 0 : weight(b) - weight(a);
+const mostFirst = (a: Moved, b: Moved) => (weight(a) === weight(b) ? 0 : weight(b) - weight(a));
 
 /** A value lost or gained weighs more than any change; where only the margin moved, it counts. */
-function weight({ before, after, change }: Omit<Movement, 'cause'>): number {
+function weight({ before, after, change }: Moved): number {
 	if (change === null) return Infinity;
 	if (change !== 0) return Math.abs(change);
 	return Math.abs((after.check?.margin?.relative ?? 0) - (before.check?.margin?.relative ?? 0));

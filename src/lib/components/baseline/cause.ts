@@ -1,6 +1,9 @@
 import { FIELD_WORDS } from '$lib/note/compare';
 import type { Cause } from '$lib/note/comparison';
 
+/** Causes that are named; the rest is told by an ellipsis. */
+const SHOWN = 3;
+
 /** Why a figure moved, in a few words. */
 export function causeWords(cause: Cause): string {
 	switch (cause.kind) {
@@ -9,7 +12,7 @@ export function causeWords(cause: Cause): string {
 			return `by its ${cause.fields.map((field) => FIELD_WORDS[field] ?? field).join(', ')}`;
 		}
 		case 'upstream':
-			return `by ${cause.number}`;
+			return `by ${cause.numbers.slice(0, SHOWN).join(', ')}${cause.numbers.length > SHOWN ? ' …' : ''}`;
 		case 'thin limit':
 			return 'by the thin limit';
 		case 'engine':

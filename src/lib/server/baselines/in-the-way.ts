@@ -1,6 +1,7 @@
 /** What stands in the way of freezing a note. */
 import type { Fault, ItemResult, Outcome } from '$lib/engine/calc/results';
-import { marginWords } from '$lib/components/note/figures';
+import { amount, marginWords } from '$lib/components/note/figures';
+import { capital } from '$lib/counts';
 import type { Item, NoteContent } from '$lib/note/items';
 import { numberItems } from '$lib/note/numbering';
 import { descriptionOf } from '$lib/note/pinned';
@@ -43,8 +44,10 @@ function obstacle(result: ItemResult | undefined): Pick<InTheWay, 'kind' | 'reas
 		}
 		case 'check': {
 			if (result.state === 'fails') {
-				const margin = result.margin ? `Margin ${marginWords(result.margin)}.` : '';
-				return { kind: 'fails', reason: margin };
+				const short = result.shortBy && `short by ${amount(result.shortBy)}`;
+				const margin = result.margin && `margin ${marginWords(result.margin)}`;
+				const words = [short, margin].filter(Boolean).join(', ');
+				return { kind: 'fails', reason: `${capital(words)}.` };
 			}
 			if (result.state !== 'waits') return null;
 			const sides = [result.left, result.right, result.tolerance].map(withoutValue);
