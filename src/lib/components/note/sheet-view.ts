@@ -15,7 +15,12 @@ export type SheetView = {
 };
 
 /** What an item was in the last baseline: its revision letter and the words beside the triangle. */
-export type Was = { letter: string; words: string };
+export type Was = {
+	letter: string;
+	words: string;
+	/** What outputs of a line model were, by their name. */
+	outputs?: Record<string, string>;
+};
 
 /** A sheet that does not change: a baseline. */
 export function frozenSheet(content: NoteContent, results: readonly ItemResult[]): SheetView {

@@ -109,7 +109,9 @@ export class NoteSurroundings {
 
 	wasOf(id: string): Was | null {
 		const change = this.changes?.get(id);
-		return change && this.baseline ? { letter: this.baseline.revision, words: change.words } : null;
+		if (!change || !this.baseline) return null;
+		const { words, outputs } = change;
+		return { letter: this.baseline.revision, words, outputs };
 	}
 
 	refetchRemarks(): void {
