@@ -6,11 +6,16 @@
  */
 import { MessageChannel } from 'node:worker_threads';
 import { Piscina } from 'piscina';
+import { Problem } from '../problems';
 
 export type Limits = { worker: string; milliseconds: number; megabytes: number; threads: number };
 
 /** Said to the person whose note it is. */
-export class EngineLimitError extends Error {}
+export class EngineLimitError extends Problem {
+	constructor(message: string) {
+		super(422, message);
+	}
+}
 
 const LONGEST_QUEUE = 200;
 const IDLE_MILLISECONDS = 60_000;
