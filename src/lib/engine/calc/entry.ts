@@ -66,6 +66,13 @@ function readSymbol(typed: string): { symbol: string; trouble: Fault | null } {
 function quantityEntry(item: SheetItem & { kind: 'given' | 'calculation' }): Entry {
 	const { symbol, trouble } = readSymbol(item.symbol);
 	const formula = item.kind === 'calculation' ? new Formula(item.expression, 'expression') : null;
+	const about = {
+		id: item.id,
+		kind: item.kind,
+		symbol: item.symbol.trim(),
+		tex: formula?.tex ?? '',
+		symbolTex: symbol === '' ? '' : symbolTex(symbol)
+	};
 	return {
 		item,
 		symbol,
@@ -76,14 +83,7 @@ function quantityEntry(item: SheetItem & { kind: 'given' | 'calculation' }): Ent
 			const { outcome, type } = against
 				? { outcome: { state: 'fault', faults: [against] } as Outcome, type: null }
 				: evaluateQuantity(item, formula, scope);
-			const body: Body = {
-				id: item.id,
-				kind: item.kind,
-				symbol: item.symbol.trim(),
-				outcome,
-				tex: formula?.tex ?? '',
-				symbolTex: symbol === '' ? '' : symbolTex(symbol)
-			};
+			const body: Body = { ...about, outcome };
 			return {
 				body,
 				supplies: symbol === '' ? NOTHING : new Map([[symbol, supply(item.id, outcome, type)]])

@@ -1,16 +1,15 @@
 /** One typed expression: parsed once, its dimension checked when what it names changes, then run on floats. */
-import { CONSTANTS } from '../quantities/constants';
 import { significant } from '../quantities/number';
-import { UNITS } from '../quantities/unit-table';
 import { equal, isPure } from '../quantities/dimension';
 import { compile, type Program } from './compile';
 import { Refusal } from './faults';
 import { inferValue, type ValueType } from './infer';
+import { ambiguousName, modelName, unknownName } from './name-refusals';
 import { parse, type Parsed } from './parse';
 import { asTex } from './print';
 import type { Fault } from './results';
 import type { Scope, Supply } from './scope';
-import { children, type Expr } from './tree';
+import { leaves, type Expr } from './tree';
 
 type ValueSupply = Supply & { state: 'value' };
 
@@ -29,8 +28,13 @@ export class Formula {
 	private parsed: Parsed | null = null;
 	private fault: Fault | null = null;
 	private program: Program | null = null;
-	private inputTypes: ValueType[] | null = null;
+	/** What stands behind the names, and for which of it the type below was found. */
+	private inputs: ValueSupply[] = [];
+	private values: number[] = [];
+	private inferredFor: ValueSupply[] = [];
 	private type: ValueType | Refusal | null = null;
+	private unit: string | null = null;
+	private digits: number | null = null;
 
 	constructor(
 		text: string,
@@ -64,135 +68,106 @@ export class Formula {
 	evaluate(scope: Scope): FormulaOutcome {
 		if (this.blank) return { state: 'blank' };
 		if (!this.parsed) return { state: 'fault', faults: [this.fault!] };
-		const faults = this.nameFaults(this.parsed, scope);
-		if (faults.length > 0) return { state: 'fault', faults };
-
-		const supplies = this.names.map((name) => scope.supply(name) as Supply);
-		const missing = this.names.filter((_, i) => supplies[i]!.state === 'missing');
-		if (missing.length > 0) {
-			const roots = supplies.flatMap((s) => (s.state === 'missing' ? s.roots : []));
-			return { state: 'waits', for: missing, rootIds: [...new Set(roots)] };
+		const { expr, unitNames } = this.parsed;
+		if (unitNames.some(({ name }) => scope.defines(name))) return this.objections(scope);
+		let missing = false;
+		for (let i = 0; i < this.names.length; i += 1) {
+			const supply = scope.supply(this.names[i]!);
+			if (typeof supply === 'string') return this.objections(scope);
+			if (supply.state === 'missing') missing = true;
+			else {
+				this.inputs[i] = supply;
+				this.values[i] = supply.si;
+			}
 		}
-		const inputs = supplies as ValueSupply[];
+		if (missing) return this.waits(scope);
 		try {
-			const type = this.typed(this.parsed.expr, inputs);
-			this.program ??= compile(this.parsed.expr, this.names);
-			const si = this.program(inputs.map((input) => input.si));
-			return { state: 'value', si, type, ...this.manner(this.parsed.expr, type, inputs) };
+			const type = this.typed(expr);
+			this.program ??= compile(expr, this.names);
+			const si = this.program(this.values);
+			return { state: 'value', si, type, unit: this.unit, digits: this.digits };
 		} catch (error) {
 			return { state: 'fault', faults: [asFault(error, this.field)] };
 		}
 	}
 
-	/** The dimension, inferred anew only when that of something named has changed. */
-	private typed(expr: Expr, inputs: ValueSupply[]): ValueType {
-		const types = inputs.map((input) => input.type);
-		if (!this.inputTypes?.every((type, i) => sameType(type, types[i]!))) {
-			this.inputTypes = types;
-			try {
-				this.type = inferValue(expr, (name) => types[this.names.indexOf(name)]!);
-			} catch (error) {
-				if (!(error instanceof Refusal)) throw error;
-				this.type = error;
-			}
+	private waits(scope: Scope): FormulaOutcome {
+		const missing = this.names.flatMap((name) => {
+			const supply = scope.supply(name) as Supply;
+			return supply.state === 'missing' ? [{ name, roots: supply.roots }] : [];
+		});
+		return {
+			state: 'waits',
+			for: missing.map(({ name }) => name),
+			rootIds: [...new Set(missing.flatMap(({ roots }) => roots))]
+		};
+	}
+
+	/** The dimension and the way of showing, found anew only when those of something named have changed. */
+	private typed(expr: Expr): ValueType {
+		if (!this.type || !this.inputs.every((input, i) => sameManner(input, this.inferredFor[i]))) {
+			this.inferredFor = [...this.inputs];
+			this.type = inferred(expr, (name) => this.input(name).type);
+			if (!(this.type instanceof Refusal)) this.findManner(expr, this.type);
 		}
 		if (this.type instanceof Refusal) throw this.type;
-		return this.type!;
+		return this.type;
+	}
+
+	private input(name: string): ValueSupply {
+		return this.inputs[this.names.indexOf(name)]!;
 	}
 
 	/** The unit of the first thing named that has the dimension of the whole; digits where it is the whole. */
-	private manner(expr: Expr, type: ValueType, inputs: ValueSupply[]) {
-		const own = (leaf: Expr) =>
-			leaf.kind === 'name' ? inputs[this.names.indexOf(leaf.name)]! : null;
-		const whole =
-			expr.kind === 'number'
-				? significant(String(expr.value))
-				: expr.kind === 'literal'
-					? expr.digits
-					: (own(expr)?.digits ?? null);
-		if (isPure(type.dimension)) return { unit: own(expr)?.unit ?? null, digits: whole };
-		for (const leaf of leaves(expr)) {
-			if (leaf.kind === 'literal' && equal(leaf.unit.dimension, type.dimension)) {
-				return { unit: leaf.unit.text, digits: whole };
-			}
-			const input = own(leaf);
-			if (input && equal(input.type.dimension, type.dimension)) {
-				return { unit: input.unit, digits: whole };
-			}
-		}
-		return { unit: null, digits: whole };
+	private findManner(expr: Expr, type: ValueType): void {
+		const own = (leaf: Expr) => {
+			if (leaf.kind === 'number') return { unit: null, digits: significant(String(leaf.value)) };
+			if (leaf.kind === 'literal') return { unit: leaf.unit.text, digits: leaf.digits };
+			return leaf.kind === 'name' ? this.input(leaf.name) : null;
+		};
+		const alike = (leaf: Expr) => {
+			if (leaf.kind === 'literal') return equal(leaf.unit.dimension, type.dimension);
+			return leaf.kind === 'name' && equal(this.input(leaf.name).type.dimension, type.dimension);
+		};
+		const whole = own(expr);
+		const first = isPure(type.dimension) ? undefined : [...leaves(expr)].find(alike);
+		this.digits = whole?.digits ?? null;
+		this.unit = whole?.unit ?? (first && own(first)?.unit) ?? null;
 	}
 
-	private nameFaults(parsed: Parsed, scope: Scope): Fault[] {
-		const ambiguous = parsed.unitNames
+	/** What is wrong with names, all of it at once. */
+	private objections(scope: Scope): FormulaOutcome {
+		const { expr, unitNames } = this.parsed!;
+		const ambiguous = unitNames
 			.filter(({ name }) => scope.defines(name))
-			.map(({ name, from, to }) =>
-				new Refusal('ambiguous-name', `“${name}” is a unit and also a quantity of this note.`, {
-					remedy: `Write “*” before it to mean the quantity, or give the quantity another symbol.`,
-					place: { from, to }
-				}).in(this.field)
-			);
+			.map(({ name, from, to }) => ambiguousName(name, { from, to }));
 		const unknown = this.names.flatMap((name) => {
 			const supply = scope.supply(name);
-			if (supply === 'unknown') return [unknownName(name, parsed.expr, scope).in(this.field)];
-			if (supply === 'model') return [modelName(name, parsed.expr, scope).in(this.field)];
-			return [];
+			if (supply === 'unknown') return [unknownName(name, expr, scope)];
+			return supply === 'model' ? [modelName(name, expr, scope)] : [];
 		});
-		return [...ambiguous, ...unknown];
+		const faults = [...ambiguous, ...unknown].map((refusal) => refusal.in(this.field));
+		return { state: 'fault', faults };
 	}
 }
 
-const sameType = (a: ValueType, b: ValueType) =>
-	a === b || (a.scale === b.scale && equal(a.dimension, b.dimension));
-
-function* leaves(expr: Expr): Generator<Expr> {
-	const parts = children(expr);
-	if (parts.length === 0) yield expr;
-	for (const part of parts) yield* leaves(part);
+function inferred(expr: Expr, typeOf: (name: string) => ValueType): ValueType | Refusal {
+	try {
+		return inferValue(expr, typeOf);
+	} catch (error) {
+		if (error instanceof Refusal) return error;
+		throw error;
+	}
 }
 
-function placeOfName(expr: Expr, name: string) {
-	for (const leaf of leaves(expr)) {
-		if (leaf.kind === 'name' && leaf.name === name) return leaf.place;
-	}
-	return null;
-}
-
-function unknownName(name: string, expr: Expr, scope: Scope): Refusal {
-	const near = scope.near(name);
-	const place = placeOfName(expr, name);
-	const [model] = name.split('.');
-	if (name !== model && scope.supply(model!) === 'model') {
-		return new Refusal('unknown-symbol', `${model} gives no “${name.slice(model!.length + 1)}”.`, {
-			place,
-			near
-		});
-	}
-	if (name !== model && [...CONSTANTS.keys()].some((known) => known.startsWith(`${model}.`))) {
-		return new Refusal('unknown-symbol', `There is no constant ${name}.`, { place, near });
-	}
-	if (name === 'to' || name === 'in') {
-		return new Refusal('not-allowed', `“${name}” converts nothing here.`, {
-			remedy: 'Choose the unit to show the value in beside the expression.',
-			place
-		});
-	}
-	const remedy = UNITS.has(name)
-		? `If the unit is meant, write it directly after a number: 1 ${name}.`
-		: '';
-	return new Refusal('unknown-symbol', `There is no quantity ${name} in this note.`, {
-		remedy,
-		place,
-		near
-	});
-}
-
-const modelName = (name: string, expr: Expr, scope: Scope) =>
-	new Refusal('unknown-symbol', `${name} is a line model, not a quantity.`, {
-		remedy: `Name one of the quantities that it gives, e.g. ${name}.taper.`,
-		place: placeOfName(expr, name),
-		near: scope.near(`${name}.`)
-	});
+/** Whether one input stands for another of the same dimension, shown alike. */
+const sameManner = (a: ValueSupply, b: ValueSupply | undefined) =>
+	a === b ||
+	(b !== undefined &&
+		a.unit === b.unit &&
+		a.digits === b.digits &&
+		a.type.scale === b.type.scale &&
+		equal(a.type.dimension, b.type.dimension));
 
 function asFault(error: unknown, field: string): Fault {
 	if (error instanceof Refusal) return error.in(field);

@@ -70,7 +70,7 @@ export function wayRound(start: string, suppliers: (id: string) => readonly stri
 /** Everything downstream of the seeds, the seeds included. */
 export function reach(
 	seeds: Iterable<string>,
-	users: (id: string) => Iterable<string>
+	users: (id: string) => readonly string[]
 ): Set<string> {
 	const reached = new Set(seeds);
 	for (const id of reached) for (const user of users(id)) reached.add(user);

@@ -10,7 +10,7 @@ import {
 	inWords,
 	type Dimension
 } from '../quantities/dimension';
-import { formatFigure } from '../quantities/format';
+import { formatFigure, kilometres } from '../quantities/format';
 import { BODIES } from '../line/bodies';
 import { bodyField, type Field } from '../line/field';
 import { profileTaper, sizeTaper, type TaperInput, type Told } from '../line/taper';
@@ -177,19 +177,18 @@ function taperInput(
 
 /** Why a line cannot end at this radius; null when it can. */
 function topRefusal(field: Field, top: number): Fault | null {
-	const km = (metres: number) => `${formatFigure(Math.round(metres / 1e3), 6)} km`;
 	const synchronous = field.synchronous - field.base;
 	if (top <= field.synchronous * (1 + 1e-9)) {
 		return fault(
 			'refused',
-			`The top is ${km(top - field.base)} up, not above synchronous height at ${km(synchronous)}: ` +
+			`The top is ${kilometres(top - field.base)} up, not above synchronous height at ${kilometres(synchronous)}: ` +
 				'nothing there pulls outwards to hold the line up.',
-			{ remedy: `Set the top above ${km(synchronous)}.` }
+			{ remedy: `Set the top above ${kilometres(synchronous)}.` }
 		);
 	}
 	if (top <= field.synchronous * 1000) return null;
 	return fault(
 		'refused',
-		`The top is ${km(top - field.base)} up, more than a thousand synchronous radii: one body alone says nothing there.`
+		`The top is ${kilometres(top - field.base)} up, more than a thousand synchronous radii: one body alone says nothing there.`
 	);
 }

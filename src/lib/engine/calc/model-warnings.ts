@@ -1,16 +1,15 @@
 /** What stands beside the results of a line model: what is left out, what to heed. */
 import { BODIES, type BodyName } from '../line/bodies';
-import { formatFigure } from '../quantities/format';
+import { kilometres } from '../quantities/format';
 import type { Field } from '../line/field';
 
 export function warnings(body: BodyName, field: Field, factorOfSafety: number): string[] {
 	const { label, j2, l1 } = BODIES[body];
-	const km = (metres: number) => `${formatFigure(Math.round(metres / 1e3), 6)} km`;
 	return [
 		...(l1 && field.synchronous > l1.value
 			? [
-					`${label} as one body: the synchronous radius of ${km(field.synchronous)} lies beyond its L1 at ` +
-						`${km(l1.value)}, where the primary pulls more. These figures do not describe a line there.`
+					`${label} as one body: the synchronous radius of ${kilometres(field.synchronous)} lies beyond its L1 at ` +
+						`${kilometres(l1.value)}, where the primary pulls more. These figures do not describe a line there.`
 				]
 			: []),
 		...(factorOfSafety < 1

@@ -114,7 +114,9 @@ function print(expr: Expr, notation: Notation): string {
 		case 'constant':
 			return notation.constant(expr);
 		case 'negate':
-			return notation.minus + within(LEVEL.product, expr.of);
+			return (
+				notation.minus + within(expr.of.kind === 'negate' ? LEVEL.call : LEVEL.product, expr.of)
+			);
 		case 'binary':
 			return binary(expr, notation, within);
 		case 'compare':
@@ -147,11 +149,16 @@ function binary(
 	within: (level: number, child: Expr) => string
 ): string {
 	const { left, right } = expr;
+	// A sign behind another one is set in parentheses: a − (−b).
+	const unsigned = (level: number, child: Expr) => {
+		const text = within(level, child);
+		return text.startsWith(notation.minus) ? notation.group(text) : text;
+	};
 	switch (expr.op) {
 		case '+':
-			return `${within(LEVEL.sum, left)} + ${within(LEVEL.product, right)}`;
+			return `${within(LEVEL.sum, left)} + ${unsigned(LEVEL.product, right)}`;
 		case '-':
-			return `${within(LEVEL.sum, left)} ${notation.minus} ${within(LEVEL.product, right)}`;
+			return `${within(LEVEL.sum, left)} ${notation.minus} ${unsigned(LEVEL.product, right)}`;
 		case '*':
 			return within(LEVEL.product, left) + notation.times(left, right) + within(LEVEL.call, right);
 		case '/':
@@ -174,7 +181,7 @@ function levelOf(expr: Expr): number {
 			return LEVEL.compare;
 		case 'negate':
 		case 'not':
-			return LEVEL.sum;
+			return LEVEL.product;
 		case 'binary':
 			return {
 				'+': LEVEL.sum,

@@ -8,6 +8,7 @@ import { createEntry, type Body, type Entry } from './entry';
 import { fault } from './faults';
 import { components, reach, wayRound } from './graph';
 import type { SheetChange } from './items';
+import { Links } from './links';
 import { nearest } from './near';
 import type { Fault, ItemResult, Outcome } from './results';
 import { same } from './same';
@@ -42,47 +43,47 @@ export function createSheet(): Sheet {
 
 class LiveSheet implements Sheet {
 	private held = new Map<string, Held>();
-	/** Ids that define a name, and ids that mention it. */
-	private definers = new Index();
-	private mentioners = new Index();
-	/** Place of each id on the sheet. */
-	private place = new Map<string, number>();
+	private links = new Links();
 	private thinLimit = DEFAULT_THIN_LIMIT;
 	private askedNear = false;
 
 	apply(change: SheetChange): SheetAnswer {
 		const removed = (change.remove ?? []).filter((id) => this.held.has(id));
 		const upserted = (change.upsert ?? []).filter(
-			(item) => !same(this.held.get(item.id)?.entry.item, item)
+			(item) => removed.includes(item.id) || !same(this.held.get(item.id)?.entry.item, item)
 		);
 		const edited = [...removed, ...upserted.map(({ id }) => id)];
-		const entries = upserted.map(createEntry);
-		const before = this.definersOf([
-			...edited.flatMap((id) => this.held.get(id)?.entry.defines ?? []),
-			...entries.flatMap(({ defines }) => defines)
-		]);
-		const linked = this.neighbours(edited);
-		for (const id of removed) this.detach(id);
-		for (const entry of entries) this.attach(entry);
-		if (change.order) this.place = new Map(change.order.map((id, i) => [id, i]));
+		const neighbours = edited.flatMap((id) => this.neighbours(id));
+		const redefined = new Set<string>();
+		const relink = (id: string, entry: Entry | null) =>
+			this.links.relink(id, entry).forEach((name) => redefined.add(name));
 
-		const seeds = new Set(edited);
-		for (const name of this.redefined(before)) {
-			for (const id of [...this.mentioners.of(name), ...this.definers.of(name)]) seeds.add(id);
-			for (const [id, { asksNear }] of this.held) if (asksNear) seeds.add(id);
+		for (const id of removed) {
+			this.held.delete(id);
+			relink(id, null);
 		}
+		for (const item of upserted) {
+			const entry = createEntry(item);
+			this.held.set(item.id, { ...(this.held.get(item.id) ?? UNEVALUATED), entry });
+			relink(item.id, entry);
+		}
+		if (change.order) this.links.arrange(change.order);
+
+		const seeds = new Set(edited.filter((id) => this.held.has(id)));
+		for (const id of this.bornOn(redefined)) seeds.add(id);
 		if (change.thinLimit !== undefined && change.thinLimit !== this.thinLimit) {
 			this.thinLimit = change.thinLimit;
 			for (const [id, { entry }] of this.held) if (entry.item.kind === 'check') seeds.add(id);
 		}
 		const evaluated = this.evaluate(seeds);
-		// Who names whom has changed around what was edited, before and after.
-		const relinked = change.order ? this.held.keys() : [...linked, ...this.neighbours(seeds)];
-		return { changed: this.answer([...evaluated, ...relinked]), removed };
+		for (const id of seeds) neighbours.push(...this.neighbours(id));
+		const relinked = change.order ? this.held.keys() : neighbours;
+		const told = removed.filter((id) => !this.held.has(id));
+		return { changed: this.answer(new Set([...evaluated, ...relinked])), removed: told };
 	}
 
 	results(): ItemResult[] {
-		return this.inOrder([...this.held.keys()]).map((id) => this.held.get(id)!.result!);
+		return this.links.inOrder(this.held.keys()).map((id) => this.held.get(id)!.result!);
 	}
 
 	*symbols() {
@@ -96,48 +97,27 @@ class LiveSheet implements Sheet {
 		}
 	}
 
-	private attach(entry: Entry) {
-		const { id } = entry.item;
-		const blank = { body: null, supplies: new Map(), cyclic: false, asksNear: false, result: null };
-		const previous = this.held.get(id);
-		if (previous) this.detach(id);
-		this.held.set(id, { ...(previous ?? blank), entry });
-		for (const name of entry.defines) this.definers.add(name, id);
-		for (const name of entry.mentions) this.mentioners.add(name, id);
-	}
-
-	private detach(id: string) {
-		const { entry } = this.held.get(id)!;
-		this.held.delete(id);
-		for (const name of entry.defines) this.definers.remove(name, id);
-		for (const name of entry.mentions) this.mentioners.remove(name, id);
-	}
-
-	private definersOf(names: string[]): Map<string, string> {
-		return new Map(names.map((name) => [name, [...this.definers.of(name)].sort().join()]));
-	}
-
-	/** The names that other items define now than before. */
-	private redefined(before: Map<string, string>): string[] {
-		const now = this.definersOf([...before.keys()]);
-		return [...before.keys()].filter((name) => before.get(name) !== now.get(name));
+	/** Items on which it bears that other items define these names now than before. */
+	private bornOn(redefined: Set<string>): string[] {
+		if (redefined.size === 0) return [];
+		const named = [...redefined].flatMap((name) => [
+			...this.links.mentioners(name),
+			...this.links.definers(name)
+		]);
+		const near = [...this.held].filter(([, { asksNear }]) => asksNear).map(([id]) => id);
+		return [...named, ...near];
 	}
 
 	private evaluate(seeds: Set<string>): string[] {
-		const present = [...seeds].filter((id) => this.held.has(id));
-		const reached = reach(present, (id) => this.users(id));
+		const { suppliers, users } = this.links;
 		const moved = new Set<string>();
 		const evaluated: string[] = [];
-		for (const component of components(reached, (id) => this.suppliers(id))) {
-			const [first] = component;
-			const cyclic = component.length > 1 || this.suppliers(first!).includes(first!);
+		for (const component of components(reach(seeds, users), suppliers)) {
+			const cyclic = component.length > 1 || suppliers(component[0]!).includes(component[0]!);
 			for (const id of component) {
 				const held = this.held.get(id)!;
 				const due =
-					seeds.has(id) ||
-					cyclic ||
-					held.cyclic ||
-					this.suppliers(id).some((supplier) => moved.has(supplier));
+					cyclic || held.cyclic || seeds.has(id) || suppliers(id).some((other) => moved.has(other));
 				if (!due) continue;
 				evaluated.push(id);
 				if (this.evaluateOne(id, held, cyclic)) moved.add(id);
@@ -151,14 +131,17 @@ class LiveSheet implements Sheet {
 		this.askedNear = false;
 		const objection = cyclic ? this.cycleFault(id) : this.doubleDefinition(id, held.entry);
 		const { body, supplies } = held.entry.evaluate(this.scope, this.thinLimit, objection);
-		const moved = !same([...supplies], [...held.supplies]);
-		Object.assign(held, { body, supplies, cyclic, asksNear: this.askedNear });
-		return moved;
+		const before = held.supplies;
+		held.body = body;
+		held.supplies = supplies;
+		held.cyclic = cyclic;
+		held.asksNear = this.askedNear;
+		return !sameSupplies(before, supplies);
 	}
 
 	private scope: Scope = {
 		supply: (name) => {
-			const ids = this.definers.of(name);
+			const ids = this.links.definers(name);
 			const [id] = ids;
 			if (id === undefined) return 'unknown';
 			if (ids.size > 1) return { state: 'missing', roots: [...ids].sort() };
@@ -166,25 +149,25 @@ class LiveSheet implements Sheet {
 			if (entry.item.kind === 'lineModel' && name === entry.symbol) return 'model';
 			return supplies.get(name) ?? { state: 'missing', roots: [id] };
 		},
-		defines: (name) => this.definers.of(name).size > 0,
+		defines: (name) => this.links.definers(name).size > 0,
 		near: (name) => {
 			this.askedNear = true;
-			return nearest(name, [...this.definers.names(), ...CONSTANTS.keys()]);
+			return nearest(name, [...this.links.definedNames(), ...CONSTANTS.keys()]);
 		}
 	};
 
 	private doubleDefinition(id: string, { symbol }: Entry): Fault | null {
-		const others = [...this.definers.of(symbol)].filter((other) => other !== id).sort();
-		if (symbol === '' || others.length === 0) return null;
+		const definers = this.links.definers(symbol);
+		if (symbol === '' || definers.size < 2) return null;
 		return fault('double-definition', `${symbol} is defined more than once in this note.`, {
 			remedy: 'Give one of them another symbol.',
 			span: { field: 'symbol', from: 0, to: symbol.length },
-			items: others
+			items: [...definers].filter((other) => other !== id).sort()
 		});
 	}
 
 	private cycleFault(id: string): Fault {
-		const way = wayRound(id, (at) => this.suppliers(at));
+		const way = wayRound(id, this.links.suppliers);
 		const steps = way.map((to, i) => this.nameUsed(way[i - 1] ?? id, to));
 		const own = steps.at(-1)!;
 		return fault('cycle', `${own} depends on itself: ${[own, ...steps].join(' → ')}.`, {
@@ -196,66 +179,40 @@ class LiveSheet implements Sheet {
 	/** The name by which one item mentions another. */
 	private nameUsed(from: string, to: string): string {
 		const { mentions } = this.held.get(from)!.entry;
-		return mentions.find((name) => this.definers.of(name).has(to))!;
+		return mentions.find((name) => this.links.definers(name).has(to))!;
 	}
 
-	private suppliers(id: string): string[] {
-		const mentions = this.held.get(id)?.entry.mentions ?? [];
-		return [...new Set(mentions.flatMap((name) => [...this.definers.of(name)].sort()))];
+	private neighbours(id: string): string[] {
+		return [id, ...this.links.suppliers(id), ...this.links.users(id)];
 	}
 
-	private users(id: string): Set<string> {
-		const defines = this.held.get(id)?.entry.defines ?? [];
-		return new Set(defines.flatMap((name) => [...this.mentioners.of(name)]));
-	}
-
-	private neighbours(ids: Iterable<string>): Set<string> {
-		return new Set([...ids].flatMap((id) => [id, ...this.suppliers(id), ...this.users(id)]));
-	}
-
-	/** The results among these ids that are not what was last told. */
-	private answer(ids: Iterable<string>): ItemResult[] {
-		return this.inOrder([...new Set(ids)].filter((id) => this.held.has(id))).flatMap((id) => {
-			const held = this.held.get(id)!;
-			const result = {
-				...held.body!,
-				uses: this.inOrder(this.suppliers(id)),
-				usedIn: this.inOrder([...this.users(id)])
-			} as ItemResult;
-			if (same(result, held.result)) return [];
+	/** The results among these ids that are not what was last told, in sheet order. */
+	private answer(ids: Set<string>): ItemResult[] {
+		const changed: ItemResult[] = [];
+		for (const id of this.links.inOrder(ids)) {
+			const held = this.held.get(id);
+			if (!held) continue;
+			const uses = this.links.uses(id);
+			const usedIn = this.links.usedIn(id);
+			const result = { ...held.body!, uses, usedIn } as ItemResult;
+			if (same(result, held.result)) continue;
 			held.result = result;
-			return [result];
-		});
-	}
-
-	private inOrder(ids: string[]): string[] {
-		const at = (id: string) => this.place.get(id) ?? Infinity;
-		return ids.sort((a, b) => (at(a) === at(b) ? (a < b ? -1 : 1) : at(a) - at(b)));
+			changed.push(result);
+		}
+		return changed;
 	}
 }
 
-/** Ids by name. */
-class Index {
-	private ids = new Map<string, Set<string>>();
-	private static none: ReadonlySet<string> = new Set();
+const UNEVALUATED: Omit<Held, 'entry'> = {
+	body: null,
+	supplies: new Map(),
+	cyclic: false,
+	asksNear: false,
+	result: null
+};
 
-	of(name: string): ReadonlySet<string> {
-		return this.ids.get(name) ?? Index.none;
-	}
-
-	add(name: string, id: string) {
-		const ids = this.ids.get(name);
-		if (ids) ids.add(id);
-		else this.ids.set(name, new Set([id]));
-	}
-
-	remove(name: string, id: string) {
-		const ids = this.ids.get(name);
-		ids?.delete(id);
-		if (ids?.size === 0) this.ids.delete(name);
-	}
-
-	names(): string[] {
-		return [...this.ids.keys()];
-	}
+function sameSupplies(a: ReadonlyMap<string, Supply>, b: ReadonlyMap<string, Supply>): boolean {
+	if (a.size !== b.size) return false;
+	for (const [name, supply] of b) if (!same(a.get(name), supply)) return false;
+	return true;
 }

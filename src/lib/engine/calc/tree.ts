@@ -39,6 +39,13 @@ export function children(expr: Expr): Expr[] {
 	}
 }
 
+/** Names, constants, literals and numbers from left to right. */
+export function* leaves(expr: Expr): Generator<Expr> {
+	const parts = children(expr);
+	if (parts.length === 0) yield expr;
+	for (const part of parts) yield* leaves(part);
+}
+
 /** From the first to the last name or literal below; null for bare numbers, whose place is not kept. */
 export function placeOf(expr: Expr): Place | null {
 	const own = 'place' in expr ? expr.place : null;

@@ -20,7 +20,10 @@ export function formatFigure(value: number, digits: number): string {
 	return sign + grouped(parts.mantissa, THIN) + power;
 }
 
-/** The same for KaTeX. */
+/** A distance in whole kilometres, for words: "35 786 km". */
+export const kilometres = (metres: number) => `${formatFigure(Math.round(metres / 1e3), 1)} km`;
+
+/** A value to so many digits for KaTeX. */
 export function figureTex(value: number, digits: number): string {
 	const parts = figureParts(value, digits);
 	if (!parts) return '\\text{—}';

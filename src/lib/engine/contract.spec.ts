@@ -1,0 +1,35 @@
+import { readFileSync, readdirSync } from 'node:fs';
+import { dirname, join, relative, resolve } from 'node:path';
+import { describe, expect, it } from 'vitest';
+
+const engine = import.meta.dirname;
+const sources = readdirSync(engine, { recursive: true, encoding: 'utf8' })
+	.filter((name) => name.endsWith('.ts') && !name.endsWith('.spec.ts'))
+	.map((name) => join(engine, name));
+
+const imported = (file: string) =>
+	[...readFileSync(file, 'utf8').matchAll(/(?:from|import)\s*\(?\s*'([^']+)'/g)].map(
+		([, path]) => path!
+	);
+
+describe('the engine', () => {
+	it('imports nothing outside itself but mathjs', () => {
+		expect(sources.length).toBeGreaterThan(20);
+		for (const file of sources) {
+			for (const path of imported(file)) {
+				const inside =
+					path.startsWith('.') && resolve(dirname(file), path).startsWith(engine + '/');
+				expect(inside || path.startsWith('mathjs/'), `${relative(engine, file)}: ${path}`).toBe(
+					true
+				);
+			}
+		}
+	});
+
+	it('needs mathjs in one place only, so that pages can use the rest without it', () => {
+		const using = sources.filter((file) =>
+			imported(file).some((path) => path.startsWith('mathjs'))
+		);
+		expect(using.map((file) => relative(engine, file))).toEqual(['calc/parse.ts']);
+	});
+});
