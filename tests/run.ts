@@ -26,7 +26,7 @@ const STEPS: Record<string, () => Count> = {
 const one = (passes: boolean): Count => ({ passed: Number(passes), failed: Number(!passes) });
 
 function run(program: string, args: string[]): boolean {
-	const env = { ...process.env, FORCE_COLOR: process.stdout.isTTY ? '1' : '0' };
+	const env = process.stdout.isTTY ? process.env : { ...process.env, NO_COLOR: '1' };
 	const { status } = spawnSync(`node_modules/.bin/${program}`, args, { stdio: 'inherit', env });
 	return status === 0;
 }

@@ -25,7 +25,9 @@ export async function startS3Fake(folder: string, port: number, bucket: string):
 			S3_BUCKET: bucket,
 			// The pair that the fake answers to.
 			S3_ACCESS_KEY_ID: 'S3RVER',
-			S3_SECRET_ACCESS_KEY: 'S3RVER'
+			S3_SECRET_ACCESS_KEY: 'S3RVER',
+			// The SDK's forecast about versions of Node.js is for maintainers, not for who starts the demo.
+			AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true'
 		},
 		async stop() {
 			server.httpServer?.closeAllConnections();

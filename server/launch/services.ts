@@ -50,9 +50,7 @@ export async function startServices(engineWorker: string, onEnd: OnEnd): Promise
 		ORIGIN: process.env.ORIGIN ?? `http://localhost:${ports.web}`,
 		HOST: process.env.HOST ?? '127.0.0.1',
 		PORT: `${ports.web}`,
-		ENGINE_WORKER: engineWorker,
-		// A forecast about versions of Node.js, for those who maintain this and not for who starts it.
-		AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true'
+		ENGINE_WORKER: engineWorker
 	};
 
 	keepEnvironment(environment);
