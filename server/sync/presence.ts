@@ -18,26 +18,56 @@ import { ownStateSchema, type SharedState } from '$lib/sync/presence';
 /** Longest state that one client may share, in characters of JSON. */
 const LONGEST_STATE = 4000;
 
+/** Origin of what another process told. */
+const ELSEWHERE = Symbol('another process');
+
 export type Speaker = { readonly person: SignedIn; clientId: number | null };
 
 export class Presence {
 	readonly #awareness: Awareness;
 	readonly #speakers = new Map<number, Speaker>();
 
-	constructor(doc: Y.Doc, broadcast: (update: Uint8Array) => void) {
+	constructor(
+		doc: Y.Doc,
+		/** Sends to everybody on the note in this process. */
+		broadcast: (update: Uint8Array) => void,
+		/** Tells other processes of clients of this one. */
+		changedHere: (clients: number[]) => void
+	) {
 		this.#awareness = new Awareness(doc);
 		this.#awareness.setLocalState(null);
 		this.#awareness.on(
 			'update',
-			({ added, updated, removed }: Record<'added' | 'updated' | 'removed', number[]>) =>
-				broadcast(encodeAwarenessUpdate(this.#awareness, [...added, ...updated, ...removed]))
+			(
+				{ added, updated, removed }: Record<'added' | 'updated' | 'removed', number[]>,
+				origin: unknown
+			) => {
+				const clients = [...added, ...updated, ...removed];
+				broadcast(this.of(clients));
+				if (origin !== ELSEWHERE) changedHere(clients);
+			}
 		);
+	}
+
+	/** What these clients say of themselves, or that they are gone. */
+	of(clients: number[]): Uint8Array {
+		return encodeAwarenessUpdate(this.#awareness, clients);
+	}
+
+	/** The clients that are here through this process. */
+	get clientsHere(): number[] {
+		return [...this.#speakers.keys()].filter((client) => this.#awareness.getStates().has(client));
+	}
+
+	/** Takes what another process tells of its clients; it has stamped them. */
+	hearElsewhere(update: Uint8Array): void {
+		applyAwarenessUpdate(this.#awareness, update, ELSEWHERE);
 	}
 
 	/** Everybody's states, for a newcomer; null when nobody is there. */
 	all(): Uint8Array | null {
 		const clients = [...this.#awareness.getStates().keys()];
-		return clients.length > 0 ? encodeAwarenessUpdate(this.#awareness, clients) : null;
+		return clients.length > 0 ? this.of(clients) : null;
 	}
 
 	/** Takes what a client says of itself. What it says of others (stock clients repeat it) is dropped. */
@@ -59,7 +89,6 @@ export class Presence {
 		if (clientId === null || this.#speakers.get(clientId) !== speaker) return;
 		this.#speakers.delete(clientId);
 		removeAwarenessStates(this.#awareness, [clientId], null);
-		this.#awareness.meta.delete(clientId);
 	}
 
 	destroy(): void {
@@ -69,9 +98,9 @@ export class Presence {
 	#speaksAs(speaker: Speaker, clientId: number): boolean {
 		if (clientId === this.#awareness.clientID) return false;
 		if (speaker.clientId !== null) return speaker.clientId === clientId;
-		const holder = this.#speakers.get(clientId);
+		const holder = this.#awareness.getStates().get(clientId) as SharedState | undefined;
 		// The same person coming back before the old socket was seen to be gone takes it over.
-		if (holder && holder.person.id !== speaker.person.id) return false;
+		if (holder && holder.user.id !== speaker.person.id) return false;
 		this.#speakers.set(clientId, speaker);
 		speaker.clientId = clientId;
 		return true;

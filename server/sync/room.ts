@@ -34,6 +34,7 @@ import {
 	updateMessage
 } from './messages';
 import { Presence } from './presence';
+import { PresenceRelay } from './presence-relay';
 import { Watcher, type Evaluate } from './watcher';
 
 /** Edits within this many milliseconds are committed together. */
@@ -64,6 +65,7 @@ export class Room {
 	readonly ready: Promise<void>;
 	readonly #connections = new Set<Connection>();
 	readonly #watcher: Watcher;
+	readonly #relay: PresenceRelay;
 	/** Number of the newest committed update that is in the document with all before it. */
 	#seq = 0;
 	#uncommitted: NewUpdate[] = [];
@@ -81,7 +83,16 @@ export class Room {
 	#whenCommitted: (() => void)[] = [];
 
 	constructor(private readonly options: RoomOptions) {
-		this.presence = new Presence(this.doc, (update) => this.#broadcast(awarenessMessage(update)));
+		const relay = new PresenceRelay(options.noteId, options.process, (clients) =>
+			this.presence.of(clients)
+		);
+		this.#relay = relay;
+		this.presence = new Presence(
+			this.doc,
+			(update) => this.#broadcast(awarenessMessage(update)),
+			(clients) => relay.tell(clients)
+		);
+		relay.ask();
 		this.#watcher = new Watcher(options.noteId, this.doc, () => this.#seq, options.evaluate);
 		this.ready = this.#load();
 		this.#queue = this.ready.catch(options.gone);
@@ -140,6 +151,11 @@ export class Room {
 	/** Fetches what other processes may have committed unheard. */
 	fetch(): void {
 		this.#enqueue(() => this.#fetch());
+	}
+
+	/** Another process opened the note: tells it who is here. */
+	tellWhoIsHere(): void {
+		this.#relay.tell(this.presence.clientsHere);
 	}
 
 	tell(event: NoteEvent): void {
@@ -272,6 +288,7 @@ export class Room {
 			if (this.#uncommitted.length > 0)
 				await new Promise<void>((resolve) => this.#whenCommitted.push(resolve));
 			await this.#watcher.finish();
+			await this.#relay.finish();
 			if (this.#sinceFolding >= FOLD_LEAVING) await this.#enqueue(() => this.#fold());
 			if (this.#connections.size > 0 || this.#uncommitted.length > 0) continue;
 			this.#watcher.destroy();

@@ -118,14 +118,29 @@ export class SyncServer {
 	}
 
 	#heard(notice: Notice): void {
-		if (notice.kind === 'updates') {
-			if (notice.from !== this.#process) this.#rooms.get(notice.noteId)?.catchUp(notice.seq);
-		} else if (notice.kind === 'access') void this.#accessChanged(notice);
-		else {
-			const { kind } = notice;
-			for (const [noteId, room] of this.#rooms)
-				if (notice.noteId === noteId || this.#isIn(room, notice.programmeId)) room.tell({ kind });
+		switch (notice.kind) {
+			case 'updates':
+			case 'presence':
+			case 'who is there': {
+				const room = this.#rooms.get(notice.noteId);
+				if (room && notice.from !== this.#process) this.#heardElsewhere(room, notice);
+				return;
+			}
+			case 'access':
+				void this.#accessChanged(notice);
+				return;
+			default: {
+				const { kind, noteId, programmeId } = notice;
+				for (const [openId, room] of this.#rooms)
+					if (noteId === openId || this.#isIn(room, programmeId)) room.tell({ kind });
+			}
 		}
+	}
+
+	#heardElsewhere(room: Room, notice: Extract<Notice, { from: string }>): void {
+		if (notice.kind === 'updates') room.catchUp(notice.seq);
+		else if (notice.kind === 'who is there') room.tellWhoIsHere();
+		else room.presence.hearElsewhere(Buffer.from(notice.update, 'base64'));
 	}
 
 	#isIn(room: Room, programmeId: string | undefined): boolean {

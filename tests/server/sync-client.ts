@@ -122,6 +122,16 @@ export function frame(...parts: (number | Uint8Array)[]): Uint8Array {
 	return encoding.toUint8Array(encoder);
 }
 
+/** A presence message: what a client says of itself, or of another. */
+export function says(clientId: number, clock: number, state: unknown): Uint8Array {
+	const encoder = encoding.createEncoder();
+	encoding.writeVarUint(encoder, 1);
+	encoding.writeVarUint(encoder, clientId);
+	encoding.writeVarUint(encoder, clock);
+	encoding.writeVarString(encoder, JSON.stringify(state));
+	return frame(MESSAGE.AWARENESS, encoding.toUint8Array(encoder));
+}
+
 /** Waits until something is so; no fixed time. */
 export const eventually = (assertion: () => void | Promise<void>, timeout = 8000) =>
 	vi.waitFor(assertion, { timeout, interval: 10 });

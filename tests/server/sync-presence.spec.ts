@@ -1,13 +1,11 @@
-import * as encoding from 'lib0/encoding';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
-import { MESSAGE } from '$lib/sync/protocol';
 import { makeNote, makeProgramme } from './fixtures';
 import {
 	eventually,
-	frame,
 	headersOf,
 	join,
 	rawSocket,
+	says,
 	startServer,
 	type Joined,
 	type TestServer
@@ -28,15 +26,6 @@ async function opened() {
 /** What one client sees of another. */
 const seen = (by: Joined, of: Joined) =>
 	by.provider.awareness.getStates().get(of.doc.clientID) as Record<string, unknown> | undefined;
-
-const says = (clientId: number, clock: number, state: unknown) => {
-	const encoder = encoding.createEncoder();
-	encoding.writeVarUint(encoder, 1);
-	encoding.writeVarUint(encoder, clientId);
-	encoding.writeVarUint(encoder, clock);
-	encoding.writeVarString(encoder, JSON.stringify(state));
-	return frame(MESSAGE.AWARENESS, encoding.toUint8Array(encoder));
-};
 
 describe('Presence', () => {
 	test('tells others who is on the note, where, and doing what, an observer among them', async () => {

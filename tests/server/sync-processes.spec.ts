@@ -7,10 +7,20 @@ import { foldUpdates, loadDocument, updatesSince } from '$lib/server/notes/docum
 import { addItem, textField } from '$lib/note/document';
 import { projectNote } from '$lib/note/projection';
 import { makeNote, makeProgramme } from './fixtures';
-import { eventually, join, startServer, type Joined, type TestServer } from './sync-client';
+import {
+	eventually,
+	headersOf,
+	join,
+	rawSocket,
+	says,
+	startServer,
+	type Joined,
+	type TestServer
+} from './sync-client';
 
 /** Two processes are two sync servers here: nothing is shared between them but the database. */
 let servers: [TestServer, TestServer];
+let people: Awaited<ReturnType<typeof makeProgramme>>;
 let noteId: string;
 let a: Joined;
 let b: Joined;
@@ -21,7 +31,7 @@ beforeAll(async () => {
 afterAll(() => Promise.all(servers.map((server) => server.stop())));
 
 beforeEach(async () => {
-	const people = await makeProgramme();
+	people = await makeProgramme();
 	noteId = (await makeNote(people.programme.id, people.lead)).id;
 	a = await join(servers[0], noteId, people.engineer);
 	b = await join(servers[1], noteId, people.lead);
@@ -66,5 +76,34 @@ describe('Two processes', () => {
 			expect(a.events).toContain('remarks');
 			expect(b.events).toContain('remarks');
 		});
+	});
+
+	test('show the people on both to each other, also to somebody who comes later', async () => {
+		const place = (of: Joined, by: Joined) =>
+			by.provider.awareness.getStates().get(of.doc.clientID)?.itemId as unknown;
+		a.provider.awareness.setLocalState({ itemId: 'x' });
+		b.provider.awareness.setLocalState({ itemId: 'y' });
+		await eventually(() => expect([place(a, b), place(b, a)]).toEqual(['x', 'y']));
+		b.leave();
+		await eventually(() => expect(place(b, a)).toBeUndefined());
+		await eventually(() => expect(servers[1].sync.openNotes).not.toContain(noteId));
+		const later = await join(servers[1], noteId, people.observer);
+		await eventually(() => expect(place(a, later)).toBe('x'));
+		later.leave();
+	});
+
+	test('let nobody speak for a client of the other', async () => {
+		a.provider.awareness.setLocalState({ itemId: 'mine' });
+		await eventually(() =>
+			expect(b.provider.awareness.getStates().get(a.doc.clientID)?.itemId).toBe('mine')
+		);
+		const raw = await rawSocket(servers[1], `/sync/${noteId}`, await headersOf(people.observer));
+		raw.socket.send(says(a.doc.clientID, 1000, { itemId: 'theirs' }));
+		raw.socket.send(says(a.doc.clientID, 1001, null));
+		// When this has been heard, what came before has been dropped.
+		raw.socket.send(says(77, 1, { itemId: 'own' }));
+		await eventually(() => expect(b.provider.awareness.getStates().get(77)?.itemId).toBe('own'));
+		expect(b.provider.awareness.getStates().get(a.doc.clientID)?.itemId).toBe('mine');
+		raw.socket.close();
 	});
 });

@@ -30,7 +30,27 @@ const updatesSchema = z.object({
 	from: z.string()
 });
 
-export const noticeSchema = z.union([updatesSchema, announcementSchema]);
+/** Who is on a note through the process `from`: an awareness update in base64. */
+const presenceSchema = z.object({
+	kind: z.literal('presence'),
+	noteId: z.guid(),
+	from: z.string(),
+	update: z.base64()
+});
+
+/** The process `from` opened a note and asks the others who is on it. */
+const whoIsThereSchema = z.object({
+	kind: z.literal('who is there'),
+	noteId: z.guid(),
+	from: z.string()
+});
+
+export const noticeSchema = z.union([
+	updatesSchema,
+	presenceSchema,
+	whoIsThereSchema,
+	announcementSchema
+]);
 export type Notice = z.infer<typeof noticeSchema>;
 
 export function announce(tx: Db, event: Announcement): Promise<void> {
