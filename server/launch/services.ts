@@ -38,7 +38,8 @@ export async function startServices(engineWorker: string, onEnd: OnEnd): Promise
 	ports.mails = await freePort(ports.mails);
 	const mailPage = await startMailPage(smtp, ports.mails);
 	onEnd(mailPage.stop);
-	ports.web = await webPort(ports.web);
+	const port = await webPort(ports.web);
+	if (!process.env.PORT) ports.web = port;
 	postgres.port = cluster.port;
 	keepInstallation(installation);
 
@@ -47,9 +48,9 @@ export async function startServices(engineWorker: string, onEnd: OnEnd): Promise
 		...smtp.environment,
 		...mailPage.environment,
 		DATABASE_URL: cluster.url(DATABASE),
-		ORIGIN: process.env.ORIGIN ?? `http://localhost:${ports.web}`,
+		ORIGIN: process.env.ORIGIN ?? `http://localhost:${port}`,
 		HOST: process.env.HOST ?? '127.0.0.1',
-		PORT: `${ports.web}`,
+		PORT: `${port}`,
 		ENGINE_WORKER: engineWorker
 	};
 
