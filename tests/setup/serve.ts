@@ -4,6 +4,8 @@ import { freePort } from '../../server/launch/ports';
 
 export type Served = {
 	origin: string;
+	/** What the process was started with, for commands on the same site. */
+	environment: Record<string, string>;
 	process: ChildProcess;
 	/** Everything the process has written. */
 	output(): string;
@@ -45,6 +47,7 @@ export async function serve(environment: Record<string, string>, port?: number):
 	};
 	return {
 		origin,
+		environment: { ORIGIN: origin, ENGINE_WORKER: 'build/engine-worker.js', ...environment },
 		process: child,
 		output: () => output,
 		stop: () => end('SIGTERM'),

@@ -5,7 +5,6 @@ import { compareNumbers, removedPins } from './removed-pins';
 const numbers: Record<string, string> = { s: '3', a: '3.1', b: '3.2', t: '4', c: '4.1' };
 const sheet = {
 	order: ['s', 'a', 'b', 't', 'c'],
-	item: (id: string) => (numbers[id] ? ({ id } as never) : undefined),
 	number: (id: string) => numbers[id] ?? ''
 };
 const remark = (itemId: string, number: string) => ({ itemId, pinned: { number } }) as RemarkView;

@@ -5,15 +5,16 @@ import type { SheetView } from './sheet-view';
 
 export type RemovedPins = { itemId: string; remarks: RemarkView[] };
 
-type Sheet = Pick<SheetView, 'item' | 'number'> & { readonly order: readonly string[] };
+type Sheet = Pick<SheetView, 'number'> & { readonly order: readonly string[] };
 
 export function removedPins(
 	remarks: readonly RemarkView[],
 	sheet: Sheet
 ): Map<string, RemovedPins[]> {
 	const places = new Map<string, RemovedPins[]>();
+	const present = new Set(sheet.order);
 	const gone = groupBy(
-		remarks.filter(({ itemId }) => !sheet.item(itemId)),
+		remarks.filter(({ itemId }) => !present.has(itemId)),
 		({ itemId }) => itemId
 	);
 	for (const [itemId, pinned] of gone) {

@@ -1,0 +1,57 @@
+import { expect, test } from './harness';
+import { field, openNote, row, saved, value } from './note-page';
+
+test('edits go on without a connection, survive a reload, and merge when it is back', async ({
+	as
+}) => {
+	const lindqvist = await as('lindqvist');
+	const quispe = await as('quispe');
+	await openNote(lindqvist, 'ML-DN-002');
+	await openNote(quispe, 'ML-DN-002');
+
+	await lindqvist.context().setOffline(true);
+	await expect(saved(lindqvist)).toContainText('Offline');
+	const rho = await field(lindqvist, 'ml2-rho', 'Value');
+	await rho.fill('1600');
+	await rho.press('Enter');
+	// Results follow without the server: exp(1600 × 2.69767e6 / 1.90625e9) = 9.623
+	await expect(value(lindqvist, 'ml2-taper')).toHaveText('9.623');
+	await expect(saved(lindqvist)).toContainText(/Offline, \d+ edits? not saved/);
+
+	// Somebody else goes on meanwhile.
+	const fs = await field(quispe, 'ml2-fs', 'Value');
+	await fs.fill('1.7');
+	await fs.press('Enter');
+	await expect(value(quispe, 'ml2-rho')).toHaveText(/1.560/);
+	await expect(saved(quispe)).toContainText('Saved');
+
+	await lindqvist.context().setOffline(false);
+	await expect(saved(lindqvist)).toContainText('Saved', { timeout: 20_000 });
+	// σ_d = 3.05/1.7 GPa: exp(1600 × 2.69767e6 / 1.79412e9) = 11.087, the same for both
+	await expect(value(lindqvist, 'ml2-taper')).toHaveText(/11\.0[89]/);
+	await expect(value(quispe, 'ml2-taper')).toHaveText(/11\.0[89]/);
+	await quispe.reload();
+	await expect(row(quispe, 'ml2-rho')).toContainText(/1.600/);
+});
+
+test('edits that a closed page never sent are counted and sent when the note is opened again', async ({
+	as
+}) => {
+	const page = await as('abara');
+	await openNote(page, 'CL-DN-006');
+	await page.context().setOffline(true);
+	await expect(saved(page)).toContainText('Offline');
+	const width = await field(page, 'cl6-width', 'Value');
+	await width.fill('0.16');
+	await width.press('Enter');
+	await expect(saved(page)).toContainText(/edits? not saved/);
+	await page.close({ runBeforeUnload: false });
+
+	const again = await page.context().newPage();
+	await again.context().setOffline(false);
+	await openNote(again, 'CL-DN-006');
+	await expect(value(again, 'cl6-width')).toHaveText('0.16');
+	const elsewhere = await as('quispe');
+	await openNote(elsewhere, 'CL-DN-006');
+	await expect(value(elsewhere, 'cl6-width')).toHaveText('0.16');
+});
