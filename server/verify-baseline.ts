@@ -8,6 +8,8 @@ import { baseline, note } from '$lib/server/db/schema';
 import { verificationLines } from '$lib/server/baselines/report';
 import { verifyBaseline } from '$lib/server/baselines/verify';
 import { isUuid } from '$lib/server/auth/guard';
+import { closeEngine } from '$lib/server/engine/evaluate';
+import { settings } from '$lib/server/settings';
 
 async function find(which: string) {
 	if (isUuid(which)) return db.select().from(baseline).where(eq(baseline.id, which));
@@ -25,6 +27,7 @@ async function main(which: string | undefined): Promise<number> {
 		console.error('Which baseline? Give its id, or note and revision as in CL-DN-004/B.');
 		return 2;
 	}
+	settings();
 	const [row, another] = await find(which);
 	if (!row || another) {
 		console.error(`${row ? 'More than one baseline is' : 'There is no baseline'} ${which}.`);
@@ -38,8 +41,12 @@ async function main(which: string | undefined): Promise<number> {
 try {
 	process.exitCode = await main(process.argv[2]);
 } catch (error) {
-	console.error(`${process.argv[2]} could not be verified: ${(error as Error).message}`);
+	// A failed query names its reason as its cause.
+	const { message, cause } = error as Error;
+	const reason = cause instanceof Error ? cause.message || String(cause) : message;
+	console.error(`${process.argv[2]} could not be verified: ${reason}`);
 	process.exitCode = 2;
 } finally {
+	await closeEngine();
 	await pool.end();
 }
