@@ -36,7 +36,7 @@ export class NoteWork {
 	/** Editing is for wider screens. */
 	wide = $state(true);
 	/** How many rows are mounted; the rest follow while the browser is idle. */
-	mounted = $state(30);
+	mounted = $state(24);
 
 	#was: AsItWas | null = null;
 
