@@ -4,7 +4,8 @@ import { formatFigure } from '../engine/quantities/format';
 import type { ItemResult, Outcome } from '../engine/calc/results';
 import type { Item, ItemOf } from './items';
 import { changedFields, readingMoved, readingsOf, type Side } from './readings';
-import { differenceOf, proseTokens } from './words';
+import { proseTokens } from './tokens';
+import { differenceOf } from './words';
 
 export type ItemChange = {
 	kind: 'added' | 'changed';

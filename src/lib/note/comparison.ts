@@ -4,7 +4,8 @@ import type { Reading, Side } from './readings';
 import { FIELD_WORDS } from './compare';
 import type { Item } from './items';
 import { numberItems } from './numbering';
-import { differenceOf, proseTokens, textTokens, type TextDifference } from './words';
+import { proseTokens, textTokens } from './tokens';
+import { differenceOf, type TextDifference } from './words';
 
 export type Cause =
 	/** Its own text was changed: the names of the fields. */

@@ -3,7 +3,7 @@ import { faultWords, outcomeWords } from '../components/note/figures';
 import type { ItemResult } from '../engine/calc/results';
 import type { PinnedValue } from './frozen';
 import { KIND_NAMES, type Item } from './items';
-import { proseTokens } from './words';
+import { proseTokens } from './tokens';
 
 const LONGEST = 80;
 

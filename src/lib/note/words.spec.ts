@@ -1,6 +1,7 @@
 import { expect, test } from 'vitest';
 import type { Prose, ProseInline } from './prose';
-import { differenceOf, proseTokens, textTokens, type Part } from './words';
+import { proseTokens, textTokens } from './tokens';
+import { differenceOf, type Part } from './words';
 
 const shown = (parts: Part[]) =>
 	parts.map(({ change, tokens }) => [
