@@ -97,6 +97,16 @@ describe('What moved a check', () => {
 		expect(await movementsOf(noteId)).toEqual([]);
 	});
 
+	test('is not an edit of what something is called or where it comes from', async () => {
+		const { noteId, lead, engineer } = await filled();
+		await editNote(noteId, lead.id, type('a', 'value', '3'));
+		await editNote(noteId, lead.id, type('a', 'source', 'Weighed again'));
+		await editNote(noteId, engineer.id, type('a', 'description', 'Load at the joint'));
+		expect(await movementsOf(noteId)).toMatchObject([
+			{ before: '1', after: '3', movedBy: { id: lead.id } }
+		]);
+	});
+
 	test("is somebody else's when somebody else edits on", async () => {
 		const { noteId, lead, engineer } = await filled();
 		await editNote(noteId, lead.id, type('a', 'value', '3'));

@@ -27,13 +27,20 @@ export function findMovements(
 	const last = new Map(stored.map((movement) => [movement.itemId, movement]));
 	const items = new Map(seen.content.items.map((item) => [item.id, item]));
 	const uses = usesOf(seen.earlier, seen.results);
+	// A new source or description moves nothing.
+	const moving = new Map(
+		[...seen.touched].filter(([id, { before }]) => {
+			const texts = editTexts(before, items.get(id) ?? null);
+			return texts.before !== texts.after;
+		})
+	);
 	const write: Movement[] = [];
 	const drop: string[] = [];
 
 	for (const check of seen.results) {
 		const stateBefore = check.kind === 'check' ? before.get(check.id) : undefined;
 		if (check.kind !== 'check' || stateBefore === undefined) continue;
-		const cause = causeOf(check, uses, seen.touched);
+		const cause = causeOf(check, uses, moving);
 		const movement = cause
 			? movementBy(cause, check, stateBefore, items)
 			: nobody(check, stateBefore);
