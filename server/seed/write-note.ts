@@ -4,19 +4,16 @@
  */
 import { createReadStream } from 'node:fs';
 import { eq } from 'drizzle-orm';
-import * as Y from 'yjs';
+import type * as Y from 'yjs';
 import { addItem, itemsMap, textField } from '$lib/note/document';
-import { documentFrom } from '$lib/note/interchange';
 import type { Note, Programme } from '$lib/server/auth/guard';
 import { freeze } from '$lib/server/baselines/freeze';
 import { db } from '$lib/server/db';
 import { note as noteTable, remark as remarkTable, type gate } from '$lib/server/db/schema';
-import { evaluateContent } from '$lib/server/engine/evaluate';
 import { storeEvidence } from '$lib/server/evidence/evidence';
-import { appendUpdates } from '$lib/server/notes/document';
+import { editNote, fillNote } from '$lib/server/notes/edit';
 import { pinRemark } from '$lib/server/remarks/pin';
 import { answerRemark, settleRemark } from '$lib/server/remarks/thread';
-import { Watcher } from '../sync/watcher';
 import type { People } from './index';
 import type { DemoNote, DemoRemark } from './notes';
 
@@ -30,27 +27,31 @@ type Job = {
 
 export async function writeNote(job: Job): Promise<void> {
 	const { demo, people } = job;
-	const note = await insertNote(job);
-	const desk = new Desk(note, people);
-	await desk.write(demo.creator, (doc) => {
-		const first = documentFrom({
-			format: 'holdfast-note',
-			version: 1,
-			thinLimit: demo.thinLimit,
-			items: demo.items
-		});
-		Y.applyUpdate(doc, Y.encodeStateAsUpdate(first), { userId: people.get(demo.creator)!.id });
+	const { id } = await insertNote(job);
+	const write = (by: string, edit: (doc: Y.Doc) => void) => editNote(id, people.get(by)!.id, edit);
+	await fillNote(id, people.get(demo.creator)!.id, {
+		format: 'holdfast-note',
+		version: 1,
+		thinLimit: demo.thinLimit,
+		items: demo.items
 	});
-	await writeRemarks(job, desk, 'before the baseline');
-	if (demo.frozen) await freezeFirst(job, desk, demo.frozen.waivers);
+	await writeRemarks(job, id, 'before the baseline');
+	if (demo.frozen) await freezeFirst(job, id, demo.frozen.waivers);
 
 	for (const { by, after, item } of demo.additions)
-		await desk.write(by, (doc, origin) => addItem(doc, item, { after, origin }));
+		await write(by, (doc) => void addItem(doc, item, { after }));
 	for (const { by, item, field, value } of demo.edits)
-		await desk.write(by, (doc, origin) => retype(doc, item, field, value, origin));
-	for (const { by, item, name } of demo.files) await attach(desk, people, by, item, name);
-	await writeRemarks(job, desk, 'since');
-	desk.close();
+		await write(by, (doc) => retype(doc, item, field, value));
+	for (const { by, item, name } of demo.files) {
+		const file = await storeEvidence({
+			noteId: id,
+			userId: people.get(by)!.id,
+			name,
+			body: createReadStream(`server/seed/files/${name}`)
+		});
+		await write(by, (doc) => attach(doc, item, file));
+	}
+	await writeRemarks(job, id, 'since');
 }
 
 async function insertNote({ demo, number, programme, gates, people }: Job): Promise<Note> {
@@ -70,92 +71,46 @@ async function insertNote({ demo, number, programme, gates, people }: Job): Prom
 	return row!;
 }
 
-/** The note open before somebody: what they write is committed and observed under their name. */
-class Desk {
-	readonly doc = new Y.Doc();
-	seq = 0;
-	#updates: Uint8Array[] = [];
-	#watcher: Watcher;
-
-	constructor(
-		readonly note: Note,
-		private readonly people: People
-	) {
-		this.#watcher = new Watcher(note.id, this.doc, () => this.seq, evaluateContent);
-		this.#watcher.begin();
-		this.doc.on('update', (update: Uint8Array) => this.#updates.push(update));
-	}
-
-	async write(by: string, edit: (doc: Y.Doc, origin: { userId: string }) => void): Promise<void> {
-		const { id: userId } = this.people.get(by)!;
-		edit(this.doc, { userId });
-		const updates = this.#updates.map((update) => ({ update, userId }));
-		this.#updates = [];
-		const committed = await appendUpdates(this.note.id, updates, 'seed');
-		this.seq = committed!.last;
-		this.#watcher.wake();
-		await this.#watcher.finish();
-	}
-
-	async current(): Promise<Note> {
-		const [row] = await db.select().from(noteTable).where(eq(noteTable.id, this.note.id));
-		return row!;
-	}
-
-	close(): void {
-		this.#watcher.destroy();
-		this.doc.destroy();
-	}
+async function current(noteId: string): Promise<Note> {
+	const [row] = await db.select().from(noteTable).where(eq(noteTable.id, noteId));
+	return row!;
 }
 
-function retype(doc: Y.Doc, item: string, field: string, value: string, origin: unknown): void {
+function retype(doc: Y.Doc, item: string, field: string, value: string): void {
 	const text = textField(doc, item, field)!;
-	doc.transact(() => {
-		text.delete(0, text.length);
-		text.insert(0, value);
-	}, origin);
+	text.delete(0, text.length);
+	text.insert(0, value);
+}
+
+function attach(doc: Y.Doc, item: string, file: { fileId: string }): void {
+	const files = itemsMap(doc).get(item)!.get('files') as Y.Map<unknown>;
+	files.set(file.fileId, { ...file, position: files.size });
 }
 
 async function freezeFirst(
 	{ programme, gates, people }: Job,
-	desk: Desk,
+	noteId: string,
 	waivers: { itemId: string; reason: string }[]
 ): Promise<void> {
-	const note = await desk.current();
-	const input = { gateId: gates[0]!.id, revision: note.revision, seenSeq: desk.seq, waivers };
+	const note = await current(noteId);
+	const input = { gateId: gates[0]!.id, revision: note.revision, seenSeq: note.seq, waivers };
 	await freeze({ note, programme, person: people.get('solvang')!, input });
-}
-
-async function attach(desk: Desk, people: People, by: string, itemId: string, name: string) {
-	const file = await storeEvidence({
-		noteId: desk.note.id,
-		userId: people.get(by)!.id,
-		name,
-		body: createReadStream(`server/seed/files/${name}`)
-	});
-	await desk.write(by, (doc, origin) => {
-		const files = itemsMap(doc).get(itemId)!.get('files') as Y.Map<unknown>;
-		doc.transact(() => files.set(file.fileId, { ...file, position: files.size }), origin);
-	});
 }
 
 async function writeRemarks(
 	{ demo, programme, people }: Job,
-	desk: Desk,
+	noteId: string,
 	when: DemoRemark['pinned']
 ): Promise<void> {
-	for (const remark of demo.remarks.filter(({ pinned }) => pinned === when)) {
-		const { note } = desk;
-		const id = await pinRemark({
-			note,
-			programme,
-			person: people.get(remark.by)!,
-			itemId: remark.item,
-			body: remark.body
-		});
+	const note = await current(noteId);
+	for (const { by, item, body, replies, settledBy } of demo.remarks.filter(
+		({ pinned }) => pinned === when
+	)) {
+		const person = people.get(by)!;
+		const id = await pinRemark({ note, programme, person, itemId: item, body });
 		const [row] = await db.select().from(remarkTable).where(eq(remarkTable.id, id));
 		const thread = { remark: row!, note, programme };
-		for (const { by, body } of remark.replies) await answerRemark(thread, people.get(by)!, body);
-		if (remark.settledBy) await settleRemark(thread, people.get(remark.settledBy)!, true);
+		for (const reply of replies) await answerRemark(thread, people.get(reply.by)!, reply.body);
+		if (settledBy) await settleRemark(thread, people.get(settledBy)!, true);
 	}
 }
