@@ -35,15 +35,13 @@ beforeEach(async () => {
 		{ kind: 'calculation', id: 'w', symbol: 'w', expression: 'Phi + 1' }
 	]);
 	// The engineer wrote the calculation.
-	await db
-		.insert(noteItem)
-		.values({
-			noteId: note.id,
-			itemId: 'd',
-			kind: 'calculation',
-			number: '1.2',
-			createdBy: team.engineer.id
-		});
+	await db.insert(noteItem).values({
+		noteId: note.id,
+		itemId: 'd',
+		kind: 'calculation',
+		number: '1.2',
+		createdBy: team.engineer.id
+	});
 });
 
 type Person = Awaited<ReturnType<typeof makePerson>>;
