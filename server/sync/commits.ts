@@ -143,6 +143,16 @@ function mergeRuns(updates: NewUpdate[]): NewUpdate[] {
 	}
 	return runs.map(({ userId, parts }) => ({
 		userId,
-		update: parts.length === 1 ? parts[0]! : Y.mergeUpdates(parts)
+		update: merged(parts)
 	}));
+}
+
+/** Yjs takes time as the square of the number of updates, so many are merged by the hundred. */
+function merged(parts: Uint8Array[]): Uint8Array {
+	if (parts.length === 1) return parts[0]!;
+	if (parts.length <= 100) return Y.mergeUpdates(parts);
+	const hundreds = Array.from({ length: Math.ceil(parts.length / 100) }, (_, index) =>
+		merged(parts.slice(index * 100, (index + 1) * 100))
+	);
+	return merged(hundreds);
 }
