@@ -1,6 +1,6 @@
 /** Items copied within a note and between notes of a programme, as JSON text on the clipboard. */
 import type * as Y from 'yjs';
-import { z } from 'zod';
+import * as z from 'zod/mini';
 import { addItems } from './document';
 import { itemSchema, type Item } from './items';
 import { orderedIds } from './order';
@@ -10,7 +10,7 @@ import type { ProseBlock, ProseInline } from './prose';
 const copiedSchema = z.object({
 	format: z.literal('holdfast-items'),
 	version: z.literal(1),
-	items: z.array(itemSchema).min(1).max(1000)
+	items: z.array(itemSchema).check(z.minLength(1), z.maxLength(1000))
 });
 
 type Place = { after: string | null; origin?: unknown };

@@ -2,7 +2,7 @@
  * The closed shape of a text item: ProseMirror JSON of our own node names. The editor's schema, the
  * projection, comparison and the frozen sheet all follow it.
  */
-import { z } from 'zod';
+import * as z from 'zod/mini';
 
 /**
  * Where a link may lead: the web, mail, or a page of this site. Anything else (javascript:, data:,
@@ -10,8 +10,7 @@ import { z } from 'zod';
  */
 const hrefSchema = z
 	.string()
-	.max(2000)
-	.regex(/^(https?:\/\/|mailto:|\/(?![/\\]))/i);
+	.check(z.maxLength(2000), z.regex(/^(https?:\/\/|mailto:|\/(?![/\\]))/i));
 
 /** Deepest nesting of lists that is read; a document cannot make readers recurse without end. */
 export const DEEPEST_LIST = 8;
@@ -25,7 +24,7 @@ export const markSchema = z.discriminatedUnion('type', [
 ]);
 export type ProseMark = z.infer<typeof markSchema>;
 
-const marks = z.array(markSchema).optional();
+const marks = z.optional(z.array(markSchema));
 
 export const inlineSchema = z.discriminatedUnion('type', [
 	z.object({ type: z.literal('text'), text: z.string(), marks }),
@@ -45,7 +44,7 @@ export const inlineSchema = z.discriminatedUnion('type', [
 ]);
 export type ProseInline = z.infer<typeof inlineSchema>;
 
-const inlineContent = z.array(inlineSchema).optional();
+const inlineContent = z.optional(z.array(inlineSchema));
 
 const paragraphSchema = z.object({ type: z.literal('paragraph'), content: inlineContent });
 const headingSchema = z.object({
@@ -60,7 +59,7 @@ export type ProseBlock =
 	| { type: 'bulletList' | 'orderedList'; content: ProseListItem[] };
 export type ProseListItem = { type: 'listItem'; content: ProseBlock[] };
 
-const blockSchema: z.ZodType<ProseBlock> = z.lazy(() =>
+const blockSchema: z.ZodMiniType<ProseBlock> = z.lazy(() =>
 	z.union([
 		paragraphSchema,
 		headingSchema,
