@@ -2,6 +2,7 @@ import { Problem } from '$lib/server/problems';
 import { requireBaseline } from '$lib/server/baselines/guard';
 import { changesBefore } from '$lib/server/baselines/before';
 import { opened } from '$lib/server/baselines/read';
+import { setFormulas } from '$lib/server/formulas';
 import { markViewed } from '$lib/server/baselines/waiting';
 import type { PageServerLoad } from './$types';
 
@@ -18,6 +19,7 @@ export const load: PageServerLoad = async (event) => {
 	return {
 		baseline,
 		before: await changesBefore(row.noteId, row.frozenAt, baseline),
-		draft: note.revision
+		draft: note.revision,
+		formulas: setFormulas(baseline)
 	};
 };
