@@ -57,10 +57,7 @@ async function writeProgramme(demo: DemoProgramme, people: People): Promise<void
 			}))
 		)
 		.returning();
-	for (const [index, note] of demo.notes.entries()) {
-		const number = `${code}-DN-${String(index + 1).padStart(3, '0')}`;
-		await writeNote({ demo: note, number, programme: row!, gates, people });
-	}
+	for (const note of demo.notes) await writeNote({ demo: note, programme: row!, gates, people });
 }
 
 function dayFromNow(days: number): string {

@@ -11,6 +11,7 @@ import { freeze } from '$lib/server/baselines/freeze';
 import { db } from '$lib/server/db';
 import { note as noteTable, remark as remarkTable, type gate } from '$lib/server/db/schema';
 import { storeEvidence } from '$lib/server/evidence/evidence';
+import { createNote } from '$lib/server/notes/create';
 import { editNote, fillNote } from '$lib/server/notes/edit';
 import { pinRemark } from '$lib/server/remarks/pin';
 import { answerRemark, settleRemark } from '$lib/server/remarks/thread';
@@ -19,15 +20,20 @@ import type { DemoNote, DemoRemark } from './notes';
 
 type Job = {
 	demo: DemoNote;
-	number: string;
 	programme: Programme;
 	gates: (typeof gate.$inferSelect)[];
 	people: People;
 };
 
 export async function writeNote(job: Job): Promise<void> {
-	const { demo, people } = job;
-	const { id } = await insertNote(job);
+	const { demo, people, programme, gates } = job;
+	const { id } = await createNote(programme, people.get(demo.creator)!.id, {
+		title: demo.title,
+		department: demo.department,
+		technicalReference: demo.technicalReference,
+		approverId: people.get(demo.approver)!.id,
+		gateId: gates[0]!.id
+	});
 	const write = (by: string, edit: (doc: Y.Doc) => void) => editNote(id, people.get(by)!.id, edit);
 	await fillNote(id, people.get(demo.creator)!.id, {
 		format: 'holdfast-note',
@@ -52,23 +58,6 @@ export async function writeNote(job: Job): Promise<void> {
 		await write(by, (doc) => attach(doc, item, file));
 	}
 	await writeRemarks(job, id, 'since');
-}
-
-async function insertNote({ demo, number, programme, gates, people }: Job): Promise<Note> {
-	const [row] = await db
-		.insert(noteTable)
-		.values({
-			programmeId: programme.id,
-			number,
-			title: demo.title,
-			department: demo.department,
-			technicalReference: demo.technicalReference,
-			creatorId: people.get(demo.creator)!.id,
-			approverId: people.get(demo.approver)!.id,
-			gateId: gates[0]!.id
-		})
-		.returning();
-	return row!;
 }
 
 async function current(noteId: string): Promise<Note> {
