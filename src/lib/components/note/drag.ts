@@ -4,6 +4,13 @@ import type { NoteWork } from './work.svelte';
 /** Pointer travel in px before a press on the handle becomes a move; less is a click. */
 const TRAVEL = 5;
 
+/** The click that may end a move opens no row; it comes right after, or not at all. */
+function swallowClick(): void {
+	const swallow = (event: Event) => event.stopPropagation();
+	addEventListener('click', swallow, { capture: true });
+	setTimeout(() => removeEventListener('click', swallow, { capture: true }));
+}
+
 export function dragRows(list: HTMLElement, work: NoteWork): () => void {
 	let from: { id: string; y: number } | null = null;
 	let to: { row: HTMLElement; below: boolean } | null = null;
@@ -37,8 +44,7 @@ export function dragRows(list: HTMLElement, work: NoteWork): () => void {
 			const index = order.indexOf(to.row.id);
 			const after = to.below ? to.row.id : (order[index - 1] ?? null);
 			if (after !== from.id && to.row.id !== from.id) work.move(from.id, after);
-			// The click that ends the move opens no row.
-			addEventListener('click', (event) => event.stopPropagation(), { capture: true, once: true });
+			swallowClick();
 		}
 		end();
 	};

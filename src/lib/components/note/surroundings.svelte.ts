@@ -11,7 +11,7 @@ import type { Role } from '$lib/server/auth/permissions';
 import type { RemarkView } from '$lib/server/remarks/list';
 import type { NoteSession } from '$lib/sync/note-session.svelte';
 import type { PersonHere } from '$lib/sync/presence';
-import { fetchJson } from './fetch-json';
+import { fetchJson } from '$lib/fetch-json';
 import { groupBy } from './group';
 import type { NoteSheet } from './sheet.svelte';
 import type { Was } from './sheet-view';

@@ -71,8 +71,8 @@ export class NoteWork {
 		row?.focus({ preventScroll: true });
 	}
 
-	step(by: 1 | -1): void {
-		const index = this.current === null ? -1 : this.sheet.order.indexOf(this.current);
+	step(from: string, by: 1 | -1): void {
+		const index = this.sheet.order.indexOf(from);
 		const next = this.sheet.order[Math.max(0, index + by)];
 		if (next !== undefined) void this.focus(next);
 	}
@@ -169,6 +169,11 @@ export class NoteWork {
 		if (this.removed?.item.id === item.id) this.removed = null;
 		this.said = `${this.sheet.number(item.id)} is back.`;
 		void this.focus(item.id);
+	}
+
+	/** What was just removed here and not yet put back. */
+	get justRemoved(): Removed | null {
+		return this.removed && !this.sheet.item(this.removed.item.id) ? this.removed : null;
 	}
 
 	undo(): void {

@@ -44,7 +44,7 @@ const Formula = Node.create({
 		() =>
 		({ node }) => {
 			const dom = document.createElement('span');
-			dom.append(typeset(String(node.attrs.tex)));
+			void typeset(String(node.attrs.tex)).then((formula) => dom.append(formula));
 			return { dom };
 		}
 });
