@@ -84,6 +84,7 @@ export const handleError: HandleServerError = ({ error, event, status, message }
 	if (status === 404) return { message: 'There is no page at this address.', status };
 	if (status < 500) return { message, status };
 	const reference = randomBytes(4).toString('hex');
-	log.error({ error, reference, path: event.url.pathname }, 'a request failed');
+	// The route and not the path, which may hold the secret of a link.
+	log.error({ error, reference, route: event.route.id }, 'A request failed');
 	return { message: 'Something went wrong here.', status, reference };
 };

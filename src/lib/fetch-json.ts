@@ -1,4 +1,6 @@
-/** Asks the API; a refusal is an error with the words of its problem document and its status. */
+/** Our own API from a page: JSON, or the server's words for what went wrong (RFC 9457). */
+
+/** A refusal, with the words of its problem document and its status. */
 export class Refused extends Error {
 	constructor(
 		readonly status: number,
@@ -8,9 +10,15 @@ export class Refused extends Error {
 	}
 }
 
-export async function fetchJson<T>(address: string): Promise<T> {
-	const response = await fetch(address, { headers: { accept: 'application/json' } });
-	if (response.ok) return response.json();
-	const problem = await response.json().catch(() => ({}));
-	throw new Refused(response.status, problem.detail ?? `The server answers ${response.status}.`);
+export async function fetchJson<T>(path: string, init?: RequestInit): Promise<T> {
+	const response = await fetch(path, init);
+	if (response.ok) return (await response.json()) as T;
+	throw new Refused(response.status, await problemWords(response));
+}
+
+export async function problemWords(response: Response): Promise<string> {
+	const fallback = `The server answered ${response.status}. Try again in a moment.`;
+	const problem: unknown = await response.json().catch(() => null);
+	const detail = (problem as { detail?: unknown } | null)?.detail;
+	return typeof detail === 'string' && detail !== '' ? detail : fallback;
 }

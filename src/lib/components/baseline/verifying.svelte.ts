@@ -1,4 +1,4 @@
-import { fetchJson } from '$lib/components/note/fetch-json';
+import { fetchJson } from '$lib/fetch-json';
 import type { Verification } from '$lib/server/baselines/verify';
 
 /** Asking the server to recompute a baseline, and what it found. */

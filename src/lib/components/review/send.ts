@@ -1,5 +1,5 @@
 /** What a thread sends. Each answers with the words of what went wrong; empty when it is done. */
-import { problemWords } from '$lib/components/note/fetch-json';
+import { problemWords } from '$lib/fetch-json';
 
 async function send(path: string, method: 'POST' | 'PUT', body: unknown): Promise<string> {
 	try {
