@@ -1,6 +1,7 @@
+import { eq } from 'drizzle-orm';
 import { performance } from 'node:perf_hooks';
 import { expect, test } from 'vitest';
-import { closedHash, hashPassword } from '$lib/server/auth/passwords';
+import { hashPassword } from '$lib/server/auth/passwords';
 import { sessionFromCookie } from '$lib/server/auth/sessions';
 import { signIn } from '$lib/server/auth/sign-in';
 import { db } from '$lib/server/db';
@@ -36,25 +37,27 @@ test('a wrong password and an unknown address get one answer, and the tries left
 });
 
 test('a wrong password and an unknown address take the same time', async () => {
-	const passwordHash = await hashPassword(PASSWORD);
-	const times = async (email: (n: number) => string) => {
-		const spent: number[] = [];
-		for (let n = 0; n < 8; n++) {
-			const start = performance.now();
-			await signIn(email(n), 'not the password', fresh());
-			spent.push(performance.now() - start);
-		}
-		return spent.sort((a, b) => a - b)[4]!;
+	const timeOf = async (email: string) => {
+		const start = performance.now();
+		await signIn(email, 'not the password', fresh());
+		return performance.now() - start;
 	};
-	await closedHash();
-	const known = await Promise.all(Array.from({ length: 8 }, () => makePerson()));
-	await db.update(user).set({ passwordHash });
-	await times((n) => `warm${n}@halden.example`);
-	const withAccount = await times((n) => known[n]!.email);
-	const without = await times((n) => `none${n}@halden.example`);
+	const withAccount: number[] = [];
+	const without: number[] = [];
+	// By turns, and the quickest of each: what else the machine does meanwhile falls out.
+	for (let n = 0; n < 12; n++) {
+		const { id, email } = await makePerson();
+		await db
+			.update(user)
+			.set({ passwordHash: await hashPassword(PASSWORD) })
+			.where(eq(user.id, id));
+		withAccount.push(await timeOf(email));
+		without.push(await timeOf(`none${n}@halden.example`));
+	}
+	const ratio = Math.min(...without) / Math.min(...withAccount);
 	// One hash takes tens of milliseconds; without it the answer would come in a tenth of the time.
-	expect(without / withAccount).toBeGreaterThan(0.5);
-	expect(without / withAccount).toBeLessThan(2);
+	expect(ratio).toBeGreaterThan(0.5);
+	expect(ratio).toBeLessThan(2);
 });
 
 test('after five wrong tries the account waits fifteen minutes, even for the right password', async () => {
