@@ -26,8 +26,9 @@ export function removedPins(
 }
 
 /** The last row whose number does not go beyond the one that was; the first row if all do. */
-function placeOf(number: string, { order, number: numberOf }: Sheet): string | null {
-	const beyond = order.findIndex((id) => compareNumbers(numberOf(id), number) >= 0);
+function placeOf(number: string, sheet: Sheet): string | null {
+	const { order } = sheet;
+	const beyond = order.findIndex((id) => compareNumbers(sheet.number(id), number) >= 0);
 	const index = beyond < 0 ? order.length - 1 : Math.max(0, beyond - 1);
 	return order[index] ?? null;
 }
