@@ -30,6 +30,14 @@ export function proseEditor(element: HTMLElement, id: string, work: NoteWork): E
 				'aria-label': 'Text',
 				role: 'textbox',
 				'aria-multiline': 'true'
+			},
+			// The editor has a use of its own for Escape.
+			handleKeyDown: (_view, event) => {
+				if (event.isComposing) return false;
+				if (event.key === 'Escape') work.cancel();
+				else if (event.key === 'Enter' && (event.ctrlKey || event.metaKey)) work.done();
+				else return false;
+				return true;
 			}
 		},
 		onCreate: ({ editor }) => editor.commands.focus('end'),
