@@ -194,7 +194,8 @@ export class NoteSession {
 				if (this.#link.isOwn(origin)) for (const { id } of upsert) this.#touched.add(id);
 			})
 		);
-		this.awareness.on('change', () => (this.people = this.#readPeople()));
+		// In a moment: an editor that goes away tells its caret while the page is being changed.
+		this.awareness.on('change', () => queueMicrotask(() => (this.people = this.#readPeople())));
 		for (const change of ['stack-item-added', 'stack-item-popped', 'stack-cleared'] as const)
 			this.undoManager.on(change, () => {
 				this.canUndo = this.undoManager.canUndo();
