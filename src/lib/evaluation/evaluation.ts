@@ -22,6 +22,19 @@ export type Port = Pick<Worker, 'postMessage' | 'terminate'> & {
 const startWorker = (): Port =>
 	new Worker(new URL('./engine.worker.ts', import.meta.url), { type: 'module' });
 
+let ahead: Port | undefined;
+
+/** Starts a worker while the page still comes up; the next evaluation takes it. */
+export function startAhead(): void {
+	ahead ??= startWorker();
+}
+
+function takeWorker(): Port {
+	const port = ahead ?? startWorker();
+	ahead = undefined;
+	return port;
+}
+
 export class Evaluation {
 	private port: Port;
 	private busy = false;
@@ -31,7 +44,7 @@ export class Evaluation {
 
 	constructor(
 		private listener: Listener,
-		start: () => Port = startWorker
+		start: () => Port = takeWorker
 	) {
 		this.port = start();
 		this.port.onmessage = ({ data }) => this.receive(data);
