@@ -25,3 +25,8 @@ export async function field(page: Page, id: string, label: string): Promise<Loca
 	await expect(opened).toBeVisible();
 	return opened.getByLabel(label, { exact: true });
 }
+
+/** Waits until the page's scripts are kept for working without a connection. */
+export async function readyForOffline(page: Page): Promise<void> {
+	await page.waitForFunction(() => navigator.serviceWorker.controller?.state === 'activated');
+}

@@ -1,5 +1,5 @@
 import { expect, test } from './harness';
-import { field, openNote, row, saved, value } from './note-page';
+import { field, openNote, readyForOffline, row, saved, value } from './note-page';
 
 test('edits go on without a connection, survive a reload, and merge when it is back', async ({
 	as
@@ -9,6 +9,7 @@ test('edits go on without a connection, survive a reload, and merge when it is b
 	await openNote(lindqvist, 'ML-DN-002');
 	await openNote(quispe, 'ML-DN-002');
 
+	await readyForOffline(lindqvist);
 	await lindqvist.context().setOffline(true);
 	await expect(saved(lindqvist)).toContainText('Offline');
 	const rho = await field(lindqvist, 'ml2-rho', 'Value');
@@ -39,6 +40,7 @@ test('edits that a closed page never sent are counted and sent when the note is 
 }) => {
 	const page = await as('abara');
 	await openNote(page, 'CL-DN-006');
+	await readyForOffline(page);
 	await page.context().setOffline(true);
 	await expect(saved(page)).toContainText('Offline');
 	const width = await field(page, 'cl6-width', 'Value');
@@ -54,4 +56,25 @@ test('edits that a closed page never sent are counted and sent when the note is 
 	const elsewhere = await as('quispe');
 	await openNote(elsewhere, 'CL-DN-006');
 	await expect(value(elsewhere, 'cl6-width')).toHaveText('0.16');
+});
+
+test('text is edited without a connection, although its editor was never opened before', async ({
+	as
+}) => {
+	const page = await as('quispe');
+	await openNote(page, 'CL-DN-005');
+	await readyForOffline(page);
+	await page.context().setOffline(true);
+	await expect(saved(page)).toContainText('Offline');
+	await row(page, 'cl5-why').focus();
+	await page.keyboard.press('Enter');
+	const editor = row(page, 'cl5-why').locator('[contenteditable="true"]');
+	await editor.click();
+	await page.keyboard.press('Control+End');
+	await page.keyboard.type(' Written at sea.');
+	await page.context().setOffline(false);
+	await expect(saved(page)).toContainText('Saved', { timeout: 20_000 });
+	const other = await as('laine');
+	await openNote(other, 'CL-DN-005');
+	await expect(row(other, 'cl5-why')).toContainText('Written at sea.');
 });
