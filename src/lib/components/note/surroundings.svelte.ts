@@ -63,7 +63,11 @@ export class NoteSurroundings {
 		this.#baseline = query<Baseline | null>('baselines', 'baselines/latest');
 
 		$effect(() =>
-			session.on('event', ({ kind }) => void this.#client.invalidateQueries({ queryKey: [kind] }))
+			session.on('event', ({ kind }) => {
+				void this.#client.invalidateQueries({ queryKey: [kind] });
+				// Who removed an item with pins is written down with what its going moved.
+				if (kind === 'movements') this.refetchRemarks();
+			})
 		);
 		$effect(() => this.#tellChanges(sheet));
 	}

@@ -62,7 +62,7 @@ export const PLANS: Record<Exclude<ItemKind, 'text'>, FieldPlan[]> = {
 	lineModel: [
 		name('symbol', 'Name', 2, 'outputs are name.taper …'),
 		words('description', 'What it is', 7),
-		expression('density', 'Density ρ', 4),
+		expression('density', 'Density', 4),
 		expression('allowable', 'Allowable strength', 4),
 		expression('factorOfSafety', 'Factor of safety', 4),
 		{ ...expression('lift', 'Lift at the anchor', 4), shown: model((m) => m.baseMode === 'lift') },
