@@ -6,6 +6,11 @@ export default defineConfig({
 	outputDir: 'test-results/e2e',
 	globalSetup: './tests/e2e/global-setup.ts',
 	workers: 2,
+	projects: [
+		{ name: 'journeys', testIgnore: '**/speed.e2e.ts' },
+		// What is measured has the machine to itself.
+		{ name: 'speed', testMatch: '**/speed.e2e.ts', dependencies: ['journeys'] }
+	],
 	timeout: 60_000,
 	expect: { timeout: 10_000 },
 	forbidOnly: true,
