@@ -66,7 +66,15 @@ const mission: DemoNote = {
 	frozen: { waivers: [] },
 	edits: [{ by: 'solvang', item: 'cl1-top', field: 'value', value: '88000' }],
 	additions: [],
-	remarks: [],
+	remarks: [
+		{
+			pinned: 'before the baseline',
+			by: 'haddad',
+			item: 'cl1-top',
+			body: 'Where is the trade of top height written down? I find no note of it.',
+			replies: []
+		}
+	],
 	files: []
 };
 
