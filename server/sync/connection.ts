@@ -22,14 +22,14 @@ import {
 } from '$lib/sync/protocol';
 import type { Admitted } from './admission';
 import { Allowance, type Limits } from './limits';
-import type { Speaker } from './presence';
+import type { Participant } from './presence';
 import { SYNC, awarenessMessage, questionMessage } from './messages';
 import type { Room } from './room';
 
 /** How long a peer may take to agree to a close, in milliseconds. */
 const CLOSING = 2000;
 
-export class Connection implements Speaker {
+export class Connection implements Participant {
 	clientId: number | null = null;
 	readonly closed: Promise<void>;
 	#isOpen = true;

@@ -21,11 +21,11 @@ const LONGEST_STATE = 4000;
 /** Origin of what another process told. */
 const ELSEWHERE = Symbol('another process');
 
-export type Speaker = { readonly person: SignedIn; clientId: number | null };
+export type Participant = { readonly person: SignedIn; clientId: number | null };
 
 export class Presence {
 	readonly #awareness: Awareness;
-	readonly #speakers = new Map<number, Speaker>();
+	readonly #participants = new Map<number, Participant>();
 
 	constructor(
 		doc: Y.Doc,
@@ -56,7 +56,9 @@ export class Presence {
 
 	/** The clients that are here through this process. */
 	get clientsHere(): number[] {
-		return [...this.#speakers.keys()].filter((client) => this.#awareness.getStates().has(client));
+		return [...this.#participants.keys()].filter((client) =>
+			this.#awareness.getStates().has(client)
+		);
 	}
 
 	/** Takes what another process tells of its clients; it has stamped them. */
@@ -71,23 +73,23 @@ export class Presence {
 	}
 
 	/** Takes what a client says of itself. What it says of others (stock clients repeat it) is dropped. */
-	hear(speaker: Speaker, update: Uint8Array): void {
+	hear(participant: Participant, update: Uint8Array): void {
 		const decoder = decoding.createDecoder(update);
 		const count = decoding.readVarUint(decoder);
 		for (let entry = 0; entry < count; entry++) {
 			const clientId = decoding.readVarUint(decoder);
 			const clock = decoding.readVarUint(decoder);
 			const json = decoding.readVarString(decoder);
-			if (json.length > LONGEST_STATE || !this.#speaksAs(speaker, clientId)) continue;
+			if (json.length > LONGEST_STATE || !this.#speaksAs(participant, clientId)) continue;
 			const state: unknown = JSON.parse(json);
-			this.#apply(clientId, clock, state === null ? null : stamped(state, speaker.person));
+			this.#apply(clientId, clock, state === null ? null : stamped(state, participant.person));
 		}
 	}
 
-	leave(speaker: Speaker): void {
-		const { clientId } = speaker;
-		if (clientId === null || this.#speakers.get(clientId) !== speaker) return;
-		this.#speakers.delete(clientId);
+	leave(participant: Participant): void {
+		const { clientId } = participant;
+		if (clientId === null || this.#participants.get(clientId) !== participant) return;
+		this.#participants.delete(clientId);
 		removeAwarenessStates(this.#awareness, [clientId], null);
 	}
 
@@ -95,14 +97,14 @@ export class Presence {
 		this.#awareness.destroy();
 	}
 
-	#speaksAs(speaker: Speaker, clientId: number): boolean {
+	#speaksAs(participant: Participant, clientId: number): boolean {
 		if (clientId === this.#awareness.clientID) return false;
-		if (speaker.clientId !== null) return speaker.clientId === clientId;
+		if (participant.clientId !== null) return participant.clientId === clientId;
 		const holder = this.#awareness.getStates().get(clientId) as SharedState | undefined;
 		// The same person coming back before the old socket was seen to be gone takes it over.
-		if (holder && holder.user.id !== speaker.person.id) return false;
-		this.#speakers.set(clientId, speaker);
-		speaker.clientId = clientId;
+		if (holder && holder.user.id !== participant.person.id) return false;
+		this.#participants.set(clientId, participant);
+		participant.clientId = clientId;
 		return true;
 	}
 

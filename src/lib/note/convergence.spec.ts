@@ -20,14 +20,12 @@ const step = (replicas: number) => {
 	);
 };
 
-const scenario = fc
-	.integer({ min: 2, max: 4 })
-	.chain((replicas) =>
-		fc.record({
-			replicas: fc.constant(replicas),
-			steps: fc.array(step(replicas), { maxLength: 60 })
-		})
-	);
+const scenario = fc.integer({ min: 2, max: 4 }).chain((replicas) =>
+	fc.record({
+		replicas: fc.constant(replicas),
+		steps: fc.array(step(replicas), { maxLength: 60 })
+	})
+);
 
 function deliver(from: Y.Doc, to: Y.Doc) {
 	Y.applyUpdate(to, Y.encodeStateAsUpdate(from, Y.encodeStateVector(to)));
