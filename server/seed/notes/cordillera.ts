@@ -10,7 +10,7 @@ import type { DemoProgramme } from '.';
 export const cordillera: DemoProgramme = {
 	code: 'CL',
 	title: 'Cordillera Line',
-	summary: 'Earth, ocean-anchored, 14 t climbers',
+	summary: 'Earth, ocean-anchored, 14\u202ft climbers',
 	gates: [
 		{ kind: 'SRR', name: 'System requirements review', inDays: 0 },
 		{ kind: 'PDR', name: 'Preliminary design review', inDays: 77 },

@@ -168,7 +168,7 @@ const line: DemoNote = {
 export const mare: DemoProgramme = {
 	code: 'ML',
 	title: 'Mare Line',
-	summary: 'Moon to L1, 2 t climbers',
+	summary: 'Moon to L1, 2\u202ft climbers',
 	gates: [
 		{ kind: 'SRR', name: 'System requirements review', inDays: 49 },
 		{ kind: 'PDR', name: 'Preliminary design review', inDays: 287 },

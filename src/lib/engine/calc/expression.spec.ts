@@ -157,6 +157,7 @@ describe('a fault in an expression', () => {
 	it('says what a lone unit name would have meant, and what lies near a mistyped symbol', () => {
 		expect(faultOf('2*g').remedy).toContain('directly after a number: 1 g');
 		expect(faultOf('sigma_dd', [given('sigma_d', '1')]).near).toEqual(['sigma_d']);
+		expect(faultOf('σ_', [given('σ_d', '1'), given('w', '2')]).near).toEqual(['σ_d']);
 	});
 
 	it('tells a name that is a unit and a quantity apart from neither', () => {

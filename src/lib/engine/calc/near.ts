@@ -4,9 +4,11 @@ export function nearest(name: string, known: Iterable<string>, most = 3): string
 	const scored: [number, string][] = [];
 	for (const candidate of known) {
 		const other = simple(candidate);
-		const begins = wanted.length > 1 && other.startsWith(wanted);
+		const begins = name.length > 1 && other.startsWith(wanted);
 		const away = begins ? 0.5 : distance(wanted, other);
-		if (away <= Math.max(1, Math.floor(wanted.length / 3))) scored.push([away, candidate]);
+		// One letter for another is no slip but another name.
+		const slip = away < wanted.length && away <= Math.max(1, Math.floor(wanted.length / 3));
+		if (begins || slip) scored.push([away, candidate]);
 	}
 	scored.sort(([a, x], [b, y]) => a - b || (x < y ? -1 : 1));
 	return scored.slice(0, most).map(([, candidate]) => candidate);
