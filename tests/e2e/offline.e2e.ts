@@ -78,3 +78,36 @@ test('text is edited without a connection, although its editor was never opened 
 	await openNote(other, 'CL-DN-005');
 	await expect(row(other, 'cl5-why')).toContainText('Written at sea.');
 });
+
+test('edits by somebody who has lost the role meanwhile are not taken, and not lost', async ({
+	as
+}) => {
+	const abara = await as('abara');
+	const solvang = await as('solvang');
+	await openNote(abara, 'ML-DN-001');
+	await readyForOffline(abara);
+	await abara.context().setOffline(true);
+	await expect(saved(abara)).toContainText('Offline');
+	const speed = await field(abara, 'ml1-piece', 'Value');
+	await speed.fill('21');
+	await speed.press('Enter');
+
+	await solvang.goto('/programmes/ML/people');
+	await solvang.getByRole('link', { name: 'Change N. Abara' }).click();
+	await solvang.getByRole('combobox', { name: 'Role' }).selectOption('reviewer');
+	await solvang.getByRole('button', { name: 'Change', exact: true }).click();
+	await expect(solvang.getByRole('row', { name: /^N. Abara/ })).toContainText('reviewer');
+
+	await abara.context().setOffline(false);
+	await expect(abara.getByRole('alert')).toContainText('was not taken', { timeout: 20_000 });
+	await expect(abara.getByRole('link', { name: 'N. Abara, reviewer' })).toBeVisible();
+	await expect(abara.getByText('Change the title block')).toHaveCount(0);
+	await abara.getByRole('button', { name: /^Copy the/ }).click();
+	await expect(abara.getByLabel('Edits that were not taken')).toHaveValue(/21/);
+	await openNote(solvang, 'ML-DN-001');
+	await expect(value(solvang, 'ml1-piece')).not.toHaveText('21');
+
+	await abara.getByRole('button', { name: /^Drop/ }).click();
+	await expect(saved(abara)).toContainText('Saved');
+	await expect(value(abara, 'ml1-piece')).not.toHaveText('21');
+});
