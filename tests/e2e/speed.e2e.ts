@@ -112,10 +112,13 @@ async function opening(context: BrowserContext, number: string): Promise<number>
 	const session = await context.newCDPSession(page);
 	await session.send('Emulation.setCPUThrottlingRate', { rate: 4 });
 	await page.goto(`/programmes/CL/notes/${number}`);
-	const at = await page.waitForFunction(() => (window as { interactiveAt?: number }).interactiveAt);
+	const shown = await page.waitForFunction(
+		() => (window as { interactiveAt?: number }).interactiveAt
+	);
+	const at = (await shown.jsonValue())!;
 	await expect(await field(page, FIRST_GIVEN, 'Value')).toBeEditable();
 	await page.close();
-	return (await at.jsonValue())!;
+	return at;
 }
 
 /** Times from a keystroke on this page to the frame after a figure of the page has changed. */

@@ -1,0 +1,123 @@
+import { createHash } from 'node:crypto';
+import { readFileSync } from 'node:fs';
+import { expect, test } from './harness';
+import { field, openNote, row, saved, value } from './note-page';
+
+test('two people write one text at once, with each other’s carets, and others read it live', async ({
+	as
+}) => {
+	const solvang = await as('solvang');
+	const quispe = await as('quispe');
+	const laine = await as('laine');
+	for (const page of [solvang, quispe, laine]) await openNote(page, 'ML-DN-001');
+	const texts = [solvang, quispe].map((page) => row(page, 'ml1-why'));
+	for (const [index, page] of [solvang, quispe].entries()) {
+		await texts[index]!.focus();
+		await page.keyboard.press('Enter');
+		await expect(texts[index]!.locator('[contenteditable="true"]')).toBeVisible();
+	}
+	await texts[0]!.locator('[contenteditable="true"] p').first().click();
+	await solvang.keyboard.press('Home');
+	await solvang.keyboard.type('First form. ');
+	await texts[1]!.locator('[contenteditable="true"] p').first().click();
+	await quispe.keyboard.press('Control+End');
+	await quispe.keyboard.type(' By two hands.');
+	for (const page of [solvang, quispe, laine]) {
+		await expect(row(page, 'ml1-why')).toContainText('First form.');
+		await expect(row(page, 'ml1-why')).toContainText('By two hands.');
+	}
+	await expect(texts[0]!).toContainText('M. Quispe');
+
+	// Bold, and the live value of a quantity, from the bar of words.
+	await quispe.keyboard.press('Control+b');
+	await quispe.keyboard.type(' Bold.');
+	await expect(row(laine, 'ml1-why').locator('strong, b')).toContainText(['Bold.']);
+	await solvang.keyboard.press('Escape');
+	await expect(row(laine, 'ml1-why')).toContainText('By two hands.');
+});
+
+test('a picture put in as evidence is shown in place with the digest of its bytes, a program is not taken', async ({
+	as
+}) => {
+	const nwosu = await as('nwosu');
+	await openNote(nwosu, 'CL-DN-004');
+	const evidence = row(nwosu, 'cl4-joints');
+	await evidence.focus();
+	const picture = 'server/seed/files/lap-joints-batch-7.png';
+	const bytes = readFileSync(picture);
+	await evidence
+		.locator('input[type="file"]')
+		.setInputFiles({ name: 'break-faces.png', mimeType: 'image/png', buffer: bytes });
+	const digest = createHash('sha256').update(bytes).digest('hex');
+	await expect(evidence).toContainText('break-faces.png');
+	await expect(evidence.locator(`[title="SHA-256 ${digest}"]`)).toHaveCount(2);
+	const shown = evidence.locator('img[alt^="break-faces.png"]');
+	await shown.scrollIntoViewIfNeeded();
+	await expect
+		.poll(() => shown.evaluate((image) => (image as HTMLImageElement).naturalWidth))
+		.toBeGreaterThan(100);
+
+	await evidence.locator('input[type="file"]').setInputFiles({
+		name: 'harmless.png',
+		mimeType: 'image/png',
+		buffer: Buffer.concat([Buffer.from([0x7f, 0x45, 0x4c, 0x46, 2, 1, 1, 0]), Buffer.alloc(64)])
+	});
+	await expect(evidence.getByRole('alert')).toContainText('harmless.png was not taken');
+
+	const reader = await as('haddad');
+	await openNote(reader, 'CL-DN-004');
+	await expect(row(reader, 'cl4-joints')).toContainText('break-faces.png');
+});
+
+test('a line model shows the figures that an independent integration gives, and follows its inputs', async ({
+	as
+}) => {
+	const quispe = await as('quispe');
+	await openNote(quispe, 'CL-DN-004');
+	const model = row(quispe, 'cl4-line');
+	// SciPy's quad over the same field (WGS 84, J2 left out) at 60.469 GPa, 1520 kg/m³, 14 t, 88 000 km.
+	for (const figure of ['3.378', '882.9', '715.4', '461.7', '7.636']) {
+		await expect(model).toContainText(figure);
+	}
+	await expect(value(quispe, 'cl4-tot')).toHaveText(/1.598/);
+
+	await model.getByText('Open across the sheet').click();
+	await expect(
+		quispe.getByText('All panels share the height axis', { exact: false })
+	).toBeVisible();
+	await quispe.getByRole('button', { name: 'Table', exact: true }).click();
+	const table = quispe.getByRole('table').first();
+	// By the same integration: section and tension at 20 000 km and at the top.
+	for (const figure of ['7.120', '430.6', '5.408', '327.0'])
+		await expect(table).toContainText(figure);
+	await quispe.getByText('Close the charts').click();
+
+	// A top below synchronous height is refused in words that say what to change.
+	const top = await field(quispe, 'cl4-top', 'Value');
+	await top.fill('30000');
+	await top.press('Enter');
+	await expect(model).toContainText(/synchronous/);
+	await expect(model).toContainText(/35.786/);
+	await expect(row(quispe, 'cl4-tot')).toContainText('waits for');
+	const again = await field(quispe, 'cl4-top', 'Value');
+	await again.fill('88000');
+	await again.press('Enter');
+	await expect(value(quispe, 'cl4-tot')).toHaveText(/1.598/);
+	await expect(saved(quispe)).toContainText('Saved');
+});
+
+test('a symbol is completed with Tab, and Esc leaves a row as it was', async ({ as }) => {
+	const abara = await as('abara');
+	await openNote(abara, 'CL-DN-003');
+	const expression = await field(abara, 'cl3-energy', 'Expression');
+	const before = await expression.inputValue();
+	await expression.press('End');
+	await expression.pressSequentially(' * v_m');
+	await expect(row(abara, 'cl3-energy')).toContainText('Greatest speed on the tape');
+	await expression.press('Tab');
+	await expect(expression).toHaveValue(`${before} * v_max`);
+	await expression.press('Escape');
+	await expect(row(abara, 'cl3-energy').locator('[data-open]')).toHaveCount(0);
+	// 14 t × 48.4227 MJ/kg / 0.86 = 218.97 MWh
+	await expect(value(abara, 'cl3-energy')).toHaveText('219.0');
+});
