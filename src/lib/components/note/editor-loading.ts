@@ -1,4 +1,7 @@
-/** Editors come when somebody is about to edit; a page that is only read never loads them. */
+/**
+ * Editors come when somebody first edits; a page that is only read never loads them. The service worker
+ * keeps them, so that this works without a connection as well.
+ */
 let loading: Promise<typeof import('./edit/ItemEditor.svelte')> | undefined;
 
 export function loadEditor() {
@@ -8,11 +11,4 @@ export function loadEditor() {
 		throw failure;
 	});
 	return loading;
-}
-
-/** Fetched ahead, so that a connection that goes between reading and typing stops nobody. */
-export async function fetchEditors(): Promise<void> {
-	await loadEditor()
-		.then(() => import('./edit/TextEditor.svelte'))
-		.catch(() => {});
 }
