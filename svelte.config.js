@@ -7,6 +7,9 @@ export default {
 	kit: {
 		adapter: adapter(),
 		alias: { $server: 'server' },
+		// Vite tells by the address what the page has loaded already.
+		paths: { relative: false },
+		serviceWorker: { register: false },
 		csp: {
 			mode: 'nonce',
 			directives: {

@@ -1,37 +1,33 @@
 /**
- * The server is killed without warning, again and again, while several people edit. Each client notes
- * what it was told is saved; after every kill all of that must be in the database, and in the note that
- * the next server hands out.
+ * The site, as it is built for production, is killed without warning, again and again, while several
+ * people edit. Each client notes what it was told is saved; after every kill all of that must be in the
+ * database, and in the note that the next server hands out.
  */
-import { fork, type ChildProcess } from 'node:child_process';
-import { once } from 'node:events';
-import { afterEach, expect, test } from 'vitest';
+import { afterEach, expect, inject, test } from 'vitest';
 import type * as Y from 'yjs';
 import type { SignedIn } from '$lib/server/auth/sessions';
 import { loadDocument } from '$lib/server/notes/document';
 import { addItem, textField } from '$lib/note/document';
 import { makeNote, makeProgramme } from '../server/fixtures';
 import { eventually, join, type Joined } from '../server/sync-client';
+import { serve, type Served } from '../setup/serve';
 
 const KILLS = 5;
 const SAVED_BETWEEN_KILLS = 100;
 
-let running: ChildProcess | undefined;
-afterEach(() => running?.kill('SIGKILL'));
+let running: Served | undefined;
+afterEach(() => running?.kill());
 
-async function startProcess(port: number): Promise<number> {
-	running = fork('tests/crash/server.ts', {
-		execArgv: ['--import', 'tsx'],
-		env: { ...process.env, PORT: String(port), LOG_LEVEL: 'error' }
-	});
-	const [listening] = (await once(running, 'message')) as [number];
-	return listening;
-}
-
-async function killProcess(): Promise<void> {
-	const ended = once(running!, 'exit');
-	running!.kill('SIGKILL');
-	await ended;
+async function startSite(port?: number): Promise<Served> {
+	return (running = await serve(
+		{
+			DATABASE_URL: process.env.DATABASE_URL!,
+			SMTP_URL: process.env.SMTP_URL!,
+			...inject('store'),
+			LOG_LEVEL: 'error'
+		},
+		port
+	));
 }
 
 /** One person who types number after number into a field and notes which were said to be saved. */
@@ -84,8 +80,9 @@ const missing = (doc: Y.Doc, writers: Writer[]) =>
 test('everything that was said to be saved is there after a kill', async () => {
 	const { programme, lead, engineer } = await makeProgramme();
 	const { id: noteId } = await makeNote(programme.id, lead);
-	const port = await startProcess(0);
-	const server = { url: `ws://127.0.0.1:${port}` };
+	const site = await startSite();
+	const { host, port } = new URL(site.origin);
+	const server = { url: `ws://${host}`, origin: site.origin };
 	const joined = (person: SignedIn) => join(server, noteId, person);
 	const writers: Writer[] = [];
 	for (const person of [lead, engineer, engineer]) writers.push(new Writer(await joined(person)));
@@ -95,10 +92,10 @@ test('everything that was said to be saved is there after a kill', async () => {
 	for (let kill = 0; kill < KILLS; kill++) {
 		const before = saved();
 		await eventually(() => expect(saved()).toBeGreaterThan(before + SAVED_BETWEEN_KILLS), 30_000);
-		await killProcess();
+		await running!.kill();
 		if (writers.some(({ unsaved }) => unsaved > 0)) killedWhileUnsaved += 1;
 		expect(missing((await loadDocument(noteId)).doc, writers), `kill ${kill + 1}`).toEqual([]);
-		await startProcess(port);
+		await startSite(Number(port));
 		const fresh = await joined(lead);
 		expect(missing(fresh.doc, writers)).toEqual([]);
 		fresh.leave();

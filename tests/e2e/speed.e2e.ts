@@ -1,7 +1,7 @@
 /** What a large note may cost: script, opening, a keystroke. Figures are printed; limits are held. */
 import { spawnSync } from 'node:child_process';
 import { gzipSync } from 'node:zlib';
-import type { BrowserContext, Page } from '@playwright/test';
+import type { Page } from '@playwright/test';
 import { address } from '../../server/seed/people';
 import { FIRST_GIVEN, LAST_CALCULATION } from '../bench/large-note';
 import { expect, test, type Site } from './harness';
@@ -17,12 +17,12 @@ const figures = (times: number[]) =>
 	`median ${percentile(times, 0.5).toFixed(1)} ms, p95 ${percentile(times, 0.95).toFixed(1)} ms`;
 
 /** Measures anew, at most three times: what else the machine does can only add to a time. */
-async function medianWithin(limit: number, what: string, measure: () => Promise<number[]>) {
+async function within(limit: number, part: number, what: string, measure: () => Promise<number[]>) {
 	let least = Infinity;
 	for (let round = 0; round < 3 && least > limit; round++) {
 		const times = await measure();
 		console.log(`${what}: ${figures(times)}, n = ${times.length}`);
-		least = Math.min(least, percentile(times, 0.5));
+		least = Math.min(least, percentile(times, part));
 	}
 	expect(least, what).toBeLessThanOrEqual(limit);
 }
@@ -90,17 +90,24 @@ test('a note of 300 items opens within 1.5 s on a processor slowed four times', 
 }) => {
 	test.setTimeout(180_000);
 	const number = writeLargeNote(site);
-	const context = (await as('nwosu')).context();
-	await medianWithin(1500, 'a note of 300 items opens, slowed 4 ×', async () => {
+	await as('nwosu');
+	await within(1500, 0.5, 'a note of 300 items opens on a first visit, slowed 4 ×', async () => {
 		const times: number[] = [];
-		for (let attempt = 0; attempt < 5; attempt++) times.push(await opening(context, number));
+		// Each in a browser that has nothing of the site in its cache.
+		for (let n = 0; n < 7; n++) times.push(await opening(await as('nwosu'), number));
+		return times;
+	});
+	const again = (await as('nwosu')).context();
+	await opening(await again.newPage(), number);
+	await within(1500, 0.5, 'the same on a later visit', async () => {
+		const times: number[] = [];
+		for (let n = 0; n < 5; n++) times.push(await opening(await again.newPage(), number));
 		return times;
 	});
 });
 
 /** From the start of the navigation to the first figures, on a page whose rows open for editing. */
-async function opening(context: BrowserContext, number: string): Promise<number> {
-	const page = await context.newPage();
+async function opening(page: Page, number: string): Promise<number> {
 	await page.addInitScript(() => {
 		const look = () => {
 			const figure = document.getElementById('calc-1')?.querySelector('.val')?.textContent;
@@ -109,7 +116,7 @@ async function opening(context: BrowserContext, number: string): Promise<number>
 		};
 		requestAnimationFrame(look);
 	});
-	const session = await context.newCDPSession(page);
+	const session = await page.context().newCDPSession(page);
 	await session.send('Emulation.setCPUThrottlingRate', { rate: 4 });
 	await page.goto(`/programmes/CL/notes/${number}`);
 	const shown = await page.waitForFunction(
@@ -119,6 +126,16 @@ async function opening(context: BrowserContext, number: string): Promise<number>
 	await expect(await field(page, FIRST_GIVEN, 'Value')).toBeEditable();
 	await page.close();
 	return at;
+}
+
+const KEYSTROKES = 40;
+
+/** Keys alone and nothing asked of the page meanwhile: a question takes its time from the same thread. */
+async function typeInto(page: Page) {
+	for (let n = 0; n < KEYSTROKES; n++) {
+		await page.keyboard.press(n % 2 === 0 ? '1' : 'Backspace');
+		await page.waitForTimeout(120);
+	}
 }
 
 /** Times from a keystroke on this page to the frame after a figure of the page has changed. */
@@ -153,15 +170,11 @@ test('a keystroke in the first given of 300 items shows the last result within 5
 	await expect(value(page, LAST_CALCULATION)).not.toBeEmpty();
 	const given = await field(page, FIRST_GIVEN, 'Value');
 	await given.press('End');
-	await medianWithin(50, 'keystroke to the last of 200 results', () =>
-		keystrokeTimes(page, LAST_CALCULATION, async () => {
-			for (let n = 0; n < 20; n++) {
-				const before = await value(page, LAST_CALCULATION).textContent();
-				await given.press(n % 2 === 0 ? '1' : 'Backspace');
-				await expect(value(page, LAST_CALCULATION)).not.toHaveText(before!);
-			}
-		})
-	);
+	await within(50, 0.95, 'keystroke to the last of 200 results', async () => {
+		const times = await keystrokeTimes(page, LAST_CALCULATION, () => typeInto(page));
+		expect(times).toHaveLength(KEYSTROKES);
+		return times;
+	});
 });
 
 test('an edit on the demo note reaches its own results and the other screen at once', async ({

@@ -14,6 +14,7 @@ const { db } = await import('$lib/server/db');
 const { baseline, baselineEvidence, evidenceFile } = await import('$lib/server/db/schema');
 const { POST } = await import('../../src/routes/api/notes/[note]/evidence/+server');
 const { GET, DELETE } = await import('../../src/routes/api/evidence/[file]/+server');
+const { HEAD } = await import('$lib/server/evidence/media-type');
 const { settings } = await import('$lib/server/settings');
 const { log } = await import('$lib/server/log');
 
@@ -82,7 +83,8 @@ async function digestInStore(fileId: string): Promise<string> {
 }
 
 test('a large file reaches the store byte for byte, with the digest that is recorded', async () => {
-	const bytes = randomBytes(12 * 1024 * 1024 + 17);
+	// Any start could be taken for some kind of file, noughts for none.
+	const bytes = randomBytes(12 * 1024 * 1024 + 17).fill(0, 0, HEAD);
 	const file = await stored('coupon run 7.bin', bytes);
 	const digest = createHash('sha256').update(bytes).digest('hex');
 	expect(file).toEqual({

@@ -53,10 +53,14 @@ export async function headersOf(person: SignedIn, origin = ORIGIN) {
 }
 
 /** The stock provider with a document of its own, as any client of the protocol would be. */
-export async function join(server: { url: string }, noteId: string, person: SignedIn) {
+export async function join(
+	server: { url: string; origin?: string },
+	noteId: string,
+	person: SignedIn
+) {
 	const doc = new Y.Doc();
 	const provider = new WebsocketProvider(`${server.url}/sync`, noteId, doc, {
-		WebSocketPolyfill: socketWith(await headersOf(person)),
+		WebSocketPolyfill: socketWith(await headersOf(person, server.origin)),
 		disableBc: true
 	});
 	const saved: number[] = [];

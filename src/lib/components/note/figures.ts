@@ -42,18 +42,20 @@ export function marginWords(margin: Margin): string {
 /** What the line does beside a row. */
 export type Strand = { state: 'plain' | CheckState; margin: number | null };
 
+/** One for all rows, so that a new result of a row that stays plain redraws nothing. */
+const PLAIN: Strand = { state: 'plain', margin: null };
+
 export function strandOf(item: Item, result: ItemResult | undefined): Strand {
-	const plain: Strand = { state: 'plain', margin: null };
-	if (!result) return plain;
+	if (!result) return PLAIN;
 	if (result.kind === 'check') {
 		const margin = result.margin?.relative ?? null;
-		return isBlankCheck(item) ? plain : { state: result.state, margin };
+		return isBlankCheck(item) ? PLAIN : { state: result.state, margin };
 	}
 	const open =
 		result.kind === 'lineModel'
 			? result.faults.length > 0 || result.waitsFor.length > 0
 			: result.outcome.state === 'waits' || result.outcome.state === 'fault';
-	return open ? { state: 'waits', margin: null } : plain;
+	return open ? { state: 'waits', margin: null } : PLAIN;
 }
 
 function isBlankCheck(item: Item): boolean {

@@ -35,8 +35,8 @@ export class NoteWork {
 	said = $state('');
 	/** Editing is for wider screens. */
 	wide = $state(true);
-	/** How many rows are mounted; the rest follow while the browser is idle. */
-	mounted = $state(24);
+	/** How many rows are mounted: a screen of them, the rest follow while the browser is idle. */
+	mounted = $state(16);
 
 	#was: AsItWas | null = null;
 
