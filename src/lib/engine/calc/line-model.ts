@@ -12,8 +12,10 @@ import {
 } from '../quantities/dimension';
 import { formatFigure, kilometres } from '../quantities/format';
 import { BODIES } from '../line/bodies';
-import { bodyField, type Field } from '../line/field';
-import { profileTaper, sizeTaper, type TaperInput, type Told } from '../line/taper';
+import type { Field } from '../line/field';
+import { ofBody } from '../line/site';
+import { profileTaper, sizeTaper, type TaperInput } from '../line/taper';
+import type { Told } from '../methods/parameter';
 import { fault } from './faults';
 import type { Formula, FormulaOutcome } from './formula';
 import { valueType } from './infer';
@@ -94,7 +96,7 @@ export function evaluateLineModel(
 	const input = taperInput(values, BODIES[item.body].radius.value);
 	if (!input) return without({ state: 'blank' });
 
-	const field = bodyField(BODIES[item.body]);
+	const field = ofBody(BODIES[item.body], false);
 	const refusal = topRefusal(field, input.top);
 	if (refusal) {
 		const reason = { field: '', fault: refusal };
@@ -177,8 +179,8 @@ function taperInput(
 
 /** Why a line cannot end at this radius; null when it can. */
 function topRefusal(field: Field, top: number): Fault | null {
-	const synchronous = field.synchronous - field.base;
-	if (top <= field.synchronous * (1 + 1e-9)) {
+	const synchronous = field.balance - field.base;
+	if (top <= field.balance * (1 + 1e-9)) {
 		return fault(
 			'refused',
 			`The top is ${kilometres(top - field.base)} up, not above synchronous height at ${kilometres(synchronous)}: ` +
@@ -186,7 +188,7 @@ function topRefusal(field: Field, top: number): Fault | null {
 			{ remedy: `Set the top above ${kilometres(synchronous)}.` }
 		);
 	}
-	if (top <= field.synchronous * 1000) return null;
+	if (top <= field.balance * 1000) return null;
 	return fault(
 		'refused',
 		`The top is ${kilometres(top - field.base)} up, more than a thousand synchronous radii: one body alone says nothing there.`

@@ -1,6 +1,7 @@
 /** What a line model gives, each a quantity that other items name as `symbol.name`. */
 import { AREA, FORCE, LENGTH, MASS, PRESSURE, PURE, type Dimension } from '../quantities/dimension';
-import type { TaperResult, Told } from '../line/taper';
+import type { TaperResult } from '../line/taper';
+import type { Told } from '../methods/parameter';
 
 export type OutputDefinition = {
 	name: string;

@@ -6,9 +6,9 @@ import type { Field } from '../line/field';
 export function warnings(body: BodyName, field: Field, factorOfSafety: number): string[] {
 	const { label, j2, l1 } = BODIES[body];
 	return [
-		...(l1 && field.synchronous > l1.value
+		...(l1 && field.balance > l1.value
 			? [
-					`${label} as one body: the synchronous radius of ${kilometres(field.synchronous)} lies beyond its L1 at ` +
+					`${label} as one body: the synchronous radius of ${kilometres(field.balance)} lies beyond its L1 at ` +
 						`${kilometres(l1.value)}, where the primary pulls more. These figures do not describe a line there.`
 				]
 			: []),

@@ -7,6 +7,7 @@
  * exponent and a taper of 1e33 loses no digits.
  */
 import { integrate } from '../numerics/quadrature';
+import type { Told } from '../methods/parameter';
 import type { Field } from './field';
 import { freeStandingRadius, uniformPeakStress } from './uniform';
 
@@ -22,9 +23,6 @@ export type TaperInput = {
 	/** Radius of the top from the body's centre, m; beyond r_s (1 + 1e-9). */
 	top: number;
 };
-
-/** A figure in SI; where it is above 1e300 its decimal logarithm. */
-export type Told = number | { log10: number };
 
 export type TaperResult = {
 	designStress: number;
@@ -48,12 +46,12 @@ export type TaperResult = {
 };
 
 export function isAboveSynchronous(field: Field, top: number): boolean {
-	return top > field.synchronous * (1 + 1e-9);
+	return top > field.balance * (1 + 1e-9);
 }
 
 export function sizeTaper(field: Field, input: TaperInput): TaperResult {
 	const { density, designStress, reserve, top } = input;
-	const { base, synchronous } = field;
+	const { base, balance: synchronous } = field;
 	const k = density / designStress;
 	const liftWeight = field.g(base) * (1 + reserve);
 	const baseArea = baseSection(field, input);
@@ -123,7 +121,7 @@ export type Profile = {
 
 /** The line at graded heights, finer near the base; r_s is among them. Null where a section cannot be told. */
 export function profileTaper(field: Field, input: TaperInput): Profile | null {
-	const { base, synchronous } = field;
+	const { base, balance: synchronous } = field;
 	const { density, designStress, top } = input;
 	const baseArea = baseSection(field, input);
 	const k = density / designStress;

@@ -3,7 +3,7 @@ import type { Field } from './field';
 
 /** Greatest stress, Pa, at the synchronous radius. */
 export function uniformPeakStress(field: Field, density: number): number {
-	return density * field.rise(field.base, field.synchronous);
+	return density * field.rise(field.base, field.balance);
 }
 
 /**
@@ -11,7 +11,7 @@ export function uniformPeakStress(field: Field, density: number): number {
  * (R/2)[√(1 + 8(r_s/R)³) − 1], which is where the bisection starts from; it ends at the last digit.
  */
 export function freeStandingRadius(field: Field): number {
-	const { base, synchronous, rise } = field;
+	const { base, balance: synchronous, rise } = field;
 	const closed = (base / 2) * (Math.sqrt(1 + 8 * (synchronous / base) ** 3) - 1);
 	let low = Math.max(synchronous, closed * (1 - 1e-2));
 	let high = closed * (1 + 1e-2);

@@ -1,0 +1,178 @@
+/**
+ * A line as built: its field, its section over the radius in smooth pieces, the point masses on it and
+ * the counterweight at its top. ρ and A are as deployed, under load; radii are from the body's centre.
+ */
+import { group, list, quantity, variant, type ValuesOf } from '../methods/parameter';
+import { refuseInput } from '../methods/refused';
+import { AREA, DENSITY, LENGTH, MASS, PRESSURE } from '../quantities/dimension';
+import type { Field } from './field';
+import { fieldOf, site } from './site';
+
+/** A stretch [from, to] over which the section is smooth. */
+export type Piece = { from: number; to: number; area: (r: number) => number };
+
+export type PointMass = { radius: number; mass: number };
+
+export type Line = {
+	field: Field;
+	/** kg/m³ */
+	density: number;
+	/** From the anchor to the top without a gap. */
+	pieces: readonly Piece[];
+	/** Upwards; one at the anchor counts above the base tension. */
+	masses: readonly PointMass[];
+	/** kg, at the top */
+	counterweight: number;
+};
+
+export const topOf = ({ pieces }: Line): number => pieces.at(-1)!.to;
+
+const radius = (label: string) =>
+	quantity({ label, symbol: 'r', dimension: LENGTH, unit: 'km', range: { above: 0 } });
+
+const sectionAt = (label: string) =>
+	quantity({ label, symbol: 'A', dimension: AREA, unit: 'mm^2', range: { above: 0 } });
+
+/** What describes a line whose section is known; shared by all methods that look at one. */
+export const lineInputs = {
+	site,
+	density: quantity({
+		label: 'density',
+		symbol: 'ρ',
+		dimension: DENSITY,
+		unit: 'kg/m^3',
+		range: { above: 0 }
+	}),
+	section: variant({
+		label: 'section over the radius',
+		cases: {
+			taper: {
+				label: 'constant-stress taper',
+				fields: {
+					baseArea: sectionAt('section at the anchor'),
+					designStress: quantity({
+						label: 'design stress of the taper',
+						symbol: 'σ_d',
+						dimension: PRESSURE,
+						unit: 'GPa',
+						range: { above: 0 }
+					}),
+					top: radius('radius of the top, from the body’s centre')
+				}
+			},
+			stepped: {
+				label: 'sections of constant area',
+				fields: {
+					baseRadius: quantity({
+						label: 'radius of the anchor; the body’s own where left out',
+						dimension: LENGTH,
+						unit: 'km',
+						range: { above: 0 },
+						optional: true
+					}),
+					sections: list({
+						label: 'sections upwards from the anchor',
+						fewest: 1,
+						most: 20_000,
+						of: group({
+							label: 'section',
+							fields: { to: radius('radius of its upper end'), area: sectionAt('area') }
+						})
+					})
+				}
+			},
+			table: {
+				label: 'table, linear between rows',
+				fields: {
+					rows: list({
+						label: 'rows upwards from the anchor',
+						fewest: 2,
+						most: 20_000,
+						of: group({
+							label: 'row',
+							fields: { radius: radius('radius'), area: sectionAt('area') }
+						})
+					})
+				}
+			}
+		}
+	}),
+	masses: list({
+		label: 'point masses on the line: climbers, joints, stations',
+		fewest: 0,
+		most: 20_000,
+		of: group({
+			label: 'point mass',
+			fields: {
+				radius: radius('radius'),
+				mass: quantity({
+					label: 'mass',
+					symbol: 'm',
+					dimension: MASS,
+					unit: 't',
+					range: { least: 0 }
+				})
+			}
+		})
+	}),
+	counterweight: quantity({
+		label: 'counterweight',
+		symbol: 'm_c',
+		dimension: MASS,
+		unit: 't',
+		range: { least: 0 }
+	})
+} as const;
+
+export type LineInput = ValuesOf<typeof lineInputs>;
+
+/** @throws Refused where rows do not ascend, a mass lies off the line or no line can stand there. */
+export function lineOf(input: LineInput): Line {
+	const field = fieldOf(input.site);
+	const pieces = piecesOf(field, input);
+	const top = pieces.at(-1)!.to;
+	if (top >= field.limit) refuseInput('section', 'The line reaches the centre of the primary.');
+	const masses = [...input.masses].sort((a, b) => a.radius - b.radius);
+	input.masses.forEach(({ radius }, i) => {
+		if (radius < pieces[0]!.from || radius > top)
+			refuseInput(`masses.${i}.radius`, `Point mass ${i + 1} does not lie on the line.`);
+	});
+	return { field, density: input.density, pieces, masses, counterweight: input.counterweight };
+}
+
+function piecesOf(field: Field, { section, density }: LineInput): Piece[] {
+	switch (section.kind) {
+		case 'taper': {
+			const { baseArea, designStress, top } = section;
+			if (top <= field.base) refuseInput('section.top', 'The top lies below the anchor.');
+			const area = (r: number) =>
+				baseArea * Math.exp((density / designStress) * field.rise(field.base, r));
+			const edges = [field.base, ...(top > field.balance ? [field.balance] : []), top];
+			return edges.slice(1).map((to, i) => ({ from: edges[i]!, to, area }));
+		}
+		case 'stepped': {
+			const radii = [section.baseRadius ?? field.base, ...section.sections.map(({ to }) => to)];
+			ascending(radii, (i) => `section.sections.${i - 1}.to`);
+			return section.sections.map(({ to, area }, i) => ({ from: radii[i]!, to, area: () => area }));
+		}
+		case 'table': {
+			const { rows } = section;
+			ascending(
+				rows.map(({ radius }) => radius),
+				(i) => `section.rows.${i}.radius`
+			);
+			return rows.slice(1).map(({ radius: to, area }, i) => {
+				const { radius: from, area: start } = rows[i]!;
+				const slope = (area - start) / (to - from);
+				return { from, to, area: (r) => start + slope * (r - from) };
+			});
+		}
+	}
+}
+
+function ascending(radii: readonly number[], path: (i: number) => string): void {
+	radii.forEach((radius, i) => {
+		if (i > 0 && !(radius > radii[i - 1]!))
+			refuseInput(path(i), `Radius ${i + 1} does not lie above the one before it.`);
+	});
+}

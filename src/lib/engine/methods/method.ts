@@ -1,0 +1,90 @@
+/** A method: one named computation with its description, and the door through which it is called. */
+import { ENGINE_VERSION } from '../version';
+import { checkInputs } from './check';
+import type { Parameters, ValuesOf } from './parameter';
+import { Refused, type Refusal } from './refused';
+
+export type Description = {
+	/** As it is called, in lower case with hyphens, e.g. "stepped-line". */
+	name: string;
+	title: string;
+	/** What it answers, in a sentence or two. */
+	summary: string;
+	subject: 'line' | 'motion' | 'release' | 'materials' | 'studies' | 'budgets';
+	inputs: Parameters;
+	outputs: Parameters;
+	/** The published methods, laws and standards behind it. */
+	sources: readonly string[];
+	/** Under which conditions the result holds: frame, idealisations, range. */
+	validity: string;
+	leftOut: readonly string[];
+	/** What it refuses, so that a caller can know beforehand. */
+	refuses: readonly string[];
+	/** What must stand beside a result that could hurt somebody; empty where there is nothing. */
+	caution: string;
+};
+
+export type Method<I extends Parameters = Parameters, O extends Parameters = Parameters> = Omit<
+	Description,
+	'inputs' | 'outputs'
+> & {
+	inputs: I;
+	outputs: O;
+	/** @throws Refused */
+	run(input: ValuesOf<I>): { outputs: ValuesOf<O>; warnings?: string[] };
+};
+
+export type AnyMethod = Description & {
+	run(input: never): { outputs: object; warnings?: string[] };
+};
+
+export type Answer<O = Record<string, unknown>> =
+	| { ok: true; method: string; engine: string; outputs: O; warnings: string[] }
+	| { ok: false; method: string; engine: string; refusal: Refusal };
+
+export const defineMethod = <const I extends Parameters, const O extends Parameters>(
+	method: Method<I, O>
+): Method<I, O> => method;
+
+/**
+ * Calls a method on what came in from outside: checks it, fills in defaults, and turns every reason for
+ * which there is no result into a typed refusal. Values are in SI, inputs and outputs alike.
+ */
+export function answer<M extends AnyMethod>(
+	method: M,
+	input: unknown
+): Answer<ReturnType<M['run']>['outputs']> {
+	const about = { method: method.name, engine: ENGINE_VERSION };
+	const refuse = (refusal: Refusal) => ({ ok: false as const, ...about, refusal });
+	const checked = checkInputs(method.inputs, input);
+	if (!checked.ok) {
+		const message = checked.faults.map((fault) => fault.message).join(' ');
+		return refuse({ code: 'input', message, remedy: '', faults: checked.faults });
+	}
+	try {
+		const { outputs, warnings = [] } = method.run(checked.values as never);
+		const lost = notFinite(outputs, '');
+		if (lost !== null)
+			return refuse({
+				code: 'not-converged',
+				message: `${method.title}: ${lost} did not come to a number for these inputs.`,
+				remedy: 'Look at the inputs for values far out of the ordinary.',
+				faults: []
+			});
+		return { ok: true, ...about, outputs, warnings };
+	} catch (error) {
+		if (error instanceof Refused) return refuse(error.refusal);
+		throw error;
+	}
+}
+
+/** The path of the first number that is none; null when all are. */
+function notFinite(value: unknown, path: string): string | null {
+	if (typeof value === 'number') return Number.isFinite(value) ? null : path;
+	if (typeof value !== 'object' || value === null) return null;
+	for (const [key, part] of Object.entries(value)) {
+		const lost = notFinite(part, path === '' ? key : `${path}.${key}`);
+		if (lost !== null) return lost;
+	}
+	return null;
+}
