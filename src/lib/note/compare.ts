@@ -2,7 +2,9 @@
 import { marginWords, outcomeWords } from '../components/note/figures';
 import { formatFigure } from '../engine/quantities/format';
 import type { ItemResult, Outcome } from '../engine/calc/results';
+import { withAdded } from './added';
 import type { Item, ItemOf } from './items';
+import type { Prose } from './prose';
 import { changedFields, readingMoved, readingsOf, type Side } from './readings';
 import { proseTokens } from './tokens';
 import { differenceOf } from './words';
@@ -13,6 +15,8 @@ export type ItemChange = {
 	words: string;
 	/** Outputs of a line model that moved, with what they were. */
 	outputs: Record<string, string>;
+	/** Of a text that has new words: the prose that was looked at, and the same with them marked. */
+	text?: { of: Prose; marked: Prose };
 };
 
 export type ChangesSince = {
@@ -99,7 +103,7 @@ export function itemChange(before: Entry, after: Entry): ItemChange | null {
 		return { ...change, outputs, words: typedWords(before.item, fields) || 'by its inputs' };
 	}
 	if (after.item.kind === 'text' && before.item.kind === 'text') {
-		return { ...change, words: textWords(before.item, after.item) };
+		return { ...change, ...textChange(before.item, after.item) };
 	}
 	if (after.item.kind === 'evidence' && before.item.kind === 'evidence' && fields.includes('files'))
 		return { ...change, words: fileWords(before.item, after.item) };
@@ -133,11 +137,12 @@ function typedWords(before: Item, fields: string[]): string {
 	return names.length > 2 ? `${names.length} fields` : names.join(', ');
 }
 
-function textWords(before: ItemOf<'text'>, after: ItemOf<'text'>): string {
-	const { wordsIn, wordsOut } = differenceOf(proseTokens(before.body), proseTokens(after.body));
+function textChange({ body: before }: ItemOf<'text'>, { body: of }: ItemOf<'text'>) {
+	const { wordsIn, wordsOut } = differenceOf(proseTokens(before), proseTokens(of));
 	const count = (n: number, word: string) => `${n} ${n === 1 ? 'word' : 'words'} ${word}`;
-	if (wordsIn > 0) return count(wordsIn, 'new');
-	return wordsOut > 0 ? count(wordsOut, 'out') : 'set otherwise';
+	if (wordsIn > 0)
+		return { words: count(wordsIn, 'new'), text: { of, marked: withAdded(before, of) } };
+	return { words: wordsOut > 0 ? count(wordsOut, 'out') : 'set otherwise' };
 }
 
 function fileWords(before: ItemOf<'evidence'>, after: ItemOf<'evidence'>): string {

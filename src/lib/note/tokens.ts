@@ -13,8 +13,11 @@ export type Token = {
 // A word keeps what joins its letters and digits: 1.059, CL-DN-004, loom’s.
 const PIECE = /[\p{L}\p{M}\p{N}_]+(?:[.,'’‑-][\p{L}\p{M}\p{N}_]+)*|[^\s\p{L}\p{M}\p{N}_]/gu;
 
+/** The words and signs of a text, with where they stand. */
+export const pieces = (text: string) => text.matchAll(PIECE);
+
 export function textTokens(text: string): Token[] {
-	return [...text.matchAll(PIECE)].map(({ 0: piece, index }) => ({
+	return [...pieces(text)].map(({ 0: piece, index }) => ({
 		kind: /^[\p{L}\p{N}_]/u.test(piece) ? 'word' : 'sign',
 		text: piece,
 		spaced: /^\s/.test(text.slice(index + piece.length, index + piece.length + 1))

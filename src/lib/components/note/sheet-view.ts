@@ -1,6 +1,7 @@
 /** What a row may ask of the sheet that it stands on; the live note and a frozen one both answer. */
 import type { ItemResult } from '$lib/engine/calc/results';
 import type { Item, NoteContent } from '$lib/note/items';
+import type { Prose } from '$lib/note/prose';
 import { numberItems } from '$lib/note/numbering';
 
 export type SheetView = {
@@ -20,6 +21,8 @@ export type Was = {
 	words: string;
 	/** What outputs of a line model were, by their name. */
 	outputs?: Record<string, string>;
+	/** The text with its new words marked, and the prose that it stands for. */
+	text?: { of: Prose; marked: Prose };
 };
 
 /** A sheet that does not change: a baseline. */

@@ -114,8 +114,8 @@ export class NoteSurroundings {
 	wasOf(id: string): Was | null {
 		const change = this.changes?.get(id);
 		if (!change || !this.baseline) return null;
-		const { words, outputs } = change;
-		return { letter: this.baseline.revision, words, outputs };
+		const { words, outputs, text } = change;
+		return { letter: this.baseline.revision, words, outputs, text };
 	}
 
 	refetchRemarks(): void {
