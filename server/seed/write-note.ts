@@ -4,8 +4,8 @@
  */
 import { createReadStream } from 'node:fs';
 import { eq } from 'drizzle-orm';
-import type * as Y from 'yjs';
-import { addItem, itemsMap, textField } from '$lib/note/document';
+import * as Y from 'yjs';
+import { addItem, itemsMap, proseField, textField } from '$lib/note/document';
 import type { Note, Programme } from '$lib/server/auth/guard';
 import { freeze } from '$lib/server/baselines/freeze';
 import { db } from '$lib/server/db';
@@ -48,6 +48,8 @@ export async function writeNote(job: Job): Promise<void> {
 		await write(by, (doc) => void addItem(doc, item, { after }));
 	for (const { by, item, field, value } of demo.edits)
 		await write(by, (doc) => retype(doc, item, field, value));
+	for (const { by, item, words } of demo.sentences ?? [])
+		await write(by, (doc) => addSentence(doc, item, words));
 	for (const { by, item, name } of demo.files) {
 		const file = await storeEvidence({
 			noteId: id,
@@ -69,6 +71,12 @@ function retype(doc: Y.Doc, item: string, field: string, value: string): void {
 	const text = textField(doc, item, field)!;
 	text.delete(0, text.length);
 	text.insert(0, value);
+}
+
+function addSentence(doc: Y.Doc, item: string, words: string): void {
+	const prose = proseField(doc, item)!;
+	const lastParagraph = prose.get(prose.length - 1) as Y.XmlElement;
+	lastParagraph.push([new Y.XmlText(words)]);
 }
 
 function attach(doc: Y.Doc, item: string, file: { fileId: string }): void {

@@ -69,6 +69,15 @@ test('a note is refused at the gate, cleared, waived, frozen, verified and compa
 	await top.press('Enter');
 	await expect(row(abara, 'cl4-top')).toContainText(/88.000/);
 	await expect(abara.getByRole('button', { name: /changed/ })).toBeVisible();
+	const why = row(abara, 'cl4-why');
+	await expect(why.locator('ins')).toHaveCount(0);
+	await why.focus();
+	await abara.keyboard.press('Enter');
+	await why.getByRole('textbox').press('Control+End');
+	await abara.keyboard.type(' Checked once more.');
+	await abara.keyboard.press('Control+Enter');
+	await expect(why).toContainText('3 words new');
+	await expect(why.locator('ins')).toHaveText('Checked once more.');
 	await expect(saved(abara)).toContainText('Saved');
 
 	await abara.goto(`${NOTE}/compare?from=B&to=now`);

@@ -132,6 +132,13 @@ const sizing: DemoNote = {
 		{ by: 'nwosu', item: 'cl4-eta', field: 'uncertainty', value: '0.008' },
 		{ by: 'nwosu', item: 'cl4-eta', field: 'source', value: 'Evidence 5.1, n = 30' }
 	],
+	sentences: [
+		{
+			by: 'nwosu',
+			item: 'cl4-why',
+			words: ' Joints count as a reduced allowable of their own since batch 7 was tested.'
+		}
+	],
 	additions: [
 		{
 			by: 'nwosu',

@@ -24,6 +24,8 @@ export type DemoNote = {
 	frozen: false | { waivers: { itemId: string; reason: string }[] };
 	/** What has been edited since. */
 	edits: LaterEdit[];
+	/** Words added since at the end of a text. */
+	sentences?: { by: string; item: string; words: string }[];
 	/** Items written since, each below another. */
 	additions: { by: string; after: string; item: Item }[];
 	remarks: DemoRemark[];
