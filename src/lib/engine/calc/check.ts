@@ -3,6 +3,7 @@ import { equal, inWords, isPure } from '../quantities/dimension';
 import { fromSi, parseUnit } from '../quantities/units';
 import { conditionTex } from './condition-tex';
 import { fault } from './faults';
+import type { Refreshed } from './entry';
 import type { Formula, FormulaOutcome } from './formula';
 import type { ValueType } from './infer';
 import type { CheckItem } from './items';
@@ -19,16 +20,40 @@ type Figures = { left: Value; right: Value; tolerance: Value | null; required: V
 /** Equal to twelve digits is equal: exp and log differ in the last one between platforms. */
 const TWELVE_DIGITS = 1e-12;
 
-export function evaluateCheck(
-	item: CheckItem,
+/** Finds the figure of each part that the check reads. */
+export function evaluateParts(
+	{ relation }: CheckItem,
 	formulas: CheckFormulas,
-	scope: Scope,
-	thinLimit: number
-): Body {
-	const left = formulas.left.evaluate(scope);
-	const right = formulas.right.evaluate(scope);
-	const tolerance = item.relation === 'within' ? formulas.tolerance.evaluate(scope) : null;
-	const required = formulas.required.blank ? null : formulas.required.evaluate(scope);
+	scope: Scope
+): void {
+	for (const name of partsRead(relation)) formulas[name].evaluate(scope);
+}
+
+/** The same where the names stand as they stood; null where that does not do. */
+export function refreshParts({ relation }: CheckItem, formulas: CheckFormulas): Refreshed | null {
+	let moved: Refreshed = 'stayed';
+	for (const name of partsRead(relation)) {
+		const { blank, outcome } = formulas[name];
+		if (blank) continue;
+		const before = outcome.state === 'value' ? outcome.si : null;
+		const now = formulas[name].refresh();
+		if (now === null) return null;
+		if (now !== before) moved = 'moved';
+	}
+	return moved;
+}
+
+const partsRead = (relation: CheckItem['relation']): (keyof CheckFormulas)[] =>
+	relation === 'within'
+		? ['left', 'right', 'tolerance', 'required']
+		: ['left', 'right', 'required'];
+
+/** What the check says, from its parts as they were evaluated last. */
+export function decideCheck(item: CheckItem, formulas: CheckFormulas, thinLimit: number): Body {
+	const left = formulas.left.outcome;
+	const right = formulas.right.outcome;
+	const tolerance = item.relation === 'within' ? formulas.tolerance.outcome : null;
+	const required = formulas.required.blank ? null : formulas.required.outcome;
 	const waiting: Body = {
 		state: 'waits',
 		left: alone(left),

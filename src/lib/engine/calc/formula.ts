@@ -8,10 +8,9 @@ import { ambiguousName, modelName, unknownName } from './name-refusals';
 import { parse, type Parsed } from './parse';
 import { asTex } from './print';
 import type { Fault } from './results';
-import type { Scope, Supply } from './scope';
+import type { Scope } from './scope';
+import { sameManner, type Manner, type Slot } from './slot';
 import { leaves, type Expr } from './tree';
-
-type ValueSupply = Supply & { state: 'value' };
 
 export type FormulaOutcome =
 	| { state: 'value'; si: number; type: ValueType; unit: string | null; digits: number | null }
@@ -25,13 +24,15 @@ export class Formula {
 	/** Every name that others may define: symbols, and units that must not be symbols. */
 	readonly mentions: readonly string[];
 	readonly names: readonly string[];
+	/** What it came to when it was evaluated or refreshed last. */
+	outcome: FormulaOutcome = { state: 'blank' };
 	private parsed: Parsed | null = null;
 	private fault: Fault | null = null;
 	private program: Program | null = null;
-	/** What stands behind the names, and for which of it the type below was found. */
-	private inputs: ValueSupply[] = [];
+	/** What stands behind the names, their figures, and the manners for which the type below was found. */
+	private inputs: Slot[] = [];
 	private values: number[] = [];
-	private inferredFor: ValueSupply[] = [];
+	private inferredFor: Manner[] = [];
 	private type: ValueType | Refusal | null = null;
 	private unit: string | null = null;
 	private digits: number | null = null;
@@ -65,7 +66,28 @@ export class Formula {
 		return kind === 'number' || kind === 'literal';
 	}
 
+	/** Looks every name up, checks dimensions where they may have changed, and finds the figure or why there is none. */
 	evaluate(scope: Scope): FormulaOutcome {
+		this.outcome = this.evaluated(scope);
+		return this.outcome;
+	}
+
+	/**
+	 * The figure anew where the names stand for what they stood for, in the same manner. Null where that
+	 * does not do, and `evaluate` has to tell.
+	 */
+	refresh(): number | null {
+		const { outcome, inputs, values } = this;
+		if (outcome.state !== 'value') return null;
+		for (let i = 0; i < inputs.length; i += 1) values[i] = inputs[i]!.si;
+		try {
+			return (outcome.si = figure(this.program!(values)));
+		} catch {
+			return null;
+		}
+	}
+
+	private evaluated(scope: Scope): FormulaOutcome {
 		if (this.blank) return { state: 'blank' };
 		if (!this.parsed) return { state: 'fault', faults: [this.fault!] };
 		const { expr, unitNames } = this.parsed;
@@ -74,48 +96,44 @@ export class Formula {
 		for (let i = 0; i < this.names.length; i += 1) {
 			const supply = scope.supply(this.names[i]!);
 			if (typeof supply === 'string') return this.objections(scope);
-			if (supply.state === 'missing') missing = true;
-			else {
-				this.inputs[i] = supply;
-				this.values[i] = supply.si;
-			}
+			missing ||= !supply.manner;
+			this.inputs[i] = supply;
+			this.values[i] = supply.si;
 		}
-		if (missing) return this.waits(scope);
+		if (missing) return this.waits();
 		try {
 			const type = this.typed(expr);
 			this.program ??= compile(expr, this.names);
-			const si = this.program(this.values);
+			const si = figure(this.program(this.values));
 			return { state: 'value', si, type, unit: this.unit, digits: this.digits };
 		} catch (error) {
 			return { state: 'fault', faults: [asFault(error, this.field)] };
 		}
 	}
 
-	private waits(scope: Scope): FormulaOutcome {
-		const missing = this.names.flatMap((name) => {
-			const supply = scope.supply(name) as Supply;
-			return supply.state === 'missing' ? [{ name, roots: supply.roots }] : [];
-		});
-		return {
-			state: 'waits',
-			for: missing.map(({ name }) => name),
-			rootIds: [...new Set(missing.flatMap(({ roots }) => roots))]
-		};
+	private waits(): FormulaOutcome {
+		const lacking = (_: unknown, i: number) => !this.inputs[i]!.manner;
+		const roots = this.inputs.filter(lacking).flatMap(({ roots }) => roots);
+		return { state: 'waits', for: this.names.filter(lacking), rootIds: [...new Set(roots)] };
 	}
 
 	/** The dimension and the way of showing, found anew only when those of something named have changed. */
 	private typed(expr: Expr): ValueType {
-		if (!this.type || !this.inputs.every((input, i) => sameManner(input, this.inferredFor[i]))) {
-			this.inferredFor = [...this.inputs];
-			this.type = inferred(expr, (name) => this.input(name).type);
+		const known = (input: Slot, i: number) => {
+			const manner = this.inferredFor[i];
+			return manner !== undefined && sameManner(input.manner!, manner);
+		};
+		if (!this.type || !this.inputs.every(known)) {
+			this.inferredFor = this.inputs.map(({ manner }) => manner!);
+			this.type = inferred(expr, (name) => this.manner(name).type);
 			if (!(this.type instanceof Refusal)) this.findManner(expr, this.type);
 		}
 		if (this.type instanceof Refusal) throw this.type;
 		return this.type;
 	}
 
-	private input(name: string): ValueSupply {
-		return this.inputs[this.names.indexOf(name)]!;
+	private manner(name: string): Manner {
+		return this.inferredFor[this.names.indexOf(name)]!;
 	}
 
 	/** The unit of the first thing named that has the dimension of the whole; digits where it is the whole. */
@@ -123,11 +141,11 @@ export class Formula {
 		const own = (leaf: Expr) => {
 			if (leaf.kind === 'number') return { unit: null, digits: significant(String(leaf.value)) };
 			if (leaf.kind === 'literal') return { unit: leaf.unit.text, digits: leaf.digits };
-			return leaf.kind === 'name' ? this.input(leaf.name) : null;
+			return leaf.kind === 'name' ? this.manner(leaf.name) : null;
 		};
 		const alike = (leaf: Expr) => {
 			if (leaf.kind === 'literal') return equal(leaf.unit.dimension, type.dimension);
-			return leaf.kind === 'name' && equal(this.input(leaf.name).type.dimension, type.dimension);
+			return leaf.kind === 'name' && equal(this.manner(leaf.name).type.dimension, type.dimension);
 		};
 		const whole = own(expr);
 		const first = isPure(type.dimension) ? undefined : [...leaves(expr)].find(alike);
@@ -151,6 +169,9 @@ export class Formula {
 	}
 }
 
+/** Minus zero is zero: nothing told may hang on the sign of nothing. */
+const figure = (value: number) => value + 0;
+
 function inferred(expr: Expr, typeOf: (name: string) => ValueType): ValueType | Refusal {
 	try {
 		return inferValue(expr, typeOf);
@@ -159,15 +180,6 @@ function inferred(expr: Expr, typeOf: (name: string) => ValueType): ValueType | 
 		throw error;
 	}
 }
-
-/** Whether one input stands for another of the same dimension, shown alike. */
-const sameManner = (a: ValueSupply, b: ValueSupply | undefined) =>
-	a === b ||
-	(b !== undefined &&
-		a.unit === b.unit &&
-		a.digits === b.digits &&
-		a.type.scale === b.type.scale &&
-		equal(a.type.dimension, b.type.dimension));
 
 function asFault(error: unknown, field: string): Fault {
 	if (error instanceof Refusal) return error.in(field);

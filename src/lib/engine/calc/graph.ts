@@ -1,26 +1,23 @@
 /** Order of evaluation over what an edit reaches: strongly connected components (Tarjan), suppliers first. */
-export function components(
-	ids: Iterable<string>,
-	suppliers: (id: string) => readonly string[]
-): string[][] {
-	const wanted = new Set(ids);
-	const index = new Map<string, number>();
-	const low = new Map<string, number>();
-	const stack: string[] = [];
-	const stacked = new Set<string>();
-	const found: string[][] = [];
+export function components<T>(nodes: Iterable<T>, suppliers: (node: T) => readonly T[]): T[][] {
+	const wanted = new Set(nodes);
+	const index = new Map<T, number>();
+	const low = new Map<T, number>();
+	const stack: T[] = [];
+	const stacked = new Set<T>();
+	const found: T[][] = [];
 
 	// With a stack of its own: a chain of thousands of items must not exhaust the call stack.
-	type Frame = { id: string; next: readonly string[]; at: number };
+	type Frame = { node: T; next: readonly T[]; at: number };
 	const frames: Frame[] = [];
-	const enter = (id: string) => {
-		index.set(id, index.size);
-		low.set(id, index.get(id)!);
-		stack.push(id);
-		stacked.add(id);
-		frames.push({ id, next: suppliers(id), at: 0 });
+	const enter = (node: T) => {
+		low.set(node, index.size);
+		index.set(node, index.size);
+		stack.push(node);
+		stacked.add(node);
+		frames.push({ node, next: suppliers(node), at: 0 });
 	};
-	const lower = (id: string, to: number) => low.set(id, Math.min(low.get(id)!, to));
+	const lower = (node: T, to: number) => low.set(node, Math.min(low.get(node)!, to));
 
 	for (const root of wanted) {
 		if (index.has(root)) continue;
@@ -31,16 +28,15 @@ export function components(
 			if (next !== undefined) {
 				if (!wanted.has(next)) continue;
 				if (!index.has(next)) enter(next);
-				else if (stacked.has(next)) lower(frame.id, index.get(next)!);
+				else if (stacked.has(next)) lower(frame.node, index.get(next)!);
 				continue;
 			}
 			frames.pop();
 			const above = frames.at(-1);
-			if (above) lower(above.id, low.get(frame.id)!);
-			if (low.get(frame.id) === index.get(frame.id)) {
-				const start = stack.lastIndexOf(frame.id);
-				const component = stack.splice(start);
-				component.forEach((id) => stacked.delete(id));
+			if (above) lower(above.node, low.get(frame.node)!);
+			if (low.get(frame.node) === index.get(frame.node)) {
+				const component = stack.splice(stack.lastIndexOf(frame.node));
+				component.forEach((node) => stacked.delete(node));
 				found.push(component);
 			}
 		}
@@ -48,19 +44,19 @@ export function components(
 	return found;
 }
 
-/** The shortest way from an item back to itself along its suppliers; each step is the item reached. */
-export function wayRound(start: string, suppliers: (id: string) => readonly string[]): string[] {
-	const cameFrom = new Map<string, string>();
+/** The shortest way from a node back to itself along its suppliers; each step is the node reached. */
+export function wayRound<T>(start: T, suppliers: (node: T) => readonly T[]): T[] {
+	const cameFrom = new Map<T, T>();
 	const queue = [start];
-	for (const id of queue) {
-		for (const next of suppliers(id)) {
+	for (const node of queue) {
+		for (const next of suppliers(node)) {
 			if (next === start) {
 				const way = [start];
-				for (let back = id; back !== start; back = cameFrom.get(back)!) way.unshift(back);
+				for (let back = node; back !== start; back = cameFrom.get(back)!) way.unshift(back);
 				return way;
 			}
 			if (cameFrom.has(next)) continue;
-			cameFrom.set(next, id);
+			cameFrom.set(next, node);
 			queue.push(next);
 		}
 	}
@@ -68,11 +64,8 @@ export function wayRound(start: string, suppliers: (id: string) => readonly stri
 }
 
 /** Everything downstream of the seeds, the seeds included. */
-export function reach(
-	seeds: Iterable<string>,
-	users: (id: string) => readonly string[]
-): Set<string> {
+export function reach<T>(seeds: Iterable<T>, users: (node: T) => readonly T[]): Set<T> {
 	const reached = new Set(seeds);
-	for (const id of reached) for (const user of users(id)) reached.add(user);
+	for (const node of reached) for (const user of users(node)) reached.add(user);
 	return reached;
 }

@@ -1,55 +1,71 @@
-/** Who names whom: names with the items that define and mention them, and from it each item's neighbours. */
+/** Who names whom: names with the nodes that define and mention them, and from it each node's neighbours. */
 
 export type Linked = {
 	/** Names that others may use. */
-	defines: readonly string[];
-	/** Names whose definition bears on the item, in order of mention. */
-	mentions: readonly string[];
+	readonly defines: readonly string[];
+	/** Names whose definition bears on the node, in order of mention. */
+	readonly mentions: readonly string[];
 };
+
+type Node = { readonly id: string; /** In sheet order. */ place: number };
 
 const NOTHING: Linked = { defines: [], mentions: [] };
 
-export class Links {
-	private entries = new Map<string, Linked>();
-	private definersByName = new Index();
-	private mentionersByName = new Index();
+export class Links<T extends Node> {
+	/** Counts up whenever a link or the order changes. */
+	version = 0;
+	private linked = new Map<T, Linked>();
+	private definersByName = new Index<T>();
+	private mentionersByName = new Index<T>();
 	private place = new Map<string, number>();
 	/** Neighbours found so far; emptied when a link or the order changes. */
 	private found = {
-		suppliers: new Map<string, readonly string[]>(),
-		users: new Map<string, readonly string[]>(),
-		uses: new Map<string, string[]>(),
-		usedIn: new Map<string, string[]>()
+		suppliers: new Map<T, readonly T[]>(),
+		users: new Map<T, readonly T[]>(),
+		uses: new Map<T, string[]>(),
+		usedIn: new Map<T, string[]>()
 	};
 
-	/** Links an item anew (null: it is gone); returns the names that other items define now than before. */
-	relink(id: string, entry: Linked | null): string[] {
-		const before = this.entries.get(id) ?? NOTHING;
-		const now = entry ?? NOTHING;
-		if (entry) this.entries.set(id, entry);
-		else this.entries.delete(id);
-		const sameNames = alike(before.defines, now.defines);
-		if (sameNames && alike(before.mentions, now.mentions)) return [];
-		for (const name of before.defines) this.definersByName.remove(name, id);
-		for (const name of before.mentions) this.mentionersByName.remove(name, id);
-		for (const name of now.defines) this.definersByName.add(name, id);
-		for (const name of now.mentions) this.mentionersByName.add(name, id);
-		this.forget();
-		if (sameNames) return [];
-		const kept = before.defines.filter((name) => now.defines.includes(name));
-		return [...before.defines, ...now.defines].filter((name) => !kept.includes(name));
+	/** The node and those whose neighbours change when it is linked so (null: not at all); none where all links stay. */
+	touchedBy(node: T, now: Linked | null): T[] {
+		const before = this.linked.get(node) ?? NOTHING;
+		const after = now ?? NOTHING;
+		if (sameLinks(before, after)) return [];
+		const found = [node, ...this.suppliers(node), ...this.users(node)];
+		for (const name of after.mentions) found.push(...this.definers(name));
+		for (const name of after.defines) found.push(...this.mentioners(name));
+		return found;
 	}
 
-	arrange(order: readonly string[]): void {
+	/** Links a node anew (null: it is gone); returns the names that other nodes define now than before. */
+	relink(node: T, now: Linked | null): string[] {
+		const before = this.linked.get(node) ?? NOTHING;
+		const after = now ?? NOTHING;
+		if (now && before === NOTHING) node.place = this.place.get(node.id) ?? Infinity;
+		if (now) this.linked.set(node, now);
+		else this.linked.delete(node);
+		if (sameLinks(before, after)) return [];
+		for (const name of before.defines) this.definersByName.remove(name, node);
+		for (const name of before.mentions) this.mentionersByName.remove(name, node);
+		for (const name of after.defines) this.definersByName.add(name, node);
+		for (const name of after.mentions) this.mentionersByName.add(name, node);
+		this.forget();
+		if (alike(before.defines, after.defines)) return [];
+		const kept = before.defines.filter((name) => after.defines.includes(name));
+		return [...before.defines, ...after.defines].filter((name) => !kept.includes(name));
+	}
+
+	arrange(order: readonly string[], nodes: Iterable<T>): void {
 		this.place = new Map(order.map((id, i) => [id, i]));
+		for (const node of nodes) node.place = this.place.get(node.id) ?? Infinity;
 		this.forget();
 	}
 
-	definers(name: string): ReadonlySet<string> {
+	definers(name: string): ReadonlySet<T> {
 		return this.definersByName.of(name);
 	}
 
-	mentioners(name: string): ReadonlySet<string> {
+	mentioners(name: string): ReadonlySet<T> {
 		return this.mentionersByName.of(name);
 	}
 
@@ -57,76 +73,83 @@ export class Links {
 		return this.definersByName.names();
 	}
 
-	/** Items that this one names, in order of mention. */
-	suppliers = (id: string): readonly string[] =>
-		kept(this.found.suppliers, id, () => {
-			const { mentions } = this.entries.get(id) ?? NOTHING;
-			return unique(mentions.flatMap((name) => [...this.definers(name)].sort()));
+	/** Nodes that this one names, in order of mention. */
+	suppliers = (node: T): readonly T[] =>
+		kept(this.found.suppliers, node, () => {
+			const { mentions } = this.linked.get(node) ?? NOTHING;
+			return unique(mentions.flatMap((name) => [...this.definers(name)].sort(byId)));
 		});
 
-	/** Items that name this one. */
-	users = (id: string): readonly string[] =>
-		kept(this.found.users, id, () => {
-			const { defines } = this.entries.get(id) ?? NOTHING;
+	/** Nodes that name this one. */
+	users = (node: T): readonly T[] =>
+		kept(this.found.users, node, () => {
+			const { defines } = this.linked.get(node) ?? NOTHING;
 			return unique(defines.flatMap((name) => [...this.mentioners(name)]));
 		});
 
-	/** The same in sheet order. */
-	uses(id: string): string[] {
-		return kept(this.found.uses, id, () => this.inOrder(this.suppliers(id)));
+	/** Their ids in sheet order. */
+	uses(node: T): string[] {
+		return kept(this.found.uses, node, () => inOrder([...this.suppliers(node)]).map(idOf));
 	}
 
-	usedIn(id: string): string[] {
-		return kept(this.found.usedIn, id, () => this.inOrder(this.users(id)));
-	}
-
-	/** Ids that the order does not name come last. */
-	inOrder(ids: Iterable<string>): string[] {
-		const at = (id: string) => this.place.get(id) ?? Infinity;
-		return [...ids].sort((a, b) => (at(a) === at(b) ? (a < b ? -1 : 1) : at(a) - at(b)));
+	usedIn(node: T): string[] {
+		return kept(this.found.usedIn, node, () => inOrder([...this.users(node)]).map(idOf));
 	}
 
 	private forget() {
+		this.version += 1;
 		for (const cache of Object.values(this.found)) cache.clear();
 	}
 }
 
-const alike = (a: readonly string[], b: readonly string[]) =>
+/** Sorts nodes into sheet order; those that the order does not name come last, by id. */
+export function inOrder<T extends Node>(nodes: T[]): T[] {
+	return nodes.sort((a, b) => (a.place === b.place ? byId(a, b) : a.place - b.place));
+}
+
+const idOf = ({ id }: { id: string }) => id;
+export const byId = (a: { id: string }, b: { id: string }) =>
+	a.id < b.id ? -1 : a.id > b.id ? 1 : 0;
+
+const sameLinks = (a: Linked, b: Linked) =>
+	alike(a.defines, b.defines) && alike(a.mentions, b.mentions);
+
+export const alike = (a: readonly string[], b: readonly string[]) =>
 	a.length === b.length && a.every((name, i) => name === b[i]);
 
-const unique = (ids: string[]) => (ids.length > 1 ? [...new Set(ids)] : ids);
+const unique = <T>(nodes: T[]) => (nodes.length > 1 ? [...new Set(nodes)] : nodes);
 
-function kept<T>(cache: Map<string, T>, id: string, find: () => T): T {
-	let value = cache.get(id);
+function kept<T, Found>(cache: Map<T, Found>, node: T, find: () => Found): Found {
+	let value = cache.get(node);
 	if (value === undefined) {
 		value = find();
-		cache.set(id, value);
+		cache.set(node, value);
 	}
 	return value;
 }
 
-/** Ids by name. */
-class Index {
-	private ids = new Map<string, Set<string>>();
-	private static none: ReadonlySet<string> = new Set();
+/** Nodes by name. */
+class Index<T> {
+	private nodes = new Map<string, Set<T>>();
+	private none: ReadonlySet<T> = new Set();
 
-	of(name: string): ReadonlySet<string> {
-		return this.ids.get(name) ?? Index.none;
+	of(name: string): ReadonlySet<T> {
+		return this.nodes.get(name) ?? this.none;
 	}
 
-	add(name: string, id: string) {
-		const ids = this.ids.get(name);
-		if (ids) ids.add(id);
-		else this.ids.set(name, new Set([id]));
+	add(name: string, node: T) {
+		const nodes = this.nodes.get(name);
+		if (nodes) nodes.add(node);
+		else this.nodes.set(name, new Set([node]));
 	}
 
-	remove(name: string, id: string) {
-		const ids = this.ids.get(name);
-		ids?.delete(id);
-		if (ids?.size === 0) this.ids.delete(name);
+	remove(name: string, node: T) {
+		const nodes = this.nodes.get(name);
+		nodes?.delete(node);
+		if (nodes?.size === 0) this.nodes.delete(name);
 	}
 
 	names(): Iterable<string> {
-		return this.ids.keys();
+		return this.nodes.keys();
 	}
 }

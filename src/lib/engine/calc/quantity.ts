@@ -1,74 +1,100 @@
 /** From a plain SI figure to the quantity that is shown. */
 import { equal, inWords } from '../quantities/dimension';
 import { preferredUnit } from '../quantities/prefer';
-import { fromSi, parseUnit } from '../quantities/units';
+import { fromSi, parseUnit, type Unit } from '../quantities/units';
 import { LARGEST } from './compile';
-import { fault } from './faults';
+import { Refusal, fault } from './faults';
 import type { ValueType } from './infer';
 import type { Fault, Outcome, Quantity } from './results';
 
 export const DEFAULT_DIGITS = 4;
 
-type Manner = {
+type Wish = {
 	/** Unit that was chosen; empty lets it be found. */
 	unit: string;
 	/** Unit of something of the same kind that the value came from. */
 	hint?: string | null;
-	digits: number;
 };
 
-/** The value in the unit to show, or why it cannot be shown in it. */
-export function shown(si: number, type: ValueType, manner: Manner): Outcome {
-	const text = manner.unit.trim() || unitFor(si, type, manner.hint ?? null);
+/** The unit in which a figure is shown, and the sizes for which it stays that one: from ≤ |si| < below. */
+export type Showing = { text: string; unit: Unit; from: number; below: number };
+
+/** @throws Refusal where a value of this type cannot be shown so. */
+export function showing(si: number, type: ValueType, wish: Wish): Showing {
+	const chosen = wish.unit.trim();
+	const { text, from, below } = chosen
+		? { text: chosen, ...ANY_SIZE }
+		: unitFor(si, type, wish.hint ?? null);
 	const parsed = parseUnit(text);
-	if (!parsed.ok) return refused(unitFault('unknown-unit', parsed.message, parsed.remedy, text));
+	if (!parsed.ok) {
+		throw new Refusal('unknown-unit', parsed.message, { remedy: parsed.remedy, place: all(text) });
+	}
 	const { unit } = parsed;
 	if (!equal(unit.dimension, type.dimension)) {
 		const message =
 			`The value is ${inWords(type.dimension)}; ` +
 			`it cannot be shown in ${text}, which is ${inWords(unit.dimension)}.`;
-		return refused(unitFault('dimension', message, '', text));
+		throw new Refusal('dimension', message, { place: all(text) });
 	}
 	if (unit.offset !== 0 && type.scale === 'difference') {
 		const message = `The value is a difference of temperatures; it cannot be shown in ${text}, which has a zero of its own.`;
-		return refused(unitFault('dimension', message, 'Show it in K.', text));
+		throw new Refusal('dimension', message, { remedy: 'Show it in K.', place: all(text) });
 	}
+	return { text, unit, from, below };
+}
+
+/** @throws Refusal where the figure in that unit is too large to tell. */
+export function inUnit(si: number, { text, unit }: Showing): number {
 	const value = fromSi(si, unit);
-	if (!(Math.abs(value) <= LARGEST)) {
-		return refused(
-			fault('beyond-any-build', `In ${text} the value is beyond any build: above 1e300.`)
-		);
-	}
-	const quantity: Quantity = {
-		si,
-		dimension: type.dimension,
-		value,
-		unit: text,
-		uncertainty: null,
-		digits: manner.digits
-	};
-	return { state: 'value', quantity };
+	if (Math.abs(value) <= LARGEST) return value;
+	throw new Refusal('beyond-any-build', `In ${text} the value is beyond any build: above 1e300.`);
 }
 
-/** The hint as long as the value reads well in it. */
-function unitFor(si: number, type: ValueType, hint: string | null): string {
-	if (type.scale === 'point') return 'degC';
+/** The value in the unit to show, or why it cannot be shown in it. */
+export function shown(si: number, type: ValueType, manner: Wish & { digits: number }): Outcome {
+	try {
+		const how = showing(si, type, manner);
+		const quantity: Quantity = {
+			si,
+			dimension: type.dimension,
+			value: inUnit(si, how),
+			unit: how.text,
+			uncertainty: null,
+			digits: manner.digits
+		};
+		return { state: 'value', quantity };
+	} catch (error) {
+		if (error instanceof Refusal) return { state: 'fault', faults: [error.in('unit')] };
+		throw error;
+	}
+}
+
+const ANY_SIZE = { from: 0, below: Infinity };
+
+/** Sizes in the hinted unit that read well in it. */
+const LEAST = 1e-2;
+const MOST = 1e5;
+
+function unitFor(si: number, type: ValueType, hint: string | null): Omit<Showing, 'unit'> {
+	if (type.scale === 'point') return { text: 'degC', ...ANY_SIZE };
+	const size = Math.abs(si);
 	const parsed = hint ? parseUnit(hint) : null;
-	if (parsed?.ok && parsed.unit.offset === 0) {
-		const size = Math.abs(si / parsed.unit.factor);
-		if (size === 0 || (size >= 1e-2 && size < 1e5)) return hint!;
-	}
-	return preferredUnit(si, type.dimension);
+	if (!parsed?.ok || parsed.unit.offset !== 0) return preferredUnit(size, type.dimension);
+	// Bounds in SI, so that a figure which is computed anew is held against them without being converted.
+	const [least, most] = [LEAST * parsed.unit.factor, MOST * parsed.unit.factor];
+	if (size === 0) return { text: hint!, from: 0, below: Number.MIN_VALUE };
+	if (size >= least && size < most) return { text: hint!, from: least, below: most };
+	const preferred = preferredUnit(size, type.dimension);
+	return size < least
+		? {
+				...preferred,
+				from: Math.max(preferred.from, Number.MIN_VALUE),
+				below: Math.min(preferred.below, least)
+			}
+		: { ...preferred, from: Math.max(preferred.from, most) };
 }
 
-const refused = (reason: Fault): Outcome => ({ state: 'fault', faults: [reason] });
-
-const unitFault = (
-	code: 'unknown-unit' | 'dimension',
-	message: string,
-	remedy: string,
-	text: string
-) => fault(code, message, { remedy, span: { field: 'unit', from: 0, to: text.length } });
+const all = (text: string) => ({ from: 0, to: text.length });
 
 /** Significant digits as typed; empty means four. */
 export function parseDigits(text: string): number | Fault {

@@ -2,7 +2,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { SheetChange, SheetItem } from './items';
-import { lineModel } from './items.fixture';
+import { calculation, check, given, lineModel } from './items.fixture';
 import { createSheet } from './sheet';
 
 const IDS = ['i1', 'i2', 'i3', 'i4', 'i5', 'i6'];
@@ -96,12 +96,12 @@ const SECONDS = 60_000;
 
 describe('any sequence of edits', () => {
 	it(
-		'leaves the results that the items have when they come all at once',
+		'leaves the results that the items have when they come all at once, read in between or not',
 		() => {
 			fc.assert(
-				fc.property(fc.array(change, { maxLength: 8 }), (changes) => {
+				fc.property(fc.array(change, { maxLength: 8 }), fc.boolean(), (changes, read) => {
 					const live = createSheet();
-					changes.forEach((change) => live.apply(change));
+					changes.forEach((change) => live.apply(change)[read ? 'changed' : 'removed']);
 					const fresh = createSheet();
 					fresh.apply(after(changes));
 					expect(live.results()).toEqual(fresh.results());
@@ -113,7 +113,7 @@ describe('any sequence of edits', () => {
 	);
 
 	it(
-		'tells every change, so that whoever follows the answers has the results',
+		'tells every change and nothing else, so that whoever follows the answers has the results',
 		() => {
 			fc.assert(
 				fc.property(fc.array(change, { maxLength: 8 }), (changes) => {
@@ -122,9 +122,63 @@ describe('any sequence of edits', () => {
 					for (const change of changes) {
 						const { changed, removed } = live.apply(change);
 						removed.forEach((id) => followed.delete(id));
-						changed.forEach((result) => followed.set(result.id, result));
+						for (const result of changed) {
+							if (!change.remove?.includes(result.id))
+								expect(result).not.toEqual(followed.get(result.id));
+							followed.set(result.id, result);
+						}
 					}
 					expect(followed).toEqual(new Map(live.results().map((result) => [result.id, result])));
+				}),
+				{ numRuns: 150 }
+			);
+		},
+		SECONDS
+	);
+});
+
+describe('figures typed one after the other into the same given', () => {
+	const figure = fc
+		.tuple(fc.constantFrom(0, 1, -1, 9.5, 0.01, 1e5), fc.integer({ min: -9, max: 9 }))
+		.map(([digit, power]) => `${digit}e${power}`);
+	const shownIn = fc.constantFrom('', 'km', 'kg', 'mm');
+	const expression = (before: string) =>
+		fc.constantFrom(
+			before,
+			`${before} * 3`,
+			`${before} / (${before} - 9.5 m)`,
+			`sqrt(${before})`,
+			`1e300 * ${before}`,
+			`min(${before}, 1 km)`,
+			`${before} * 1 kN`,
+			`b + ${before}`
+		);
+	const chain = fc
+		.tuple(
+			...['a', 'b', 'c', 'd'].map(expression),
+			fc.array(shownIn, { minLength: 4, maxLength: 4 })
+		)
+		.map((made) => {
+			const units = made.at(-1) as string[];
+			return ['b', 'c', 'd', 'e'].map((symbol, i) =>
+				calculation(symbol, made[i] as string, units[i])
+			);
+		});
+
+	it(
+		'leave what each would alone, whatever units the figures ask for on the way',
+		() => {
+			fc.assert(
+				fc.property(chain, fc.array(figure, { minLength: 2, maxLength: 6 }), (items, figures) => {
+					const rest = [...items, check('e', 'le', 'c'), lineModel({ top: 'b' })];
+					const live = createSheet();
+					live.apply({ upsert: rest });
+					for (const value of figures) {
+						live.apply({ upsert: [given('a', value, 'm')] });
+						const fresh = createSheet();
+						fresh.apply({ upsert: [given('a', value, 'm'), ...rest] });
+						expect(live.results()).toEqual(fresh.results());
+					}
 				}),
 				{ numRuns: 150 }
 			);

@@ -2,31 +2,29 @@
  * The sheet: items, the graph of who names whom, and the result of each. An edit parses only what was
  * edited, evaluates only what it reaches and stops where a value stays as it was. The results depend on
  * the items alone, not on the order in which they came.
+ *
+ * Figures are found with the edit; results are built of them when they are read.
  */
 import { CONSTANTS } from '../quantities/constants';
-import { createEntry, type Body, type Entry } from './entry';
-import { fault } from './faults';
-import { components, reach, wayRound } from './graph';
+import type { Entry } from './entry';
+import { Held } from './held';
 import type { SheetChange } from './items';
-import { Links } from './links';
+import { Links, inOrder } from './links';
 import { nearest } from './near';
-import type { Fault, ItemResult, Outcome } from './results';
+import { objectionTo } from './objections';
+import { Plans } from './plan';
+import type { ItemResult, Outcome } from './results';
 import { same } from './same';
-import type { Scope, Supply } from './scope';
+import type { Scope } from './scope';
+import { Slot, type Move } from './slot';
 
 const DEFAULT_THIN_LIMIT = 0.1;
 
-type Held = {
-	entry: Entry;
-	body: Body | null;
-	supplies: ReadonlyMap<string, Supply>;
-	cyclic: boolean;
-	/** Its words name what lies near an unknown symbol, which any new symbol may change. */
-	asksNear: boolean;
-	result: ItemResult | null;
+export type SheetAnswer = {
+	/** Results that the edit changed, in sheet order; built when they are first read, before the next edit. */
+	readonly changed: ItemResult[];
+	readonly removed: string[];
 };
-
-export type SheetAnswer = { changed: ItemResult[]; removed: string[] };
 
 export interface Sheet {
 	/** Takes an edit and answers with the results that it changed. */
@@ -43,111 +41,140 @@ export function createSheet(): Sheet {
 
 class LiveSheet implements Sheet {
 	private held = new Map<string, Held>();
-	private links = new Links();
+	private links = new Links<Held>();
+	private plans = new Plans(this.links);
 	private thinLimit = DEFAULT_THIN_LIMIT;
+	/** Counts the edits. */
+	private edit = 0;
+	/** Items whose results this edit may have changed. */
+	private open: Held[] = [];
+	/** Items whose words name what lies near an unknown symbol, which any new symbol may change. */
+	private asking = new Set<Held>();
 	private askedNear = false;
 
 	apply(change: SheetChange): SheetAnswer {
+		this.edit += 1;
+		this.open = [];
 		const removed = (change.remove ?? []).filter((id) => this.held.has(id));
-		const upserted = (change.upsert ?? []).filter(
-			(item) => removed.includes(item.id) || !same(this.held.get(item.id)?.entry.item, item)
-		);
-		const edited = [...removed, ...upserted.map(({ id }) => id)];
-		const neighbours = edited.flatMap((id) => this.neighbours(id));
+		const seeds = new Set<Held>();
 		const redefined = new Set<string>();
-		const relink = (id: string, entry: Entry | null) =>
-			this.links.relink(id, entry).forEach((name) => redefined.add(name));
-
+		const relink = (held: Held, entry: Entry | null) => {
+			for (const node of this.links.touchedBy(held, entry)) this.touch(node, 'links');
+			for (const name of this.links.relink(held, entry)) redefined.add(name);
+		};
 		for (const id of removed) {
+			const held = this.held.get(id)!;
+			relink(held, null);
 			this.held.delete(id);
-			relink(id, null);
+			this.asking.delete(held);
+			held.gone = true;
 		}
-		for (const item of upserted) {
-			const entry = createEntry(item);
-			this.held.set(item.id, { ...(this.held.get(item.id) ?? UNEVALUATED), entry });
-			relink(item.id, entry);
+		for (const item of change.upsert ?? []) {
+			let held = this.held.get(item.id);
+			if (held && same(held.entry.item, item)) continue;
+			if (held) {
+				this.touch(held, 'all');
+				held.rewrite(item);
+			} else {
+				this.held.set(item.id, (held = new Held(item)));
+				this.reopen(held);
+			}
+			relink(held, held.entry);
+			seeds.add(held);
 		}
-		if (change.order) this.links.arrange(change.order);
-
-		const seeds = new Set(edited.filter((id) => this.held.has(id)));
-		for (const id of this.bornOn(redefined)) seeds.add(id);
+		if (change.order) {
+			for (const held of this.held.values()) this.touch(held, 'links');
+			this.links.arrange(change.order, this.held.values());
+		}
+		this.findBorneOn(redefined, seeds);
 		if (change.thinLimit !== undefined && change.thinLimit !== this.thinLimit) {
 			this.thinLimit = change.thinLimit;
-			for (const [id, { entry }] of this.held) if (entry.item.kind === 'check') seeds.add(id);
+			for (const held of this.held.values()) if (held.entry.item.kind === 'check') seeds.add(held);
 		}
-		const evaluated = this.evaluate(seeds);
-		for (const id of seeds) neighbours.push(...this.neighbours(id));
-		const relinked = change.order ? this.held.keys() : neighbours;
-		const told = removed.filter((id) => !this.held.has(id));
-		return { changed: this.answer(new Set([...evaluated, ...relinked])), removed: told };
+		if (seeds.size > 0) this.evaluate(seeds);
+		return this.answer(removed.filter((id) => !this.held.has(id)));
 	}
 
 	results(): ItemResult[] {
-		return this.links.inOrder(this.held.keys()).map((id) => this.held.get(id)!.result!);
+		return inOrder([...this.held.values()]).map((held) => held.read(this.links));
 	}
 
 	*symbols() {
-		for (const [id, { entry, body }] of this.held) {
-			if (entry.symbol === '' || !body) continue;
-			if (body.kind === 'lineModel') {
-				for (const { name, outcome } of body.outputs) {
-					yield { name: `${entry.symbol}.${name}`, id, outcome };
+		for (const held of this.held.values()) {
+			const { symbol } = held.entry;
+			if (symbol === '') continue;
+			const result = held.read(this.links);
+			if (result.kind === 'lineModel') {
+				for (const { name, outcome } of result.outputs) {
+					yield { name: `${symbol}.${name}`, id: held.id, outcome };
 				}
-			} else if (body.kind !== 'check') yield { name: entry.symbol, id, outcome: body.outcome };
-		}
-	}
-
-	/** Items on which it bears that other items define these names now than before. */
-	private bornOn(redefined: Set<string>): string[] {
-		if (redefined.size === 0) return [];
-		const named = [...redefined].flatMap((name) => [
-			...this.links.mentioners(name),
-			...this.links.definers(name)
-		]);
-		const near = [...this.held].filter(([, { asksNear }]) => asksNear).map(([id]) => id);
-		return [...named, ...near];
-	}
-
-	private evaluate(seeds: Set<string>): string[] {
-		const { suppliers, users } = this.links;
-		const moved = new Set<string>();
-		const evaluated: string[] = [];
-		for (const component of components(reach(seeds, users), suppliers)) {
-			const cyclic = component.length > 1 || suppliers(component[0]!).includes(component[0]!);
-			for (const id of component) {
-				const held = this.held.get(id)!;
-				const due =
-					cyclic || held.cyclic || seeds.has(id) || suppliers(id).some((other) => moved.has(other));
-				if (!due) continue;
-				evaluated.push(id);
-				if (this.evaluateOne(id, held, cyclic)) moved.add(id);
+			} else if (result.kind !== 'check') {
+				yield { name: symbol, id: held.id, outcome: result.outcome };
 			}
 		}
-		return evaluated;
 	}
 
-	/** Whether what others see of the item has changed. */
-	private evaluateOne(id: string, held: Held, cyclic: boolean): boolean {
+	/** Adds the items on which it bears that other items define these names now than before. */
+	private findBorneOn(redefined: Set<string>, seeds: Set<Held>): void {
+		if (redefined.size === 0) return;
+		for (const name of redefined) {
+			for (const held of this.links.mentioners(name)) seeds.add(held);
+			for (const held of this.links.definers(name)) seeds.add(held);
+		}
+		for (const held of this.asking) seeds.add(held);
+	}
+
+	private evaluate(seeds: ReadonlySet<Held>): void {
+		const { edit } = this;
+		for (const held of seeds) held.stirredBy = edit;
+		const { order, users } = this.plans.for(seeds);
+		for (const held of order) {
+			// Nothing in a cycle sees what stood there before it closed.
+			if (held.cyclic && !held.wasCyclic) for (const slot of held.slots) slot.lack([held.id]);
+		}
+		for (let i = 0; i < order.length; i += 1) {
+			const held = order[i]!;
+			const stirred = held.stirredBy === edit || held.cyclic || held.wasCyclic;
+			if (!stirred && held.dueBy !== edit) continue;
+			const refreshed = stirred ? null : held.entry.refresh(held.slots);
+			if (refreshed === 'stayed') continue;
+			const move = refreshed ? this.moved(held) : this.evaluateOne(held);
+			if (move === 'figure') for (const user of users[i]!) user.dueBy = edit;
+			else if (move === 'manner') for (const user of users[i]!) user.stirredBy = edit;
+		}
+	}
+
+	private moved(held: Held): Move {
+		held.movedBy = this.edit;
+		this.reopen(held);
+		held.spoil('all');
+		return 'figure';
+	}
+
+	private evaluateOne(held: Held): Move {
+		this.touch(held, 'all');
 		this.askedNear = false;
-		const objection = cyclic ? this.cycleFault(id) : this.doubleDefinition(id, held.entry);
-		const { body, supplies } = held.entry.evaluate(this.scope, this.thinLimit, objection);
-		const before = held.supplies;
-		held.body = body;
-		held.supplies = supplies;
-		held.cyclic = cyclic;
-		held.asksNear = this.askedNear;
-		return !sameSupplies(before, supplies);
+		const objection = objectionTo(held, this.links);
+		held.entry.evaluate(held.slots, this.scope, this.thinLimit, objection);
+		held.wasCyclic = held.cyclic;
+		if (this.askedNear) this.asking.add(held);
+		else this.asking.delete(held);
+		let furthest: Move = 'none';
+		for (const slot of held.slots) {
+			const move = slot.takeMove();
+			if (move === 'manner' || furthest === 'none') furthest = move;
+		}
+		return furthest;
 	}
 
 	private scope: Scope = {
 		supply: (name) => {
-			const ids = this.links.definers(name);
-			const [id] = ids;
-			if (id === undefined) return 'unknown';
-			if (ids.size > 1) return { state: 'missing', roots: [...ids].sort() };
-			const { entry, supplies } = this.held.get(id)!;
-			if (entry.item.kind === 'lineModel' && name === entry.symbol) return 'model';
-			return supplies.get(name) ?? { state: 'missing', roots: [id] };
+			const definers = this.links.definers(name);
+			const [held] = definers;
+			if (held === undefined) return 'unknown';
+			if (definers.size > 1) return lacking([...definers]);
+			const { item, symbol } = held.entry;
+			return item.kind === 'lineModel' && name === symbol ? 'model' : held.slotOf(name);
 		},
 		defines: (name) => this.links.definers(name).size > 0,
 		near: (name) => {
@@ -156,63 +183,49 @@ class LiveSheet implements Sheet {
 		}
 	};
 
-	private doubleDefinition(id: string, { symbol }: Entry): Fault | null {
-		const definers = this.links.definers(symbol);
-		if (symbol === '' || definers.size < 2) return null;
-		return fault('double-definition', `${symbol} is defined more than once in this note.`, {
-			remedy: 'Give one of them another symbol.',
-			span: { field: 'symbol', from: 0, to: symbol.length },
-			items: [...definers].filter((other) => other !== id).sort()
-		});
+	/** Keeps what the item said before this edit; then it may say something else. */
+	private touch(held: Held, what: 'all' | 'links'): void {
+		if (held.openedBy !== this.edit) {
+			held.before = held.read(this.links);
+			this.reopen(held);
+		}
+		held.spoil(what);
 	}
 
-	private cycleFault(id: string): Fault {
-		const way = wayRound(id, this.links.suppliers);
-		const steps = way.map((to, i) => this.nameUsed(way[i - 1] ?? id, to));
-		const own = steps.at(-1)!;
-		return fault('cycle', `${own} depends on itself: ${[own, ...steps].join(' → ')}.`, {
-			remedy: 'Break the circle at one of them.',
-			items: way.slice(0, -1)
-		});
+	private reopen(held: Held): void {
+		if (held.openedBy === this.edit) return;
+		held.openedBy = this.edit;
+		this.open.push(held);
 	}
 
-	/** The name by which one item mentions another. */
-	private nameUsed(from: string, to: string): string {
-		const { mentions } = this.held.get(from)!.entry;
-		return mentions.find((name) => this.links.definers(name).has(to))!;
+	private answer(removed: string[]): SheetAnswer {
+		const { open, edit } = this;
+		let changed: ItemResult[] | null = null;
+		const tell = () => (changed ??= this.tell(open, edit));
+		return {
+			removed,
+			get changed() {
+				return tell();
+			}
+		};
 	}
 
-	private neighbours(id: string): string[] {
-		return [id, ...this.links.suppliers(id), ...this.links.users(id)];
-	}
-
-	/** The results among these ids that are not what was last told, in sheet order. */
-	private answer(ids: Set<string>): ItemResult[] {
+	/** The results among those opened by an edit that are not what they were before it, in sheet order. */
+	private tell(open: Held[], edit: number): ItemResult[] {
 		const changed: ItemResult[] = [];
-		for (const id of this.links.inOrder(ids)) {
-			const held = this.held.get(id);
-			if (!held) continue;
-			const uses = this.links.uses(id);
-			const usedIn = this.links.usedIn(id);
-			const result = { ...held.body!, uses, usedIn } as ItemResult;
-			if (same(result, held.result)) continue;
-			held.result = result;
-			changed.push(result);
+		for (const held of inOrder(open)) {
+			if (held.gone) continue;
+			const result = held.read(this.links);
+			if (held.movedBy === edit || !same(result, held.before)) changed.push(result);
+			held.before = null;
 		}
 		return changed;
 	}
 }
 
-const UNEVALUATED: Omit<Held, 'entry'> = {
-	body: null,
-	supplies: new Map(),
-	cyclic: false,
-	asksNear: false,
-	result: null
-};
-
-function sameSupplies(a: ReadonlyMap<string, Supply>, b: ReadonlyMap<string, Supply>): boolean {
-	if (a.size !== b.size) return false;
-	for (const [name, supply] of b) if (!same(a.get(name), supply)) return false;
-	return true;
+/** What is defined more than once has no value. */
+function lacking(definers: Held[]): Slot {
+	const slot = new Slot('');
+	slot.lack(definers.map(({ id }) => id).sort());
+	return slot;
 }

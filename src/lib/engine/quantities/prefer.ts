@@ -78,13 +78,16 @@ const STEPS: [Dimension, Step[]][] = [
 	[dimension(0, 0, 0, 1), [[0, 'K']]]
 ];
 
-export function preferredUnit(si: number, d: Dimension): string {
-	if (isPure(d)) return '';
-	const steps = STEPS.find(([known]) => equal(known, d))?.[1];
-	if (!steps) return coherentUnit(d);
-	const size = Math.abs(si);
-	return steps.filter(([from]) => size >= from).at(-1)![1];
+/** The unit, and the sizes in SI for which it stays that one: from ≤ size < below. */
+export function preferredUnit(size: number, d: Dimension): Preferred {
+	const steps = isPure(d) ? undefined : STEPS.find(([known]) => equal(known, d))?.[1];
+	if (!steps) return { text: isPure(d) ? '' : coherentUnit(d), from: 0, below: Infinity };
+	const at = steps.filter(([from]) => size >= from).length - 1;
+	const [from, text] = steps[at]!;
+	return { text, from, below: steps[at + 1]?.[0] ?? Infinity };
 }
+
+export type Preferred = { text: string; from: number; below: number };
 
 const BASE = ['kg', 'm', 's', 'K', 'A', 'mol', 'cd'];
 

@@ -1,0 +1,107 @@
+/** A calculation in the sheet. */
+import { fromSi } from '../quantities/units';
+import { LARGEST } from './compile';
+import type { Entry, Refreshed, ResultLinks } from './entry';
+import { Refusal } from './faults';
+import { Formula } from './formula';
+import type { CalculationItem } from './items';
+import { inUnit, parseDigits, showing, type Showing } from './quantity';
+import type { Fault, Outcome, QuantityResult } from './results';
+import type { Scope } from './scope';
+import type { Slot } from './slot';
+import { readSymbol } from './symbol';
+import { symbolTex } from './tex';
+
+export class CalculationEntry implements Entry {
+	readonly symbol: string;
+	readonly symbolTex: string;
+	readonly defines: readonly string[];
+	readonly mentions: readonly string[];
+	readonly width = 1;
+	private trouble: Fault | null;
+	private formula: Formula;
+	private digits: number | Fault;
+	/** How the value is shown, or why there is none. */
+	private how: Showing | null = null;
+	private without: Outcome = { state: 'blank' };
+
+	constructor(readonly item: CalculationItem) {
+		({ symbol: this.symbol, trouble: this.trouble } = readSymbol(item.symbol));
+		this.symbolTex = this.symbol === '' ? '' : symbolTex(this.symbol);
+		this.formula = new Formula(item.expression, 'expression');
+		this.digits = parseDigits(item.digits);
+		this.defines = this.symbol === '' ? [] : [this.symbol];
+		this.mentions = [...new Set(this.formula.mentions)];
+	}
+
+	evaluate(slots: readonly Slot[], scope: Scope, _thinLimit: number, objection: Fault | null) {
+		const slot = slots[0]!;
+		const against = this.trouble ?? objection;
+		if (against) return this.lack(slot, { state: 'fault', faults: [against] });
+		const found = this.formula.evaluate(scope);
+		if (found.state !== 'value') return this.lack(slot, found);
+		const { digits } = this;
+		if (typeof digits !== 'number') return this.lack(slot, { state: 'fault', faults: [digits] });
+		const { si, type, unit: hint } = found;
+		try {
+			const how = showing(si, type, { unit: this.item.unit, hint });
+			inUnit(si, how);
+			this.how = how;
+			slot.give(si, { type, unit: how.text, digits });
+		} catch (error) {
+			if (!(error instanceof Refusal)) throw error;
+			this.lack(slot, { state: 'fault', faults: [error.in('unit')] });
+		}
+	}
+
+	private lack(slot: Slot, reason: Outcome): void {
+		this.how = null;
+		this.without = reason;
+		slot.lack(reason.state === 'waits' ? reason.rootIds : [this.item.id]);
+	}
+
+	refresh(slots: readonly Slot[]): Refreshed | null {
+		const { how, formula } = this;
+		const si = formula.refresh();
+		if (!how || si === null) return null;
+		const slot = slots[0]!;
+		if (si === slot.si) return 'stayed';
+		const size = Math.abs(si);
+		if (size < how.from || size >= how.below) return null;
+		if (Math.abs(fromSi(si, how.unit)) > LARGEST) return null;
+		slot.si = si;
+		return 'moved';
+	}
+
+	result(slots: readonly Slot[], { uses, usedIn }: ResultLinks): QuantityResult {
+		const { item, symbolTex, formula } = this;
+		return {
+			id: item.id,
+			kind: 'calculation',
+			symbol: item.symbol.trim(),
+			tex: formula.tex,
+			symbolTex,
+			outcome: this.outcome(slots[0]!),
+			uses,
+			usedIn
+		};
+	}
+
+	private outcome({ si, manner, uncertainty }: Slot): Outcome {
+		const { how } = this;
+		if (!how || !manner) return this.without;
+		const { unit, digits } = manner;
+		return {
+			state: 'value',
+			quantity: {
+				si,
+				// The unit's own, one for all who show in it: what crosses from a worker is copied but once.
+				dimension: how.unit.dimension,
+				value: fromSi(si, how.unit),
+				unit,
+				uncertainty: uncertainty && uncertainty / how.unit.factor,
+				digits
+			}
+		};
+	}
+}

@@ -1,0 +1,42 @@
+/** A check in the sheet. It defines nothing. */
+import { decideCheck, evaluateParts, refreshParts, type CheckFormulas } from './check';
+import type { Entry, Refreshed, ResultLinks } from './entry';
+import { Formula } from './formula';
+import type { CheckItem } from './items';
+import type { CheckResult } from './results';
+import type { Scope } from './scope';
+import type { Slot } from './slot';
+
+export class CheckEntry implements Entry {
+	readonly symbol = '';
+	readonly defines: readonly string[] = [];
+	readonly mentions: readonly string[];
+	readonly width = 0;
+	private formulas: CheckFormulas;
+	private thinLimit = 0;
+
+	constructor(readonly item: CheckItem) {
+		this.formulas = {
+			left: new Formula(item.left, 'left'),
+			right: new Formula(item.right, 'right'),
+			tolerance: new Formula(item.relation === 'within' ? item.tolerance : '', 'tolerance'),
+			required: new Formula(item.required, 'required')
+		};
+		const mentions = Object.values(this.formulas).flatMap(({ mentions }) => mentions);
+		this.mentions = [...new Set(mentions)];
+	}
+
+	evaluate(_slots: readonly Slot[], scope: Scope, thinLimit: number): void {
+		this.thinLimit = thinLimit;
+		evaluateParts(this.item, this.formulas, scope);
+	}
+
+	refresh(): Refreshed | null {
+		return refreshParts(this.item, this.formulas);
+	}
+
+	result(_slots: readonly Slot[], links: ResultLinks): CheckResult {
+		const { item, formulas, thinLimit } = this;
+		return { id: item.id, kind: 'check', ...decideCheck(item, formulas, thinLimit), ...links };
+	}
+}

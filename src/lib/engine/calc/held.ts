@@ -1,0 +1,64 @@
+/** An item where it stands in the sheet: what stands behind its names, and its result as last told. */
+import { createEntry, type Entry } from './entry';
+import type { SheetItem } from './items';
+import { alike, type Links } from './links';
+import type { ItemResult } from './results';
+import { Slot } from './slot';
+
+export class Held {
+	readonly id: string;
+	place = Infinity;
+	entry: Entry;
+	slots: Slot[];
+	/** Whether it stands in a cycle, and stood in one when it was evaluated last. */
+	cyclic = false;
+	wasCyclic = false;
+	/** The edit by which something that it names moved: its figure only, or more. */
+	dueBy = 0;
+	stirredBy = 0;
+	gone = false;
+	/** The edit that opened its result, which may say something else now than it said before (null: nothing). */
+	openedBy = 0;
+	before: ItemResult | null = null;
+	/** The edit that is known to have changed its result. */
+	movedBy = 0;
+	private result: ItemResult | null = null;
+	private linked = false;
+
+	constructor(item: SheetItem) {
+		this.id = item.id;
+		this.entry = createEntry(item);
+		this.slots = this.ownSlots();
+	}
+
+	/** The item as written anew. Formulas that hold on to the slots keep them where the names stay. */
+	rewrite(item: SheetItem): void {
+		const { defines, width } = this.entry;
+		this.entry = createEntry(item);
+		const now = this.entry;
+		if (now.width !== width || !alike(now.defines, defines)) this.slots = this.ownSlots();
+	}
+
+	slotOf(name: string): Slot {
+		return this.slots[this.entry.defines.indexOf(name)]!;
+	}
+
+	/** What was built of the result no longer holds, or only what it says of links. */
+	spoil(what: 'all' | 'links'): void {
+		if (what === 'all') this.result = null;
+		this.linked = false;
+	}
+
+	/** The result as plain data. */
+	read(links: Links<Held>): ItemResult {
+		if (this.result && this.linked) return this.result;
+		const found = { uses: links.uses(this), usedIn: links.usedIn(this) };
+		this.result = this.result ? { ...this.result, ...found } : this.entry.result(this.slots, found);
+		this.linked = true;
+		return this.result;
+	}
+
+	private ownSlots(): Slot[] {
+		return Array.from({ length: this.entry.width }, () => new Slot(this.id));
+	}
+}
