@@ -1,11 +1,12 @@
 /**
  * Constant-stress taper: A(r) = A₀ exp{ρ [U(r) − U(R)]/σ_d}, σ_d = allowable / factor of safety.
- * The counterweight m_c = σ_d A(r_t)/(−g(r_t)) holds the top at r_t > r_s. Exact section, one body; it does not
+ * The counterweight m_c = σ_d A(r_t)/(−g(r_t)) holds the top at r_t > r_s. Exact section, any field; it does not
  * cover a climber above r_s. ρ and A are as deployed, under load.
  *
  * Everything is reckoned in logarithms from the section at r_s, so that a taper of 1e400 is told by its
  * exponent and a taper of 1e33 loses no digits.
  */
+import { lnSum, told } from '../numerics/logarithm';
 import { integrate } from '../numerics/quadrature';
 import type { Told } from '../methods/parameter';
 import type { Field } from './field';
@@ -36,7 +37,7 @@ export type TaperResult = {
 	massAbove: Told;
 	counterweight: Told;
 	total: Told;
-	lift: Told;
+	lift: number;
 	/** m, anchor to top */
 	length: number;
 	synchronousRadius: number;
@@ -50,39 +51,38 @@ export function isAboveSynchronous(field: Field, top: number): boolean {
 }
 
 export function sizeTaper(field: Field, input: TaperInput): TaperResult {
-	const { density, designStress, reserve, top } = input;
-	const { base, balance: synchronous } = field;
-	const k = density / designStress;
-	const liftWeight = field.g(base) * (1 + reserve);
+	const { density, designStress, reserve, top, base } = input;
 	const baseArea = baseSection(field, input);
-	const lnTaper = k * field.rise(base, synchronous);
-	const lnArea = Math.log(baseArea) + lnTaper;
-	const lnTop = lnArea - k * field.rise(top, synchronous);
-	// Section over that at r_s: at most 1, so no panel overflows.
-	const shape = (r: number) => Math.exp(-k * field.rise(r, synchronous));
-	const lnScale = lnArea + Math.log(density);
-	const below = lnScale + lnLengthwise(shape, synchronous, base);
-	const above = lnScale + lnLengthwise(shape, synchronous, top);
-	const counterweight = lnTop + Math.log(designStress / -field.g(top));
+	const { lnTaper, lnPeak, lnArea, lnMass, lnCounterweight } = taperLogs(field, {
+		density,
+		designStress,
+		baseArea
+	});
+	const below = lnMass(field.balance, field.base);
+	const above = lnMass(field.balance, top);
 	const line = lnSum(below, above);
+	const counterweight = lnCounterweight(top);
 
 	return {
 		designStress,
 		taper: told(lnTaper),
 		baseArea,
-		synchronousArea: told(lnArea),
-		topArea: told(lnTop),
-		greatestTension: told(lnArea + Math.log(designStress)),
+		synchronousArea: told(lnPeak),
+		topArea: told(lnArea(top)),
+		greatestTension: told(lnPeak + Math.log(designStress)),
 		mass: told(line),
 		massBelow: told(below),
 		massAbove: told(above),
 		counterweight: told(counterweight),
 		total: told(lnSum(line, counterweight)),
-		lift: 'lift' in input.base ? input.base.lift : (designStress * baseArea) / liftWeight,
-		length: top - base,
-		synchronousRadius: synchronous,
+		lift:
+			'lift' in base
+				? base.lift
+				: (designStress * baseArea) / (field.g(field.base) * (1 + reserve)),
+		length: top - field.base,
+		synchronousRadius: field.balance,
 		uniformPeak: uniformPeakStress(field, density),
-		freeStandingHeight: freeStandingRadius(field) - base
+		freeStandingHeight: freeStandingRadius(field) - field.base
 	};
 }
 
@@ -92,24 +92,56 @@ export function baseSection(field: Field, { base, designStress, reserve }: Taper
 	return (base.lift * field.g(field.base) * (1 + reserve)) / designStress;
 }
 
-/**
- * ln ∫ shape dr between r_s and one end. Panels halve towards r_s, where the shape peaks however steep
- * the taper; with more than a few hundred decades of taper the rest of the line has no weight.
- */
-function lnLengthwise(shape: (r: number) => number, synchronous: number, end: number): number {
-	const edges = [synchronous];
-	for (let halvings = 40; halvings >= 0; halvings -= 1) {
-		edges.push(synchronous + (end - synchronous) / 2 ** halvings);
-	}
-	const { value } = integrate(shape, end < synchronous ? edges.reverse() : edges, 1e-12);
-	return Math.log(Math.max(value, Number.MIN_VALUE));
+export type TaperLogs = {
+	/** ln A(r_s)/A₀ */
+	lnTaper: number;
+	/** ln A(r_s), m² */
+	lnPeak: number;
+	/** ln A(r), m² */
+	lnArea: (r: number) => number;
+	/** ln of the mass, kg, between two radii on one side of r_s; `near` is the one nearer to it. */
+	lnMass: (near: number, far: number) => number;
+	/** ln m_c, kg, of a line that ends at `top` */
+	lnCounterweight: (top: number) => number;
+};
+
+/** The taper's figures by their logarithms. */
+export function taperLogs(
+	field: Field,
+	{ density, designStress, baseArea }: { density: number; designStress: number; baseArea: number }
+): TaperLogs {
+	const k = density / designStress;
+	const lnTaper = k * field.depth(field.base);
+	const lnPeak = Math.log(baseArea) + lnTaper;
+	const lnArea = (r: number) => lnPeak - k * field.depth(r);
+	return {
+		lnTaper,
+		lnPeak,
+		lnArea,
+		lnMass: (near, far) => Math.log(density) + lnArea(near) + Math.log(spread(field, k, near, far)),
+		lnCounterweight: (top) => lnArea(top) + Math.log(designStress / -field.g(top))
+	};
 }
 
-const lnSum = (a: number, b: number) => Math.max(a, b) + Math.log1p(Math.exp(-Math.abs(a - b)));
-
-const LARGEST_LN = 300 * Math.LN10;
-
-const told = (ln: number): Told => (ln <= LARGEST_LN ? Math.exp(ln) : { log10: ln / Math.LN10 });
+/**
+ * ∫ A(r)/A(near) dr, m, between two radii on one side of r_s. The section falls from `near` to `far`, so that
+ * nothing overflows; panels halve towards `near` until they are as narrow as the peak there.
+ */
+export function spread(field: Field, k: number, near: number, far: number): number {
+	const fall = near === field.balance ? field.depth : (r: number) => field.rise(r, near);
+	const length = Math.abs(far - near);
+	if (length === 0) return 0;
+	const width = 1 / (k * Math.abs(field.g(near)) + Math.sqrt(k * -field.along(near)));
+	const halvings = Math.max(1, Math.min(60, 2 + Math.ceil(Math.log2(length / width))));
+	const edges = [near];
+	for (let i = halvings; i >= 0; i -= 1) edges.push(near + (far - near) / 2 ** i);
+	const { value } = integrate(
+		(r) => Math.exp(-k * fall(r)),
+		far < near ? edges.reverse() : edges,
+		1e-11
+	);
+	return Math.max(value, Number.MIN_VALUE);
+}
 
 export type Profile = {
 	height: number[];
@@ -122,14 +154,14 @@ export type Profile = {
 /** The line at graded heights, finer near the base; r_s is among them. Null where a section cannot be told. */
 export function profileTaper(field: Field, input: TaperInput): Profile | null {
 	const { base, balance: synchronous } = field;
-	const { density, designStress, top } = input;
+	const { designStress, top, density } = input;
 	const baseArea = baseSection(field, input);
-	const k = density / designStress;
-	if (Math.log(baseArea) + k * field.rise(base, synchronous) > LARGEST_LN / 2) return null;
+	const { lnPeak, lnArea } = taperLogs(field, { density, designStress, baseArea });
+	if (typeof told(2 * lnPeak) !== 'number') return null;
 	const graded = (from: number, to: number, count: number) =>
 		Array.from({ length: count }, (_, i) => from * (to / from) ** (i / count));
 	const radii = [...graded(base, synchronous, 120), ...graded(synchronous, top, 80), top];
-	const area = radii.map((r) => baseArea * Math.exp(k * field.rise(base, r)));
+	const area = radii.map((r) => Math.exp(lnArea(r)));
 	return {
 		height: radii.map((r) => r - base),
 		area,

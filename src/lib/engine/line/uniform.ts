@@ -1,26 +1,31 @@
-/** A line of uniform section with nothing pulling at either end (METHODS: σ(r) = ρ [U(r) − U(R)]). */
+/**
+ * A line of uniform section in the co-rotating frame: σ(r) = σ₀ + ρ [U(r) − U(R)], greatest at r_s. With
+ * σ₀ at the anchor and nothing pulling at its upper end, that end lies above r_s, where σ is zero again.
+ */
 import type { Field } from './field';
+import { radiusAbove } from './level';
 
-/** Greatest stress, Pa, at the synchronous radius. */
-export function uniformPeakStress(field: Field, density: number): number {
-	return density * field.rise(field.base, field.balance);
+/** Greatest stress, Pa, at the balance radius; σ₀ is the stress at the anchor. */
+export function uniformPeakStress(field: Field, density: number, baseStress = 0): number {
+	return baseStress + density * field.depth(field.base);
 }
 
 /**
- * Radius at which the line ends, m: U(H) = U(R) beyond the synchronous radius. Without J2 this is
- * (R/2)[√(1 + 8(r_s/R)³) − 1], which is where the bisection starts from; it ends at the last digit.
+ * Radius of the upper end, m, where σ is zero: U(H) = U(R) − σ₀/ρ beyond r_s. One body without J2 and
+ * σ₀ = 0 has H = (R/2)[√(1 + 8(r_s/R)³) − 1].
  */
-export function freeStandingRadius(field: Field): number {
-	const { base, balance: synchronous, rise } = field;
-	const closed = (base / 2) * (Math.sqrt(1 + 8 * (synchronous / base) ** 3) - 1);
-	let low = Math.max(synchronous, closed * (1 - 1e-2));
-	let high = closed * (1 + 1e-2);
-	for (let i = 0; i < 200 && high - low > closed * 1e-15; i += 1) {
-		const middle = (low + high) / 2;
-		if (rise(base, middle) > 0) low = middle;
-		else high = middle;
-	}
-	return (low + high) / 2;
+export function freeStandingRadius(field: Field, specificBaseStress = 0): number {
+	return radiusAbove(field, field.depth(field.base) + specificBaseStress);
+}
+
+/** Stress, Pa, at radius r of a line with σ₀ at the anchor. */
+export function uniformStress(
+	field: Field,
+	density: number,
+	baseStress: number,
+	r: number
+): number {
+	return baseStress + density * field.rise(field.base, r);
 }
 
 /** Length of a uniform wire that breaks under its own weight at g₀, m. */

@@ -2,6 +2,8 @@
  * Adaptive Gauss–Kronrod quadrature (7, 15 points; nodes as in QUADPACK's qk15) over given panels.
  * Each panel is halved until its two rules agree, or the cap on evaluations is met.
  */
+import { Refused } from '../methods/refused';
+
 const NODES = [
 	0.9914553711208126, 0.9491079123427585, 0.8648644233597691, 0.7415311855993945,
 	0.5860872354676911, 0.4058451513773972, 0.20778495500789848, 0
@@ -21,13 +23,15 @@ export type Integral = {
 };
 
 /**
- * ∫ f from the first to the last of `edges`, which part it where the integrand turns.
- * @throws RangeError when the tolerance is not met within the cap.
+ * ∫ f from the first to the last of `edges`, which part it where the integrand turns. Differences of f below
+ * `noise` count as rounding.
+ * @throws Refused when the tolerance is not met within the cap.
  */
 export function integrate(
 	f: (x: number) => number,
 	edges: readonly number[],
-	relativeTolerance: number
+	relativeTolerance: number,
+	noise = 0
 ): Integral {
 	const open = edges.slice(1).map((to, i) => panel(f, edges[i]!, to));
 	let done: Integral = { value: 0, error: 0 };
@@ -36,13 +40,17 @@ export function integrate(
 	while (open.length > 0) {
 		const { from, to, value, error } = open.pop()!;
 		// A share of the whole tolerance, so that panels of no weight are not halved for nothing.
-		const enough = relativeTolerance * Math.max(Math.abs(value), scale / 50);
+		const enough = Math.max(
+			relativeTolerance * Math.max(Math.abs(value), scale / 50),
+			noise * (to - from)
+		);
 		if (error <= enough || to - from <= Math.abs(from) * 1e-14) {
 			done = { value: done.value + value, error: done.error + error };
 			continue;
 		}
 		count += 2;
-		if (count > MOST_PANELS) throw new RangeError('The integral did not converge.');
+		if (count > MOST_PANELS)
+			throw new Refused('The integral did not converge.', { code: 'not-converged' });
 		const middle = (from + to) / 2;
 		open.push(panel(f, from, middle), panel(f, middle, to));
 	}
