@@ -3,13 +3,13 @@
  * the counterweight at its top. ρ and A are as deployed, under load; radii are from the body's centre.
  */
 import { group, list, quantity, variant, type ValuesOf } from '../methods/parameter';
-import { refuseInput } from '../methods/refused';
+import { Refused, refuseInput } from '../methods/refused';
 import { AREA, DENSITY, LENGTH, MASS, PRESSURE } from '../quantities/dimension';
 import type { Field } from './field';
+import { constantPiece, linearPiece, taperPiece, type Piece } from './piece';
 import { fieldOf, site } from './site';
 
-/** A stretch [from, to] over which the section is smooth. */
-export type Piece = { from: number; to: number; area: (r: number) => number };
+export type { Piece };
 
 export type PointMass = { radius: number; mass: number };
 
@@ -145,15 +145,14 @@ function piecesOf(field: Field, { section, density }: LineInput): Piece[] {
 		case 'taper': {
 			const { baseArea, designStress, top } = section;
 			if (top <= field.base) refuseInput('section.top', 'The top lies below the anchor.');
-			const area = (r: number) =>
-				baseArea * Math.exp((density / designStress) * field.rise(field.base, r));
+			const shape = shapeOf(field, density / designStress, baseArea, top);
 			const edges = [field.base, ...(top > field.balance ? [field.balance] : []), top];
-			return edges.slice(1).map((to, i) => ({ from: edges[i]!, to, area }));
+			return edges.slice(1).map((to, i) => taperPiece(field, shape, edges[i]!, to));
 		}
 		case 'stepped': {
 			const radii = [section.baseRadius ?? field.base, ...section.sections.map(({ to }) => to)];
 			ascending(radii, (i) => `section.sections.${i - 1}.to`);
-			return section.sections.map(({ to, area }, i) => ({ from: radii[i]!, to, area: () => area }));
+			return section.sections.map(({ to, area }, i) => constantPiece(field, radii[i]!, to, area));
 		}
 		case 'table': {
 			const { rows } = section;
@@ -161,13 +160,27 @@ function piecesOf(field: Field, { section, density }: LineInput): Piece[] {
 				rows.map(({ radius }) => radius),
 				(i) => `section.rows.${i}.radius`
 			);
-			return rows.slice(1).map(({ radius: to, area }, i) => {
-				const { radius: from, area: start } = rows[i]!;
-				const slope = (area - start) / (to - from);
-				return { from, to, area: (r) => start + slope * (r - from) };
-			});
+			const points = rows.map(({ radius, area }) => [radius, area] as const);
+			return points.slice(1).map((point, i) => linearPiece(field, points[i]!, point));
 		}
 	}
+}
+
+/** @throws Refused where a section of the taper cannot be told as a number. */
+function shapeOf(field: Field, k: number, baseArea: number, top: number) {
+	const lnPeak = Math.log(baseArea) + k * field.depth(field.base);
+	const lnTop = lnPeak - k * field.depth(top);
+	const told = 300 * Math.LN10;
+	if (!(lnPeak < told))
+		throw new Refused('Beyond any build: the section at the balance radius is above 1e300 m².', {
+			code: 'beyond-any-build',
+			remedy: 'A stronger or lighter material, or another body, brings it down.'
+		});
+	if (!(lnTop > -told))
+		throw new Refused('The section at the top is below 1e-300 m²: no line is left there.', {
+			remedy: 'Set the top lower.'
+		});
+	return { k, peakArea: Math.exp(lnPeak) };
 }
 
 function ascending(radii: readonly number[], path: (i: number) => string): void {

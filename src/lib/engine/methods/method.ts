@@ -63,7 +63,7 @@ export function answer<M extends AnyMethod>(
 	}
 	try {
 		const { outputs, warnings = [] } = method.run(checked.values as never);
-		const lost = notFinite(outputs, '');
+		const lost = notFinite(outputs);
 		if (lost !== null)
 			return refuse({
 				code: 'not-converged',
@@ -78,13 +78,14 @@ export function answer<M extends AnyMethod>(
 	}
 }
 
-/** The path of the first number that is none; null when all are. */
-function notFinite(value: unknown, path: string): string | null {
-	if (typeof value === 'number') return Number.isFinite(value) ? null : path;
-	if (typeof value !== 'object' || value === null) return null;
-	for (const [key, part] of Object.entries(value)) {
-		const lost = notFinite(part, path === '' ? key : `${path}.${key}`);
-		if (lost !== null) return lost;
+/** The path of the first number that is none; null when all are. It is put together only when there is one. */
+function notFinite(outputs: object): string | null {
+	for (const key in outputs) {
+		const part = (outputs as Record<string, unknown>)[key];
+		if (typeof part === 'number' && !Number.isFinite(part)) return key;
+		if (typeof part !== 'object' || part === null) continue;
+		const lost = notFinite(part);
+		if (lost !== null) return `${key}.${lost}`;
 	}
 	return null;
 }
