@@ -1,12 +1,10 @@
 /** From the typed text to the closed tree. mathjs parses; only what is listed here gets through. */
-import { create, parseDependencies, type MathNode } from 'mathjs/number';
 import { CONSTANTS } from '../quantities/constants';
 import { Refusal, type Place } from './faults';
 import { functionNamed, isFunction } from './functions';
+import { parseStructure, type Node } from './grammar';
 import { DEEPEST, scan, type Leaf, type Scanned } from './scan';
 import type { Arithmetic, Comparison, Expr } from './tree';
-
-const { parse: parseStructure } = create(parseDependencies!);
 
 export type Parsed = {
 	expr: Expr;
@@ -37,9 +35,9 @@ function quantityName(leaf: Leaf): string[] {
 	return leaf.called && isFunction(leaf.name) ? [] : [leaf.name];
 }
 
-function structure(text: string, { source, origin }: Scanned): MathNode {
+function structure(text: string, { source, origin }: Scanned): Node {
 	try {
-		return parseStructure!(source);
+		return parseStructure(source);
 	} catch (error) {
 		if (error instanceof RangeError) throw tooDeep();
 		const { message, char } = error as { message: string; char?: number };
@@ -96,21 +94,6 @@ const COMPARISON: Record<string, Comparison> = {
 	unequal: '!='
 };
 
-/** The parts of mathjs's nodes that are read. */
-type Node = {
-	type: string;
-	value?: unknown;
-	name?: string;
-	fn?: string | Node;
-	args?: Node[];
-	content?: Node;
-	condition?: Node;
-	trueExpr?: Node;
-	falseExpr?: Node;
-	conditionals?: string[];
-	params?: Node[];
-};
-
 class Builder {
 	private count = 0;
 
@@ -119,8 +102,7 @@ class Builder {
 		private scanned: Scanned
 	) {}
 
-	build(given: unknown, depth: number): Expr {
-		const node = given as Node;
+	build(node: Node, depth: number): Expr {
 		this.count += 1;
 		if (depth > DEEPEST) throw tooDeep();
 		if (this.count > MOST_NODES) {
