@@ -248,6 +248,45 @@ test('another version of the engine is told, and is no fault where the figures a
 	});
 });
 
+test('a baseline of the first engine, which told no uncertainty of what follows, still holds', async () => {
+	const gate = await makeGate(team.programme.id);
+	const other = await writtenNote(team.programme.id, team.engineer, [
+		{ kind: 'given', id: 'g', symbol: 'rho', value: '1520', unit: 'kg/m^3', uncertainty: '20' },
+		{ kind: 'calculation', id: 'v', symbol: 'v', expression: '1/rho', unit: 'm^3/kg' }
+	]);
+	const input = { gateId: gate.id, revision: 'A', seenSeq: 1, waivers: [] };
+	id = await freeze({ note: other, programme: team.programme, person: team.lead, input });
+	const row = (await findBaseline(id))!;
+	// 20/1520², at twelve significant digits.
+	expect(row.results).toContain('"uncertainty":0.00000865650969529');
+	const older = {
+		head: row.head.replace('"engineVersion":"2"', '"engineVersion":"1"'),
+		content: row.content,
+		results: row.results.replace('0.00000865650969529', 'null'),
+		evidence: '[]',
+		waivers: '[]'
+	};
+	await tamper((admin) =>
+		admin.query(
+			`update baseline set head = $1, results = $2, digest = $3, engine_version = '1' where id = $4`,
+			[older.head, older.results, digestOf(older), id]
+		)
+	);
+	expect(await verified()).toMatchObject({ holds: true, engine: { frozenWith: '1' } });
+	const without = {
+		...older,
+		results: older.results.replace('"uncertainty":20', '"uncertainty":21')
+	};
+	await tamper((admin) =>
+		admin.query('update baseline set results = $1, digest = $2 where id = $3', [
+			without.results,
+			digestOf(without),
+			id
+		])
+	);
+	expect(await verified()).toMatchObject({ holds: false, quantities: { differ: ['0.1 rho'] } });
+});
+
 test('everybody in the programme may verify; to others there is no such baseline', async () => {
 	const answer = await call(verifyRoute, team.observer, { baseline: id });
 	expect(await answer.json()).toMatchObject({ holds: true });

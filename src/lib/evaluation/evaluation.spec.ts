@@ -1,24 +1,37 @@
-import { describe, expect, it } from 'vitest';
-import { createSheet } from '$lib/engine/calc/sheet';
-import { complete } from '$lib/engine/calc/completion';
-import type { GivenItem } from '$lib/engine/calc/items';
+import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
+import type { CalculationItem, GivenItem } from '$lib/engine/calc/items';
 import type { ItemResult } from '$lib/engine/calc/results';
 import { Evaluation, type Port } from './evaluation';
 import { merge } from './merge';
+import { serve } from './serve';
 import type { ToWorker } from './messages';
 
-const given = (id: string, value: string): GivenItem => ({
+beforeEach(() => {
+	vi.useFakeTimers();
+});
+afterEach(() => {
+	vi.useRealTimers();
+});
+
+const given = (id: string, value: string, uncertainty = ''): GivenItem => ({
 	id,
 	kind: 'given',
 	symbol: id,
 	value,
 	unit: '',
-	uncertainty: ''
+	uncertainty
 });
+const double: CalculationItem = {
+	id: 'double',
+	kind: 'calculation',
+	symbol: 'double',
+	expression: '2 a',
+	unit: '',
+	digits: ''
+};
 
 /** A worker that answers when told to. */
 function slowWorker() {
-	const sheet = createSheet();
 	const inbox: ToWorker[] = [];
 	const port: Port = {
 		onmessage: null,
@@ -26,19 +39,11 @@ function slowWorker() {
 		postMessage: (message: ToWorker) => inbox.push(message),
 		terminate: () => {}
 	};
+	const receive = serve((data) => port.onmessage?.({ data } as MessageEvent));
 	const answer = () => {
 		const message = inbox.shift();
-		if (!message) return false;
-		const data =
-			message.kind === 'apply'
-				? { kind: 'results' as const, ...sheet.apply(message.change) }
-				: {
-						kind: 'suggestions' as const,
-						question: message.question,
-						suggestions: complete(sheet, message.prefix)
-					};
-		port.onmessage?.({ data } as MessageEvent);
-		return true;
+		if (message) receive(message);
+		return message !== undefined;
 	};
 	return { port, inbox, answer };
 }
@@ -66,6 +71,27 @@ describe('the page’s side of the engine', () => {
 		while (answer());
 		expect(told).toHaveLength(2);
 		expect(told[1]).toMatchObject([{ outcome: { quantity: { value: 4 } } }]);
+	});
+
+	it('is told uncertainties when no edit has come for a moment', () => {
+		const { port, answer } = slowWorker();
+		const { evaluation, told } = evaluationOn(port);
+		for (const value of ['1', '2']) {
+			evaluation.apply({ upsert: [given('a', value, '0.1'), double] });
+			answer();
+			vi.advanceTimersByTime(20);
+		}
+		expect(told).toHaveLength(2);
+		expect(told[1]).toMatchObject([{ id: 'a' }, { outcome: { quantity: { uncertainty: null } } }]);
+		vi.runAllTimers();
+		expect(told).toHaveLength(3);
+		expect(told[2]).toMatchObject([
+			{ id: 'double', outcome: { quantity: { value: 4, uncertainty: 0.2 } } }
+		]);
+		evaluation.apply({ upsert: [given('b', '7')] });
+		answer();
+		vi.runAllTimers();
+		expect(told).toHaveLength(4);
 	});
 
 	it('answers questions in between', async () => {

@@ -84,6 +84,10 @@ export class Evaluation {
 			this.questions.delete(message.question);
 			return;
 		}
+		if (message.kind === 'uncertainties') {
+			this.listener.onResults(message.changed, []);
+			return;
+		}
 		this.busy = false;
 		const { waiting } = this;
 		this.waiting = null;

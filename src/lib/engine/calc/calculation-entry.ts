@@ -5,7 +5,7 @@ import type { Entry, Refreshed, ResultLinks } from './entry';
 import { Refusal } from './faults';
 import { Formula } from './formula';
 import type { CalculationItem } from './items';
-import { inUnit, parseDigits, showing, type Showing } from './quantity';
+import { inUnit, parseDigits, showing, uncertaintyIn, type Showing } from './quantity';
 import type { Fault, Outcome, QuantityResult } from './results';
 import type { Scope } from './scope';
 import type { Slot } from './slot';
@@ -73,6 +73,10 @@ export class CalculationEntry implements Entry {
 		return 'moved';
 	}
 
+	linear(isUncertain: (slot: Slot) => boolean) {
+		return [this.how && this.formula.linear(isUncertain)];
+	}
+
 	result(slots: readonly Slot[], { uses, usedIn }: ResultLinks): QuantityResult {
 		const { item, symbolTex, formula } = this;
 		return {
@@ -99,7 +103,7 @@ export class CalculationEntry implements Entry {
 				dimension: how.unit.dimension,
 				value: fromSi(si, how.unit),
 				unit,
-				uncertainty: uncertainty && uncertainty / how.unit.factor,
+				uncertainty: uncertaintyIn(uncertainty, how.unit),
 				digits
 			}
 		};

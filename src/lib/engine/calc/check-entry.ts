@@ -35,6 +35,8 @@ export class CheckEntry implements Entry {
 		return refreshParts(this.item, this.formulas);
 	}
 
+	linear = () => [];
+
 	result(_slots: readonly Slot[], links: ResultLinks): CheckResult {
 		const { item, formulas, thinLimit } = this;
 		return { id: item.id, kind: 'check', ...decideCheck(item, formulas, thinLimit), ...links };

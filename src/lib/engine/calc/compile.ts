@@ -6,7 +6,7 @@ import { placeOf, type Comparison, type Expr } from './tree';
 
 /** Reads the values of names by their place in the list given to `compile`. */
 export type Program = (values: ArrayLike<number>) => number;
-type Condition = (values: ArrayLike<number>) => boolean;
+export type Condition = (values: ArrayLike<number>) => boolean;
 
 /** The largest figure that is told. */
 export const LARGEST = 1e300;
@@ -37,7 +37,7 @@ export function compile(expr: Expr, names: readonly string[]): Program {
 		case 'binary':
 			return arithmetic(expr, value(expr.left), value(expr.right));
 		case 'choose': {
-			const met = condition(expr.condition, names);
+			const met = compileCondition(expr.condition, names);
 			const [yes, no] = [value(expr.yes), value(expr.no)];
 			return (values) => (met(values) ? yes(values) : no(values));
 		}
@@ -48,13 +48,13 @@ export function compile(expr: Expr, names: readonly string[]): Program {
 	}
 }
 
-function condition(expr: Expr, names: readonly string[]): Condition {
+export function compileCondition(expr: Expr, names: readonly string[]): Condition {
 	if (expr.kind === 'not') {
-		const of = condition(expr.of, names);
+		const of = compileCondition(expr.of, names);
 		return (values) => !of(values);
 	}
 	if (expr.kind === 'logic') {
-		const [left, right] = [condition(expr.left, names), condition(expr.right, names)];
+		const [left, right] = [compileCondition(expr.left, names), compileCondition(expr.right, names)];
 		if (expr.op === 'and') return (values) => left(values) && right(values);
 		return (values) => left(values) || right(values);
 	}

@@ -3,7 +3,9 @@ import { significant } from '../quantities/number';
 import { equal, isPure } from '../quantities/dimension';
 import { compile, type Program } from './compile';
 import { Refusal } from './faults';
+import { compileGradient, type Gradient } from './gradient';
 import { inferValue, type ValueType } from './infer';
+import type { Linear } from './linear';
 import { ambiguousName, modelName, unknownName } from './name-refusals';
 import { parse, type Parsed } from './parse';
 import { asTex } from './print';
@@ -29,6 +31,8 @@ export class Formula {
 	private parsed: Parsed | null = null;
 	private fault: Fault | null = null;
 	private program: Program | null = null;
+	private gradient: Gradient | null = null;
+	private slopes: Float64Array;
 	/** What stands behind the names, their figures, and the manners for which the type below was found. */
 	private inputs: Slot[] = [];
 	private values: number[] = [];
@@ -50,6 +54,7 @@ export class Formula {
 			}
 		}
 		this.names = this.parsed?.names ?? [];
+		this.slopes = new Float64Array(this.names.length);
 		this.mentions = [...this.names, ...(this.parsed?.unitNames.map(({ name }) => name) ?? [])];
 		this.tex = this.parsed ? asTex(this.parsed.expr) : '';
 	}
@@ -85,6 +90,15 @@ export class Formula {
 		} catch {
 			return null;
 		}
+	}
+
+	/** How the figure follows from what is named; null where nothing of that is uncertain. */
+	linear(isUncertain: (slot: Slot) => boolean): Linear | null {
+		const { parsed, inputs, values } = this;
+		if (!parsed || this.outcome.state !== 'value' || !inputs.some(isUncertain)) return null;
+		this.gradient ??= compileGradient(parsed.expr, this.names);
+		this.gradient(values, this.slopes);
+		return { inputs, slopes: this.slopes };
 	}
 
 	private evaluated(scope: Scope): FormulaOutcome {

@@ -39,6 +39,8 @@ export class GivenEntry implements Entry {
 	/** It names nothing, so nothing moves it but an edit. */
 	refresh = () => null;
 
+	linear = () => [];
+
 	result(_slots: readonly Slot[], { uses, usedIn }: ResultLinks): QuantityResult {
 		const { item, symbol, outcome } = this;
 		return {

@@ -92,7 +92,7 @@ export function evaluateLineModel(
 	}
 	const values = Object.fromEntries(
 		found.map(({ field, outcome }) => [field, outcome.state === 'value' ? outcome.si : null])
-	) as Partial<Record<ModelField, number | null>>;
+	) as ModelValues;
 	const input = taperInput(values, BODIES[item.body].radius.value);
 	if (!input) return without({ state: 'blank' });
 
@@ -160,10 +160,22 @@ function inputFaults(field: ModelField, outcome: FormulaOutcome): Fault[] {
 		: [fault('refused', `The ${what} must be ${atLeast === '0' ? '0 or more' : 'above 0'}.`)];
 }
 
-function taperInput(
-	values: Partial<Record<ModelField, number | null>>,
-	radius: number
-): TaperInput | null {
+/** In SI, null for what is blank. */
+export type ModelValues = Partial<Record<ModelField, number | null>>;
+
+/** The figures of the outputs, null for one beyond any build; null where the model refuses these values. */
+export function outputsAt(item: LineModelItem, values: ModelValues): (number | null)[] | null {
+	const input = taperInput(values, BODIES[item.body].radius.value);
+	const field = ofBody(BODIES[item.body], false);
+	if (!input || topRefusal(field, input.top)) return null;
+	const result = sizeTaper(field, input);
+	return OUTPUTS.map(({ value }) => {
+		const told = value(result);
+		return typeof told === 'number' ? told : null;
+	});
+}
+
+function taperInput(values: ModelValues, radius: number): TaperInput | null {
 	const { density, allowable, factorOfSafety, lift, area, reserve, top } = values;
 	if (!density || !allowable || !factorOfSafety || !top) return null;
 	const base = area ? { area } : lift ? { lift } : null;

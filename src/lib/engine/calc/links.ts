@@ -41,10 +41,11 @@ export class Links<T extends Node> {
 	relink(node: T, now: Linked | null): string[] {
 		const before = this.linked.get(node) ?? NOTHING;
 		const after = now ?? NOTHING;
-		if (now && before === NOTHING) node.place = this.place.get(node.id) ?? Infinity;
+		const came = now !== null && !this.linked.has(node);
+		if (came) node.place = this.place.get(node.id) ?? Infinity;
 		if (now) this.linked.set(node, now);
 		else this.linked.delete(node);
-		if (sameLinks(before, after)) return [];
+		if (now && !came && sameLinks(before, after)) return [];
 		for (const name of before.defines) this.definersByName.remove(name, node);
 		for (const name of before.mentions) this.mentionersByName.remove(name, node);
 		for (const name of after.defines) this.definersByName.add(name, node);

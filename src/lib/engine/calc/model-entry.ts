@@ -1,11 +1,23 @@
 /** A line model in the sheet: its symbol is no quantity, its outputs are. */
+import { slopesOf } from '../numerics/slope';
+import { parseUnit } from '../quantities/units';
 import type { Entry, ResultLinks } from './entry';
 import { Formula } from './formula';
 import { valueType } from './infer';
 import type { LineModelItem } from './items';
-import { MODEL_FIELDS, evaluateLineModel, fieldsRead, type ModelFormulas } from './line-model';
+import { joined, type Linear } from './linear';
+import {
+	MODEL_FIELDS,
+	evaluateLineModel,
+	fieldsRead,
+	outputsAt,
+	type ModelField,
+	type ModelFormulas,
+	type ModelValues
+} from './line-model';
 import { OUTPUTS } from './model-outputs';
-import type { Fault, LineModelResult } from './results';
+import { uncertaintyIn } from './quantity';
+import type { Fault, LineModelResult, ModelOutput } from './results';
 import type { Scope } from './scope';
 import type { Slot } from './slot';
 import { readSymbol } from './symbol';
@@ -19,6 +31,7 @@ export class ModelEntry implements Entry {
 	readonly width = 1 + OUTPUTS.length;
 	private trouble: Fault | null;
 	private formulas: ModelFormulas;
+	private slopes = new Map<ModelField, readonly number[]>();
 	private model: ModelBody | null = null;
 
 	constructor(readonly item: LineModelItem) {
@@ -34,6 +47,7 @@ export class ModelEntry implements Entry {
 
 	evaluate(slots: readonly Slot[], scope: Scope, _thinLimit: number, objection: Fault | null) {
 		const { item, formulas } = this;
+		this.slopes.clear();
 		this.model = evaluateLineModel(item, formulas, scope, this.trouble ?? objection);
 		this.model.outputs.forEach(({ outcome }, i) => {
 			const slot = slots[i + 1]!;
@@ -47,8 +61,61 @@ export class ModelEntry implements Entry {
 	/** Its figures are too dear to be found twice: first to see whether they stand, then in full. */
 	refresh = () => null;
 
-	result(_slots: readonly Slot[], links: ResultLinks): LineModelResult {
-		const { item, model } = this;
-		return { id: item.id, kind: 'lineModel', symbol: item.symbol.trim(), ...model!, ...links };
+	/** Exact through the expressions of its inputs, by differences through the model. */
+	linear(isUncertain: (slot: Slot) => boolean): (Linear | null)[] {
+		const parts: Linear[] = [];
+		const slopes: (readonly number[])[] = [];
+		for (const field of fieldsRead(this.item)) {
+			const part = this.formulas[field].linear(isUncertain);
+			if (!part) continue;
+			parts.push(part);
+			slopes.push(this.slopesBy(field));
+		}
+		const outputs = OUTPUTS.map((_, output) => {
+			if (parts.length === 0) return null;
+			return joined(
+				parts,
+				slopes.map((by) => by[output]!)
+			);
+		});
+		return [null, ...outputs];
 	}
+
+	/** Of each output by a field, kept as long as the figures are those for which it was found. */
+	private slopesBy(field: ModelField): readonly number[] {
+		const values = Object.fromEntries(
+			fieldsRead(this.item).map((name) => {
+				const { outcome } = this.formulas[name];
+				return [name, outcome.state === 'value' ? outcome.si : null];
+			})
+		) as ModelValues;
+		const found =
+			this.slopes.get(field) ??
+			slopesOf((x) => outputsAt(this.item, { ...values, [field]: x }), values[field]!);
+		this.slopes.set(field, found);
+		return found;
+	}
+
+	result(slots: readonly Slot[], links: ResultLinks): LineModelResult {
+		const { item } = this;
+		const model = this.model!;
+		const outputs = model.outputs.map((output, i) => withUncertainty(output, slots[i + 1]!));
+		return {
+			id: item.id,
+			kind: 'lineModel',
+			symbol: item.symbol.trim(),
+			...model,
+			outputs,
+			...links
+		};
+	}
+}
+
+function withUncertainty(output: ModelOutput, { uncertainty }: Slot): ModelOutput {
+	const { outcome } = output;
+	if (outcome.state !== 'value' || uncertainty === null) return output;
+	const { quantity } = outcome;
+	const parsed = parseUnit(quantity.unit);
+	const inUnit = parsed.ok ? uncertaintyIn(uncertainty, parsed.unit) : null;
+	return { ...output, outcome: { state: 'value', quantity: { ...quantity, uncertainty: inUnit } } };
 }

@@ -12,6 +12,8 @@ const MOST = 8;
 export class Plans {
 	private kept = new Map<Held, Plan>();
 	private version = 0;
+	private all: Plan = { order: [], users: [] };
+	private wholeVersion = 0;
 
 	constructor(private links: Links<Held>) {}
 
@@ -24,6 +26,13 @@ export class Plans {
 		const plan = this.kept.get(only!) ?? this.make(seeds);
 		this.kept.set(only!, plan);
 		return plan;
+	}
+
+	/** Of all items. */
+	whole(all: Iterable<Held>): Plan {
+		if (this.wholeVersion !== this.links.version) this.all = this.make(new Set(all));
+		this.wholeVersion = this.links.version;
+		return this.all;
 	}
 
 	private make(seeds: ReadonlySet<Held>): Plan {

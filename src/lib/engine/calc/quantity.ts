@@ -50,6 +50,13 @@ export function inUnit(si: number, { text, unit }: Showing): number {
 	throw new Refusal('beyond-any-build', `In ${text} the value is beyond any build: above 1e300.`);
 }
 
+/** A standard uncertainty in the unit: a length of its scale. Null where it is too large to tell. */
+export function uncertaintyIn(uncertainty: number | null, unit: Unit): number | null {
+	if (uncertainty === null) return null;
+	const size = uncertainty / unit.factor;
+	return size <= LARGEST ? size : null;
+}
+
 /** The value in the unit to show, or why it cannot be shown in it. */
 export function shown(si: number, type: ValueType, manner: Wish & { digits: number }): Outcome {
 	try {

@@ -3,6 +3,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { SheetChange, SheetItem } from './items';
 import { calculation, check, given, lineModel } from './items.fixture';
+import type { ItemResult } from './results';
 import { createSheet } from './sheet';
 
 const IDS = ['i1', 'i2', 'i3', 'i4', 'i5', 'i6'];
@@ -119,15 +120,18 @@ describe('any sequence of edits', () => {
 				fc.property(fc.array(change, { maxLength: 8 }), (changes) => {
 					const live = createSheet();
 					const followed = new Map<string, unknown>();
-					for (const change of changes) {
-						const { changed, removed } = live.apply(change);
-						removed.forEach((id) => followed.delete(id));
-						for (const result of changed) {
-							if (!change.remove?.includes(result.id))
-								expect(result).not.toEqual(followed.get(result.id));
+					const follow = (results: ItemResult[], again: string[] = []) => {
+						for (const result of results) {
+							if (!again.includes(result.id)) expect(result).not.toEqual(followed.get(result.id));
 							followed.set(result.id, result);
 						}
-					}
+					};
+					changes.forEach((change, i) => {
+						const { changed, removed } = live.apply(change);
+						removed.forEach((id) => followed.delete(id));
+						follow(changed, change.remove);
+						if (i % 2 === 1 || i === changes.length - 1) follow(live.uncertainties());
+					});
 					expect(followed).toEqual(new Map(live.results().map((result) => [result.id, result])));
 				}),
 				{ numRuns: 150 }

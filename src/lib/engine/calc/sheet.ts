@@ -17,6 +17,7 @@ import type { ItemResult, Outcome } from './results';
 import { same } from './same';
 import type { Scope } from './scope';
 import { Slot, type Move } from './slot';
+import { propagate } from './uncertainty';
 
 const DEFAULT_THIN_LIMIT = 0.1;
 
@@ -29,7 +30,12 @@ export type SheetAnswer = {
 export interface Sheet {
 	/** Takes an edit and answers with the results that it changed. */
 	apply(change: SheetChange): SheetAnswer;
-	/** All results in sheet order. */
+	/**
+	 * Brings the standard uncertainties up to the figures and answers with the results in which they
+	 * changed. An edit leaves them as they were, so that nobody who types waits for them.
+	 */
+	uncertainties(): ItemResult[];
+	/** All results in sheet order, with their uncertainties. */
 	results(): ItemResult[];
 	/** Names that others may use, with the item and the outcome behind each. */
 	symbols(): Iterable<{ name: string; id: string; outcome: Outcome }>;
@@ -46,6 +52,8 @@ class LiveSheet implements Sheet {
 	private thinLimit = DEFAULT_THIN_LIMIT;
 	/** Counts the edits. */
 	private edit = 0;
+	/** The edit whose figures the uncertainties follow. */
+	private propagatedFor = 0;
 	/** Items whose results this edit may have changed. */
 	private open: Held[] = [];
 	/** Items whose words name what lies near an unknown symbol, which any new symbol may change. */
@@ -95,7 +103,16 @@ class LiveSheet implements Sheet {
 		return this.answer(removed.filter((id) => !this.held.has(id)));
 	}
 
+	uncertainties(): ItemResult[] {
+		if (this.propagatedFor === this.edit) return [];
+		this.propagatedFor = this.edit;
+		const changed = propagate(this.plans.whole(this.held.values()).order);
+		for (const held of changed) held.spoil('all');
+		return inOrder(changed).map((held) => held.read(this.links));
+	}
+
 	results(): ItemResult[] {
+		this.uncertainties();
 		return inOrder([...this.held.values()]).map((held) => held.read(this.links));
 	}
 

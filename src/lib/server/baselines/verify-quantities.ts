@@ -1,6 +1,9 @@
-/** Figures computed again from a baseline's content, held against those it was frozen with. */
+/**
+ * Figures computed again from a baseline's content, held against those it was frozen with. What an older
+ * engine did not tell is not held against it: before version 2 only givens had an uncertainty.
+ */
 import type { ItemResult, Outcome } from '$lib/engine/calc/results';
-import { sameFigure } from '$lib/note/canonical';
+import { propagatesUncertainty } from '$lib/engine/version';
 import type { ItemKind, NoteContent } from '$lib/note/items';
 import { numberItems } from '$lib/note/numbering';
 import { readingMoved, readingsOf, type Reading } from '$lib/note/readings';
@@ -13,7 +16,8 @@ export type QuantityTally = Tally & {
 
 export async function verifyQuantities(
 	content: NoteContent,
-	stored: readonly ItemResult[]
+	stored: readonly ItemResult[],
+	frozenWith: string
 ): Promise<QuantityTally> {
 	const now = new Map((await evaluateContent(content)).map((result) => [result.id, result]));
 	const then = new Map(stored.map((result) => [result.id, result]));
@@ -28,7 +32,8 @@ export async function verifyQuantities(
 			const [a, b] = [sealed, today].map((side) => side.find(({ output }) => output === name));
 			of += 1;
 			kinds[plural(item.kind)] += 1;
-			if (!a || !b || readingMoved(a, b) || uncertaintyMoved(a, b))
+			const uncertain = item.kind === 'given' || propagatesUncertainty(frozenWith);
+			if (!a || !b || readingMoved(a, b) || (uncertain && uncertaintyMoved(a, b)))
 				differ.push([numbers.get(item.id), (a ?? b)!.symbol].filter(Boolean).join(' '));
 		}
 	}
@@ -41,9 +46,13 @@ function plural(kind: ItemKind) {
 	return kind === 'lineModel' ? 'outputs' : 'calculations';
 }
 
+/** Through line models uncertainties come from differences, told to nine digits. */
+const SAME_UNCERTAINTY = 1e-8;
+
 function uncertaintyMoved(a: Reading, b: Reading): boolean {
 	const of = (outcome: Outcome) =>
 		outcome.state === 'value' ? outcome.quantity.uncertainty : null;
 	const [then, now] = [of(a.outcome), of(b.outcome)];
-	return then === null || now === null ? then !== now : !sameFigure(then, now);
+	if (then === null || now === null) return then !== now;
+	return Math.abs(then - now) > SAME_UNCERTAINTY * Math.max(then, now);
 }

@@ -39,7 +39,7 @@ export async function verifyBaseline(row: Row): Promise<Verification> {
 	const sealed = readable(row);
 	const parts = {
 		quantities: sealed
-			? await verifyQuantities(sealed.content, sealed.results)
+			? await verifyQuantities(sealed.content, sealed.results, row.engineVersion)
 			: { ...UNREADABLE, kinds: { givens: 0, calculations: 0, outputs: 0, checks: 0 } },
 		text: sealed ? verifyContent(row.state, sealed.content) : UNREADABLE,
 		evidence: await verifyEvidence(row.evidence),
