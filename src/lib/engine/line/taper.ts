@@ -141,8 +141,6 @@ const NARROWEST = 1e-12;
 export function spread(field: Field, k: number, near: number, far: number): number {
 	const { balance, limit, depth, rise } = field;
 	const fall = near === balance ? depth : (r: number) => rise(r, near);
-	const width = 1 / (k * Math.abs(field.g(near)) + Math.sqrt(k * -field.along(near)));
-	if (width < NARROWEST * near) return width * (near === balance ? Math.sqrt(Math.PI / 2) : 1);
 	const shape = (r: number) => Math.exp(-k * fall(r));
 
 	function over(from: number, to: number, fallen: number, falls: number): number {
@@ -150,6 +148,7 @@ export function spread(field: Field, k: number, near: number, far: number): numb
 		const clear = Math.min(from, to, limit - Math.max(from, to));
 		if (falls - fallen <= STEEPEST && Math.abs(to - from) <= 3 * clear)
 			return Math.abs(gauss16(shape, from, to));
+		if (Math.abs(to - from) <= NARROWEST * near) return widthOfPeak(field, k, near);
 		const middle = from + (to - from) / 2;
 		const between = k * fall(middle);
 		return over(from, middle, fallen, between) + over(middle, to, between, falls);
@@ -157,6 +156,12 @@ export function spread(field: Field, k: number, near: number, far: number): numb
 
 	return over(near, far, 0, k * fall(far));
 }
+
+/** The same of a peak too narrow for radii to be told apart in it: half a Gaussian at r_s, else an exponential. */
+const widthOfPeak = (field: Field, k: number, near: number) =>
+	near === field.balance
+		? Math.sqrt(Math.PI / (-2 * k * field.along(near)))
+		: 1 / (k * Math.abs(field.g(near)));
 
 export type Profile = {
 	height: number[];
