@@ -4,7 +4,7 @@
  */
 import { Refused } from '../methods/refused';
 import { integrate } from '../numerics/quadrature';
-import { kilometres } from '../quantities/format';
+import { distance } from '../quantities/format';
 import { topOf, type Line } from './line';
 import { tensionAt, type Hanging, type Stretch } from './tension';
 
@@ -31,7 +31,7 @@ export function elongation(line: Line, { stretches }: Hanging, elasticity: Elast
 	const crushed = ends.find((end) => end.strain <= -1);
 	if (crushed)
 		throw new Refused(
-			`At the radius ${kilometres(crushed.r)} the strain comes to −100 % or less: there is no length as manufactured.`,
+			`At the radius ${distance(crushed.r)} the strain comes to −100 % or less: there is no length as manufactured.`,
 			{ remedy: 'Look at the modulus, the change of temperature and the slack.' }
 		);
 	const shortening = ends.map(({ strain }) => strain / (1 + strain));

@@ -1,4 +1,5 @@
 /** Stretches of a line over which the section is smooth, with the integrals that statics needs in closed form. */
+import { gauss16 } from '../numerics/gauss';
 import type { Field } from './field';
 import { spread } from './taper';
 
@@ -40,7 +41,7 @@ export function linearPiece(
 		to,
 		area,
 		slope,
-		weight: (a, b) => gauss((r) => area(r) * field.g(r), a, b, field.limit),
+		weight: (a, b) => overPanels((r) => area(r) * field.g(r), a, b, field.limit),
 		volume: (a, b) => area((a + b) / 2) * (b - a)
 	};
 }
@@ -72,25 +73,16 @@ export function taperPiece(
 	};
 }
 
-/** Nodes and weights of the six-point Gauss–Legendre rule on [−1, 1] (Abramowitz and Stegun, table 25.4). */
-const NODES = [0.2386191860831969, 0.6612093864662645, 0.932469514203152];
-const WEIGHTS = [0.467913934572691, 0.3607615730481386, 0.1713244923791704];
-
 /**
- * ∫ f from a to b where f is smooth but for poles at the centre, r = 0, and at `limit`: over panels short against the
- * distance from both, where six points leave less than 1e-14.
+ * ∫ f from a to b where f is smooth but for poles at the centre, r = 0, and at `limit`: over panels no longer than twice
+ * their distance from both, where sixteen points leave nothing above rounding.
  */
-function gauss(f: (r: number) => number, a: number, b: number, limit: number): number {
+function overPanels(f: (r: number) => number, a: number, b: number, limit: number): number {
 	let sum = 0;
 	for (let from = a; from < b;) {
-		const reach = from + 0.2 * Math.min(from, limit - from);
-		// The last panel takes a rest too short for one of its own.
-		const to = reach > from && b - reach > 0.01 * (reach - from) ? reach : b;
-		const [centre, half] = [(from + to) / 2, (to - from) / 2];
-		for (let i = 0; i < 3; i += 1) {
-			const step = half * NODES[i]!;
-			sum += half * WEIGHTS[i]! * (f(centre - step) + f(centre + step));
-		}
+		const reach = from + Math.min(2 * from, (2 / 3) * (limit - from));
+		const to = reach > from && reach < b ? reach : b;
+		sum += gauss16(f, from, to);
 		from = to;
 	}
 	return sum;

@@ -1,5 +1,5 @@
 /** What a line's place should make one heed. */
-import { kilometres } from '../quantities/format';
+import { distance, kilometres } from '../quantities/format';
 import { BODIES, type BodyName } from './bodies';
 import type { Field } from './field';
 import type { Site } from './site';
@@ -14,16 +14,14 @@ export function oneBodyWarnings(body: BodyName, field: Field): string[] {
 	];
 }
 
-/** `top`: radius of the line's upper end, m. */
+/** @param top highest radius looked at, m */
 export function siteWarnings(site: Site, field: Field, top: number): string[] {
 	const warnings = site.kind === 'body' ? oneBodyWarnings(site.body, field) : [];
-	if (site.kind === 'moon' && site.side === 'near')
+	if (site.kind === 'moon' && site.side === 'near' && top > field.balance)
 		warnings.push(
-			`The top is ${kilometres(field.limit - top)} from the centre of the primary, whose own radius is not looked at.`
+			`The radius ${distance(top)} is ${distance(field.limit - top)} from the centre of the primary, whose own radius is not looked at.`
 		);
 	if (site.kind !== 'moon' && top > 1000 * field.balance)
-		warnings.push(
-			'The top lies more than a thousand balance radii away: one body alone says nothing there.'
-		);
+		warnings.push('More than a thousand balance radii away one body alone says nothing.');
 	return warnings;
 }

@@ -3,14 +3,21 @@ import { root } from '../numerics/root';
 import type { Line } from './line';
 import { tensionAt, type Hanging } from './tension';
 
-/** What counts as rounding, as a fraction of the greatest tension. */
-const ROUNDING = 1e-13;
+/** The tension, N, below which a line counts as slack: less than 1e-13 of the greatest is rounding. */
+export const slackBelow = (greatestTension: number) => -1e-13 * Math.max(0, greatestTension);
 
 export type Interval = { from: number; to: number };
 
-/** The radii between which the line is slack, upwards. Less than 1e-13 of the greatest tension is rounding. */
-export function slackIn(line: Line, { stretches }: Hanging, greatestTension: number): Interval[] {
-	const least = -ROUNDING * Math.max(0, greatestTension);
+/**
+ * The radii between which the line is slack, upwards. Where only the anchor would have to push, under a mass that sits
+ * there, both are its radius.
+ */
+export function slackIn(
+	line: Line,
+	{ stretches, anchorTension }: Hanging,
+	greatestTension: number
+): Interval[] {
+	const least = slackBelow(greatestTension);
 	const found: Interval[] = [];
 	for (const stretch of stretches) {
 		const { from, to, lower, upper } = stretch;
@@ -25,5 +32,8 @@ export function slackIn(line: Line, { stretches }: Hanging, greatestTension: num
 		if (last && last.to === part.from) last.to = part.to;
 		else found.push(part);
 	}
+	const bottom = stretches[0]!.from;
+	if (anchorTension < least && found[0]?.from !== bottom)
+		found.unshift({ from: bottom, to: bottom });
 	return found;
 }

@@ -91,5 +91,9 @@ export function survey(
 	}
 	while (next < down.length) take();
 	found.anchorTension = anchorTension + added;
+	if (found.anchorTension < found.leastTension) {
+		found.leastTension = found.anchorTension;
+		found.leastTensionRadius = stretches[0]!.from;
+	}
 	return found;
 }

@@ -53,22 +53,19 @@ export function isAboveSynchronous(field: Field, top: number): boolean {
 export function sizeTaper(field: Field, input: TaperInput): TaperResult {
 	const { density, designStress, reserve, top, base } = input;
 	const baseArea = baseSection(field, input);
-	const { lnTaper, lnPeak, lnArea, lnMass, lnCounterweight } = taperLogs(field, {
-		density,
-		designStress,
-		baseArea
-	});
-	const below = lnMass(field.balance, field.base);
-	const above = lnMass(field.balance, top);
+	const { lnTaper, lnArea, lnMass, lnCounterweight } = taperShape(field, density, designStress);
+	const lnPeak = Math.log(baseArea) + lnTaper;
+	const below = lnPeak + lnMass(field.balance, field.base);
+	const above = lnPeak + lnMass(field.balance, top);
 	const line = lnSum(below, above);
-	const counterweight = lnCounterweight(top);
+	const counterweight = lnPeak + lnCounterweight(top);
 
 	return {
 		designStress,
 		taper: told(lnTaper),
 		baseArea,
 		synchronousArea: told(lnPeak),
-		topArea: told(lnArea(top)),
+		topArea: told(lnPeak + lnArea(top)),
 		greatestTension: told(lnPeak + Math.log(designStress)),
 		mass: told(line),
 		massBelow: told(below),
@@ -92,31 +89,26 @@ export function baseSection(field: Field, { base, designStress, reserve }: Taper
 	return (base.lift * field.g(field.base) * (1 + reserve)) / designStress;
 }
 
-export type TaperLogs = {
+/** A taper by the logarithms of its figures over A(r_s), its section at r_s. */
+export type TaperShape = {
+	/** ρ/σ_d, kg/J */
+	k: number;
 	/** ln A(r_s)/A₀ */
 	lnTaper: number;
-	/** ln A(r_s), m² */
-	lnPeak: number;
-	/** ln A(r), m² */
+	/** ln A(r)/A(r_s) */
 	lnArea: (r: number) => number;
-	/** ln of the mass, kg, between two radii on one side of r_s; `near` is the one nearer to it. */
+	/** The same of the mass, kg/m², between two radii on one side of r_s; `near` is the one nearer to it. */
 	lnMass: (near: number, far: number) => number;
-	/** ln m_c, kg, of a line that ends at `top` */
+	/** The same of m_c, kg/m², of a line that ends at `top`. */
 	lnCounterweight: (top: number) => number;
 };
 
-/** The taper's figures by their logarithms. */
-export function taperLogs(
-	field: Field,
-	{ density, designStress, baseArea }: { density: number; designStress: number; baseArea: number }
-): TaperLogs {
+export function taperShape(field: Field, density: number, designStress: number): TaperShape {
 	const k = density / designStress;
-	const lnTaper = k * field.depth(field.base);
-	const lnPeak = Math.log(baseArea) + lnTaper;
-	const lnArea = (r: number) => lnPeak - k * field.depth(r);
+	const lnArea = (r: number) => -k * field.depth(r);
 	return {
-		lnTaper,
-		lnPeak,
+		k,
+		lnTaper: k * field.depth(field.base),
 		lnArea,
 		lnMass: (near, far) => Math.log(density) + lnArea(near) + Math.log(spread(field, k, near, far)),
 		lnCounterweight: (top) => lnArea(top) + Math.log(designStress / -field.g(top))
@@ -176,12 +168,13 @@ export function profileTaper(field: Field, input: TaperInput): Profile | null {
 	const { base, balance: synchronous } = field;
 	const { designStress, top, density } = input;
 	const baseArea = baseSection(field, input);
-	const { lnPeak, lnArea } = taperLogs(field, { density, designStress, baseArea });
+	const { lnTaper, lnArea } = taperShape(field, density, designStress);
+	const lnPeak = Math.log(baseArea) + lnTaper;
 	if (typeof told(2 * lnPeak) !== 'number') return null;
 	const graded = (from: number, to: number, count: number) =>
 		Array.from({ length: count }, (_, i) => from * (to / from) ** (i / count));
 	const radii = [...graded(base, synchronous, 120), ...graded(synchronous, top, 80), top];
-	const area = radii.map((r) => Math.exp(lnArea(r)));
+	const area = radii.map((r) => Math.exp(lnPeak + lnArea(r)));
 	return {
 		height: radii.map((r) => r - base),
 		area,

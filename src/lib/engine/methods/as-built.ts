@@ -15,7 +15,7 @@ import {
 	TEMPERATURE,
 	over
 } from '../quantities/dimension';
-import { kilometres } from '../quantities/format';
+import { distance } from '../quantities/format';
 import { defineMethod } from './method';
 import { group, integer, list, quantity, type ValuesOf } from './parameter';
 
@@ -240,13 +240,13 @@ export const asBuilt = defineMethod({
 			warnings: [
 				...slack.map(
 					({ from, to }) =>
-						`Slack from the radius ${kilometres(from)} to ${kilometres(to)}: the line would have to push there.`
+						`Slack from the radius ${distance(from)} to ${distance(to)}: the line would have to push there.`
 				),
 				...(requiredTension !== undefined && anchorTension < requiredTension
 					? ['The anchor tension is below the required reserve.']
 					: []),
 				...(leastMargin !== undefined && leastMargin < 0
-					? [`The stress is above the allowed at the radius ${kilometres(stressRadius)}.`]
+					? [`The stress is above the allowed at the radius ${distance(stressRadius)}.`]
 					: []),
 				...digitsLost(anchorTension, greatestTension),
 				...strengthWarnings(input),

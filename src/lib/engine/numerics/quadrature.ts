@@ -57,6 +57,17 @@ export function integrate(
 	return done;
 }
 
+/** Edges that halve from `far` towards `near` until they are as narrow as `width`, in ascending order. */
+export function gradedTowards(near: number, far: number, width: number): number[] {
+	const halvings = Math.max(
+		1,
+		Math.min(60, 2 + Math.ceil(Math.log2(Math.abs(far - near) / width)))
+	);
+	const edges = [near];
+	for (let i = halvings; i >= 0; i -= 1) edges.push(near + (far - near) / 2 ** i);
+	return far < near ? edges.reverse() : edges;
+}
+
 function panel(f: (x: number) => number, from: number, to: number) {
 	const centre = (from + to) / 2;
 	const half = (to - from) / 2;

@@ -23,6 +23,10 @@ export function formatFigure(value: number, digits: number): string {
 /** A distance in whole kilometres, for words: "35 786 km". */
 export const kilometres = (metres: number) => `${formatFigure(Math.round(metres / 1e3), 1)} km`;
 
+/** A distance for words, where the place itself matters: "42 164.17 km", "812.500 m". */
+export const distance = (metres: number) =>
+	Math.abs(metres) < 1e3 ? `${formatFigure(metres, 6)} m` : `${formatFigure(metres / 1e3, 7)} km`;
+
 /** A value to so many digits for KaTeX. */
 export function figureTex(value: number, digits: number): string {
 	const parts = figureParts(value, digits);

@@ -1,0 +1,180 @@
+/** Constant-stress taper: sections, masses and counterweight of a line sized for one stress. */
+import { sizingInputs, sizingOf, sizingWarnings, refuseTop } from '../line/sizing';
+import { sizeTaper, taperShape } from '../line/taper';
+import { topWithin, tradeCurve } from '../line/trade';
+import { lnOf, told as toldOf } from '../numerics/logarithm';
+import { AREA, FORCE, LENGTH, MASS, PRESSURE, PURE } from '../quantities/dimension';
+import { defineMethod } from './method';
+import { group, integer, list, quantity, told } from './parameter';
+import { refuseInput } from './refused';
+
+const mass = (label: string, symbol: string) => told({ label, symbol, dimension: MASS, unit: 't' });
+const area = (label: string, symbol: string) =>
+	told({ label, symbol, dimension: AREA, unit: 'mm^2' });
+const radius = (label: string, symbol: string) =>
+	quantity({ label, symbol, dimension: LENGTH, unit: 'km' });
+
+export const taper = defineMethod({
+	name: 'taper',
+	title: 'Constant-stress taper',
+	summary:
+		'Sizes a line whose section grows so that the stress is the same everywhere: taper ratio, sections, mass of line and counterweight, and how they follow the radius of the top.',
+	subject: 'line',
+	inputs: {
+		...sizingInputs,
+		rangeFrom: quantity({
+			label: 'lowest top of the trade curve',
+			symbol: 'r_t',
+			dimension: LENGTH,
+			unit: 'km',
+			range: { above: 0 },
+			optional: true,
+			help: 'A tenth of the way from the balance radius to the range’s top where left out.'
+		}),
+		rangeTop: quantity({
+			label: 'highest top of the trade curve',
+			symbol: 'r_t',
+			dimension: LENGTH,
+			unit: 'km',
+			range: { above: 0 },
+			optional: true,
+			help: 'The top where left out.'
+		}),
+		rangePoints: integer({
+			label: 'points of the trade curve',
+			range: { least: 2, most: 5000 },
+			default: 50,
+			help: 'At equal steps of the radius.'
+		}),
+		within: quantity({
+			label: 'how near the total is to come to that at the range’s top, as a fraction',
+			dimension: PURE,
+			unit: '%',
+			range: { least: 1e-6, most: 100 },
+			default: 0.01
+		})
+	},
+	outputs: {
+		designStress: quantity({
+			label: 'design stress, allowable over factor of safety',
+			symbol: 'σ_d',
+			dimension: PRESSURE,
+			unit: 'GPa'
+		}),
+		taper: told({
+			label: 'taper ratio, section at the balance radius over that at the anchor',
+			symbol: 'A(r_s)/A₀',
+			dimension: PURE,
+			unit: ''
+		}),
+		baseArea: quantity({
+			label: 'section at the anchor',
+			symbol: 'A₀',
+			dimension: AREA,
+			unit: 'mm^2'
+		}),
+		balanceArea: area('section at the balance radius', 'A(r_s)'),
+		topArea: area('section at the top', 'A(r_t)'),
+		greatestTension: told({
+			label: 'greatest tension, at the balance radius',
+			symbol: 'T_max',
+			dimension: FORCE,
+			unit: 'kN'
+		}),
+		lineMass: mass('mass of the line', 'm'),
+		massBelow: mass('mass of the line below the balance radius', 'm_b'),
+		massAbove: mass('mass of the line above it', 'm_a'),
+		counterweight: mass('counterweight', 'm_c'),
+		total: mass('line and counterweight, lift excluded', 'm_tot'),
+		lift: quantity({
+			label: 'lift that the anchor section carries',
+			symbol: 'm_lift',
+			dimension: MASS,
+			unit: 't',
+			help: 'σ_d A₀/(g(R)(1 + reserve)).'
+		}),
+		totalPerLift: told({ label: 'total over lift', dimension: PURE, unit: '' }),
+		length: quantity({
+			label: 'length, anchor to top',
+			symbol: 'L',
+			dimension: LENGTH,
+			unit: 'km'
+		}),
+		balanceRadius: radius('balance radius', 'r_s'),
+		topWithin: {
+			...radius('least radius of the top at which the total is that near', 'r_t'),
+			help: 'The total only falls with the radius of the top: a least total exists only with a cost per length.'
+		},
+		trade: list({
+			label: 'trade curve',
+			fewest: 2,
+			most: 5000,
+			of: group({
+				label: 'top',
+				fields: {
+					top: radius('radius of the top', 'r_t'),
+					line: mass('line', 'm'),
+					counterweight: mass('counterweight', 'm_c'),
+					total: mass('line and counterweight', 'm_tot')
+				}
+			})
+		})
+	},
+	sources: [
+		'A(r) = A₀ exp{ρ [U(r) − U(R)]/σ_d}: P. K. Aravind, Am. J. Phys. 75 (2007) 125',
+		'm_c = σ_d A(r_t)/(−g(r_t)), balance of the counterweight'
+	],
+	validity:
+		'Straight line in the plane of the equator at rest in the co-rotating frame; exact section; density and section as deployed, under load; one climber, below the balance radius.',
+	leftOut: [
+		'climbers above the balance radius',
+		'joints and coatings',
+		'the air and elasticity',
+		'on one body all other bodies'
+	],
+	refuses: [
+		'a balance radius inside the body',
+		'a top at or below r_s (1 + 1e-9), or at the centre of the primary',
+		'figures above 1e300 are told by their decimal logarithm'
+	],
+	caution:
+		'Sizing is no release for use: factors of safety and allowables follow the governing standard, and a line that carries people or passes over them is for local codes and licensed practice to judge.',
+	run(input) {
+		const { field, taper } = sizingOf(input);
+		const rangeTop = input.rangeTop ?? input.top;
+		refuseTop(field, 'rangeTop', rangeTop);
+		const rangeFrom = input.rangeFrom ?? field.balance + 0.1 * (rangeTop - field.balance);
+		if (input.rangeFrom !== undefined) refuseTop(field, 'rangeFrom', rangeFrom);
+		if (rangeFrom >= rangeTop)
+			refuseInput('rangeFrom', 'The trade curve’s lowest top is not below its highest.');
+		const sized = sizeTaper(field, taper);
+		const { density, designStress } = taper;
+		const shape = taperShape(field, density, designStress);
+		const lnPeak = Math.log(sized.baseArea) + shape.lnTaper;
+		const step = (rangeTop - rangeFrom) / (input.rangePoints - 1);
+		const tops = Array.from({ length: input.rangePoints }, (_, i) => rangeFrom + i * step);
+		tops[tops.length - 1] = rangeTop;
+		return {
+			outputs: {
+				designStress,
+				taper: sized.taper,
+				baseArea: sized.baseArea,
+				balanceArea: sized.synchronousArea,
+				topArea: sized.topArea,
+				greatestTension: sized.greatestTension,
+				lineMass: sized.mass,
+				massBelow: sized.massBelow,
+				massAbove: sized.massAbove,
+				counterweight: sized.counterweight,
+				total: sized.total,
+				lift: sized.lift,
+				totalPerLift: toldOf(lnOf(sized.total) - Math.log(sized.lift)),
+				length: sized.length,
+				balanceRadius: field.balance,
+				topWithin: topWithin(field, shape, { designStress, rangeTop, share: input.within }),
+				trade: tradeCurve(field, shape, lnPeak, tops)
+			},
+			warnings: sizingWarnings(input, field)
+		};
+	}
+});
