@@ -8,7 +8,7 @@ const sources = readdirSync(engine, { recursive: true, encoding: 'utf8' })
 	.map((name) => join(engine, name));
 
 const imported = (file: string) =>
-	[...readFileSync(file, 'utf8').matchAll(/(?:from|import)\s*\(?\s*'([^']+)'/g)].map(
+	[...readFileSync(file, 'utf8').matchAll(/(?:from|import)\s*\(?\s*'([^'\n]+)'/g)].map(
 		([, path]) => path!
 	);
 

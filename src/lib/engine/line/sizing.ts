@@ -20,7 +20,7 @@ export const sizingInputs = {
 	}),
 	...strengthInputs,
 	base: variant({
-		label: 'what the base is sized from',
+		label: 'what the base is sized by',
 		cases: {
 			lift: {
 				label: 'the lift that it carries',
