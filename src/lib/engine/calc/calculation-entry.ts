@@ -66,8 +66,8 @@ export class CalculationEntry implements Entry {
 		if (!how || si === null) return null;
 		const slot = slots[0]!;
 		if (si === slot.si) return 'stayed';
-		const size = Math.abs(si);
-		if (size < how.from || size >= how.below) return null;
+		const { sizes } = how;
+		if (sizes && (Math.abs(si) < sizes.from || Math.abs(si) >= sizes.below)) return null;
 		if (Math.abs(fromSi(si, how.unit)) > LARGEST) return null;
 		slot.si = si;
 		return 'moved';

@@ -35,10 +35,11 @@ export function refreshParts({ relation }: CheckItem, formulas: CheckFormulas): 
 	for (const name of partsRead(relation)) {
 		const { blank, outcome } = formulas[name];
 		if (blank) continue;
-		const before = outcome.state === 'value' ? outcome.si : null;
 		const now = formulas[name].refresh();
-		if (now === null) return null;
-		if (now !== before) moved = 'moved';
+		if (now === null || outcome.state !== 'value') return null;
+		if (now === outcome.si) continue;
+		outcome.si = now;
+		moved = 'moved';
 	}
 	return moved;
 }

@@ -26,16 +26,15 @@ export class Formula {
 	/** Every name that others may define: symbols, and units that must not be symbols. */
 	readonly mentions: readonly string[];
 	readonly names: readonly string[];
-	/** What it came to when it was evaluated or refreshed last. */
+	/** What it came to when it was evaluated last; a figure that was refreshed since is for the asker to keep. */
 	outcome: FormulaOutcome = { state: 'blank' };
+	private hasValue = false;
 	private parsed: Parsed | null = null;
 	private fault: Fault | null = null;
 	private program: Program | null = null;
 	private gradient: Gradient | null = null;
-	private slopes: Float64Array;
-	/** What stands behind the names, their figures, and the manners for which the type below was found. */
+	/** What stands behind the names, and the manners for which the type below was found. */
 	private inputs: Slot[] = [];
-	private values: number[] = [];
 	private inferredFor: Manner[] = [];
 	private type: ValueType | Refusal | null = null;
 	private unit: string | null = null;
@@ -54,7 +53,6 @@ export class Formula {
 			}
 		}
 		this.names = this.parsed?.names ?? [];
-		this.slopes = new Float64Array(this.names.length);
 		this.mentions = [...this.names, ...(this.parsed?.unitNames.map(({ name }) => name) ?? [])];
 		this.tex = this.parsed ? asTex(this.parsed.expr) : '';
 	}
@@ -74,6 +72,7 @@ export class Formula {
 	/** Looks every name up, checks dimensions where they may have changed, and finds the figure or why there is none. */
 	evaluate(scope: Scope): FormulaOutcome {
 		this.outcome = this.evaluated(scope);
+		this.hasValue = this.outcome.state === 'value';
 		return this.outcome;
 	}
 
@@ -82,11 +81,9 @@ export class Formula {
 	 * does not do, and `evaluate` has to tell.
 	 */
 	refresh(): number | null {
-		const { outcome, inputs, values } = this;
-		if (outcome.state !== 'value') return null;
-		for (let i = 0; i < inputs.length; i += 1) values[i] = inputs[i]!.si;
+		if (!this.hasValue) return null;
 		try {
-			return (outcome.si = figure(this.program!(values)));
+			return this.figure();
 		} catch {
 			return null;
 		}
@@ -94,11 +91,17 @@ export class Formula {
 
 	/** How the figure follows from what is named; null where nothing of that is uncertain. */
 	linear(isUncertain: (slot: Slot) => boolean): Linear | null {
-		const { parsed, inputs, values } = this;
-		if (!parsed || this.outcome.state !== 'value' || !inputs.some(isUncertain)) return null;
+		const { parsed, inputs } = this;
+		if (!parsed || !this.hasValue || !inputs.some(isUncertain)) return null;
 		this.gradient ??= compileGradient(parsed.expr, this.names);
-		this.gradient(values, this.slopes);
-		return { inputs, slopes: this.slopes };
+		const slopes = new Float64Array(inputs.length);
+		this.gradient(read(inputs), slopes);
+		return { inputs, slopes };
+	}
+
+	private figure(): number {
+		// Minus zero is zero: nothing told may hang on the sign of nothing.
+		return this.program!(read(this.inputs)) + 0;
 	}
 
 	private evaluated(scope: Scope): FormulaOutcome {
@@ -112,14 +115,12 @@ export class Formula {
 			if (typeof supply === 'string') return this.objections(scope);
 			missing ||= !supply.manner;
 			this.inputs[i] = supply;
-			this.values[i] = supply.si;
 		}
 		if (missing) return this.waits();
 		try {
 			const type = this.typed(expr);
 			this.program ??= compile(expr, this.names);
-			const si = figure(this.program(this.values));
-			return { state: 'value', si, type, unit: this.unit, digits: this.digits };
+			return { state: 'value', si: this.figure(), type, unit: this.unit, digits: this.digits };
 		} catch (error) {
 			return { state: 'fault', faults: [asFault(error, this.field)] };
 		}
@@ -183,8 +184,14 @@ export class Formula {
 	}
 }
 
-/** Minus zero is zero: nothing told may hang on the sign of nothing. */
-const figure = (value: number) => value + 0;
+/** The figures of one formula at a time, in one place for all. */
+let figures = new Float64Array(16);
+
+function read(inputs: readonly Slot[]): Float64Array {
+	if (inputs.length > figures.length) figures = new Float64Array(2 * inputs.length);
+	for (let i = 0; i < inputs.length; i += 1) figures[i] = inputs[i]!.si;
+	return figures;
+}
 
 function inferred(expr: Expr, typeOf: (name: string) => ValueType): ValueType | Refusal {
 	try {

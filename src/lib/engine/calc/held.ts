@@ -13,15 +13,10 @@ export class Held {
 	/** Whether it stands in a cycle, and stood in one when it was evaluated last. */
 	cyclic = false;
 	wasCyclic = false;
-	/** The edit by which something that it names moved: its figure only, or more. */
-	dueBy = 0;
-	stirredBy = 0;
 	gone = false;
 	/** The edit that opened its result, which may say something else now than it said before (null: nothing). */
 	openedBy = 0;
 	before: ItemResult | null = null;
-	/** The edit that is known to have changed its result. */
-	movedBy = 0;
 	private result: ItemResult | null = null;
 	private linked = false;
 

@@ -2,9 +2,53 @@
 import { components, reach } from './graph';
 import type { Held } from './held';
 import type { Links } from './links';
+import type { Move } from './slot';
 
-/** Suppliers first, and for each the items that name it. */
-export type Plan = { order: readonly Held[]; users: readonly (readonly Held[])[] };
+/**
+ * Suppliers first. What says how far an edit has come lies side by side in few bytes an item: over
+ * thousands of items it is memory that an edit waits for.
+ */
+export type Plan = {
+	order: readonly Held[];
+	/** Places in the order of the items that the edit begins with. */
+	seeds: readonly number[];
+	/** Places of what stands in a cycle, or stood in one when it was evaluated last. */
+	cyclic: readonly number[];
+	/** Places of those who name the item at i: users[from[i]] to users[from[i + 1] - 1]. */
+	users: Int32Array;
+	from: Int32Array;
+	/** How far each is concerned by the edit under way. */
+	concerns: Uint8Array;
+};
+
+/** Nothing that the item names has moved; a figure has; more has, or the item itself is edited. */
+const UNTOUCHED = 0;
+const DUE = 1;
+const STIRRED = 2;
+
+/** Visits what an edit concerns, suppliers first, and stops where nothing moves. */
+export function run(plan: Plan, visit: (held: Held, stirred: boolean) => Move): void {
+	const { order, seeds, cyclic, users, from, concerns } = plan;
+	for (const i of seeds) concerns[i] = STIRRED;
+	for (const i of cyclic) {
+		concerns[i] = STIRRED;
+		// Nothing in a cycle sees what stood there before it closed.
+		const { slots, id, cyclic, wasCyclic } = order[i]!;
+		if (cyclic && !wasCyclic) for (const slot of slots) slot.lack([id]);
+	}
+	for (let i = 0; i < order.length; i += 1) {
+		const concern = concerns[i];
+		if (concern === UNTOUCHED) continue;
+		const move = visit(order[i]!, concern === STIRRED);
+		if (move === 'none') continue;
+		const reach = move === 'figure' ? DUE : STIRRED;
+		for (let k = from[i]!; k < from[i + 1]!; k += 1) {
+			const user = users[k]!;
+			if (concerns[user]! < reach) concerns[user] = reach;
+		}
+	}
+	concerns.fill(UNTOUCHED);
+}
 
 /** Edits go to and fro between a few items; each plan is as long as what its item reaches. */
 const MOST = 8;
@@ -12,7 +56,7 @@ const MOST = 8;
 export class Plans {
 	private kept = new Map<Held, Plan>();
 	private version = 0;
-	private all: Plan = { order: [], users: [] };
+	private all: Plan | null = null;
 	private wholeVersion = 0;
 
 	constructor(private links: Links<Held>) {}
@@ -30,7 +74,7 @@ export class Plans {
 
 	/** Of all items. */
 	whole(all: Iterable<Held>): Plan {
-		if (this.wholeVersion !== this.links.version) this.all = this.make(new Set(all));
+		if (!this.all || this.wholeVersion !== this.links.version) this.all = this.make(new Set(all));
 		this.wholeVersion = this.links.version;
 		return this.all;
 	}
@@ -43,6 +87,17 @@ export class Plans {
 			for (const held of component) held.cyclic = cyclic;
 			order.push(...component);
 		}
-		return { order, users: order.map(users) };
+		const places = new Map(order.map((held, i) => [held, i]));
+		const found = order.map((held) => users(held).map((user) => places.get(user)!));
+		const from = new Int32Array(order.length + 1);
+		found.forEach((places, i) => (from[i + 1] = from[i]! + places.length));
+		return {
+			order,
+			seeds: [...seeds].map((held) => places.get(held)!),
+			cyclic: order.flatMap((held, i) => (held.cyclic || held.wasCyclic ? [i] : [])),
+			users: Int32Array.from(found.flat()),
+			from,
+			concerns: new Uint8Array(order.length)
+		};
 	}
 }

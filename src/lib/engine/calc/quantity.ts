@@ -16,14 +16,17 @@ type Wish = {
 	hint?: string | null;
 };
 
-/** The unit in which a figure is shown, and the sizes for which it stays that one: from ≤ |si| < below. */
-export type Showing = { text: string; unit: Unit; from: number; below: number };
+/** The unit in which a figure is shown, and the sizes for which it stays that one; null for any size. */
+export type Showing = { text: string; unit: Unit; sizes: Sizes | null };
+
+/** from ≤ |si| < below */
+type Sizes = { from: number; below: number };
 
 /** @throws Refusal where a value of this type cannot be shown so. */
 export function showing(si: number, type: ValueType, wish: Wish): Showing {
 	const chosen = wish.unit.trim();
-	const { text, from, below } = chosen
-		? { text: chosen, ...ANY_SIZE }
+	const { text, sizes } = chosen
+		? { text: chosen, sizes: null }
 		: unitFor(si, type, wish.hint ?? null);
 	const parsed = parseUnit(text);
 	if (!parsed.ok) {
@@ -40,7 +43,7 @@ export function showing(si: number, type: ValueType, wish: Wish): Showing {
 		const message = `The value is a difference of temperatures; it cannot be shown in ${text}, which has a zero of its own.`;
 		throw new Refusal('dimension', message, { remedy: 'Show it in K.', place: all(text) });
 	}
-	return { text, unit, from, below };
+	return { text, unit, sizes };
 }
 
 /** @throws Refusal where the figure in that unit is too large to tell. */
@@ -76,29 +79,28 @@ export function shown(si: number, type: ValueType, manner: Wish & { digits: numb
 	}
 }
 
-const ANY_SIZE = { from: 0, below: Infinity };
-
 /** Sizes in the hinted unit that read well in it. */
 const LEAST = 1e-2;
 const MOST = 1e5;
 
 function unitFor(si: number, type: ValueType, hint: string | null): Omit<Showing, 'unit'> {
-	if (type.scale === 'point') return { text: 'degC', ...ANY_SIZE };
+	if (type.scale === 'point') return { text: 'degC', sizes: null };
 	const size = Math.abs(si);
+	const { text, ...sizes } = preferredUnit(size, type.dimension);
 	const parsed = hint ? parseUnit(hint) : null;
-	if (!parsed?.ok || parsed.unit.offset !== 0) return preferredUnit(size, type.dimension);
+	if (!parsed?.ok || parsed.unit.offset !== 0) return { text, sizes };
 	// Bounds in SI, so that a figure which is computed anew is held against them without being converted.
 	const [least, most] = [LEAST * parsed.unit.factor, MOST * parsed.unit.factor];
-	if (size === 0) return { text: hint!, from: 0, below: Number.MIN_VALUE };
-	if (size >= least && size < most) return { text: hint!, from: least, below: most };
-	const preferred = preferredUnit(size, type.dimension);
-	return size < least
-		? {
-				...preferred,
-				from: Math.max(preferred.from, Number.MIN_VALUE),
-				below: Math.min(preferred.below, least)
-			}
-		: { ...preferred, from: Math.max(preferred.from, most) };
+	if (size === 0) return { text: hint!, sizes: { from: 0, below: Number.MIN_VALUE } };
+	if (size >= most) return { text, sizes: { ...sizes, from: Math.max(sizes.from, most) } };
+	if (size >= least) return { text: hint!, sizes: { from: least, below: most } };
+	return {
+		text,
+		sizes: {
+			from: Math.max(sizes.from, Number.MIN_VALUE),
+			below: Math.min(sizes.below, least)
+		}
+	};
 }
 
 const all = (text: string) => ({ from: 0, to: text.length });

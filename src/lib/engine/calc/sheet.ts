@@ -12,7 +12,7 @@ import type { SheetChange } from './items';
 import { Links, inOrder } from './links';
 import { nearest } from './near';
 import { objectionTo } from './objections';
-import { Plans } from './plan';
+import { Plans, run } from './plan';
 import type { ItemResult, Outcome } from './results';
 import { same } from './same';
 import type { Scope } from './scope';
@@ -56,6 +56,8 @@ class LiveSheet implements Sheet {
 	private propagatedFor = 0;
 	/** Items whose results this edit may have changed. */
 	private open: Held[] = [];
+	/** Items in whose results it moved a figure. */
+	private moved: Held[] = [];
 	/** Items whose words name what lies near an unknown symbol, which any new symbol may change. */
 	private asking = new Set<Held>();
 	private askedNear = false;
@@ -63,6 +65,7 @@ class LiveSheet implements Sheet {
 	apply(change: SheetChange): SheetAnswer {
 		this.edit += 1;
 		this.open = [];
+		this.moved = [];
 		const removed = (change.remove ?? []).filter((id) => this.held.has(id));
 		const seeds = new Set<Held>();
 		const redefined = new Set<string>();
@@ -99,7 +102,10 @@ class LiveSheet implements Sheet {
 			this.thinLimit = change.thinLimit;
 			for (const held of this.held.values()) if (held.entry.item.kind === 'check') seeds.add(held);
 		}
-		if (seeds.size > 0) this.evaluate(seeds);
+		if (seeds.size > 0) {
+			const plan = this.plans.for(seeds);
+			run(plan, (held, stirred) => (stirred ? this.evaluate(held) : this.refresh(held)));
+		}
 		return this.answer(removed.filter((id) => !this.held.has(id)));
 	}
 
@@ -141,34 +147,17 @@ class LiveSheet implements Sheet {
 		for (const held of this.asking) seeds.add(held);
 	}
 
-	private evaluate(seeds: ReadonlySet<Held>): void {
-		const { edit } = this;
-		for (const held of seeds) held.stirredBy = edit;
-		const { order, users } = this.plans.for(seeds);
-		for (const held of order) {
-			// Nothing in a cycle sees what stood there before it closed.
-			if (held.cyclic && !held.wasCyclic) for (const slot of held.slots) slot.lack([held.id]);
-		}
-		for (let i = 0; i < order.length; i += 1) {
-			const held = order[i]!;
-			const stirred = held.stirredBy === edit || held.cyclic || held.wasCyclic;
-			if (!stirred && held.dueBy !== edit) continue;
-			const refreshed = stirred ? null : held.entry.refresh(held.slots);
-			if (refreshed === 'stayed') continue;
-			const move = refreshed ? this.moved(held) : this.evaluateOne(held);
-			if (move === 'figure') for (const user of users[i]!) user.dueBy = edit;
-			else if (move === 'manner') for (const user of users[i]!) user.stirredBy = edit;
-		}
-	}
-
-	private moved(held: Held): Move {
-		held.movedBy = this.edit;
-		this.reopen(held);
+	/** The figures anew, where that does; else the whole item. */
+	private refresh(held: Held): Move {
+		const refreshed = held.entry.refresh(held.slots);
+		if (refreshed === 'stayed') return 'none';
+		if (refreshed === null) return this.evaluate(held);
+		this.moved.push(held);
 		held.spoil('all');
 		return 'figure';
 	}
 
-	private evaluateOne(held: Held): Move {
+	private evaluate(held: Held): Move {
 		this.touch(held, 'all');
 		this.askedNear = false;
 		const objection = objectionTo(held, this.links);
@@ -216,9 +205,9 @@ class LiveSheet implements Sheet {
 	}
 
 	private answer(removed: string[]): SheetAnswer {
-		const { open, edit } = this;
+		const { open, moved } = this;
 		let changed: ItemResult[] | null = null;
-		const tell = () => (changed ??= this.tell(open, edit));
+		const tell = () => (changed ??= this.tell(open, moved));
 		return {
 			removed,
 			get changed() {
@@ -227,16 +216,14 @@ class LiveSheet implements Sheet {
 		};
 	}
 
-	/** The results among those opened by an edit that are not what they were before it, in sheet order. */
-	private tell(open: Held[], edit: number): ItemResult[] {
-		const changed: ItemResult[] = [];
-		for (const held of inOrder(open)) {
-			if (held.gone) continue;
-			const result = held.read(this.links);
-			if (held.movedBy === edit || !same(result, held.before)) changed.push(result);
+	/** The results of those moved, and of those open that are not what they were before, in sheet order. */
+	private tell(open: Held[], moved: Held[]): ItemResult[] {
+		const changed = new Set(moved);
+		for (const held of open) {
+			if (!held.gone && !same(held.read(this.links), held.before)) changed.add(held);
 			held.before = null;
 		}
-		return changed;
+		return inOrder([...changed]).map((held) => held.read(this.links));
 	}
 }
 
