@@ -8,7 +8,7 @@ standard uncertainty the root of the sum of (slope times the given's uncertainty
 
     python3 tests/reference/make_uncertainty.py
 
-writes tests/reference/data/uncertainty.json. Needs python3-mpmath. Takes some seconds.
+writes tests/reference/data/uncertainty.json. Needs python3-mpmath. Takes a minute.
 """
 import json
 import random
@@ -175,10 +175,10 @@ def line(density, allowable, height, lift, reserve):
     top = RADIUS + height
     base = lift * g(RADIUS) * (1 + reserve) / stress
     area = lambda r: base * mp.exp(density * (potential(r) - potential(RADIUS)) / stress)
-    grade = [RADIUS * (synchronous / RADIUS) ** (mpf(i) / 6) for i in range(7)]
-    above = [synchronous + (top - synchronous) * (mpf(i) / 4) for i in range(5)]
-    below_mass = density * mp.quad(area, grade)
-    above_mass = density * mp.quad(area, above)
+    # Panels halve towards the synchronous radius, where a steep taper peaks.
+    halvings = [mpf(2) ** -i for i in range(14)] + [mpf(0)]
+    below_mass = density * mp.quad(area, [synchronous + (RADIUS - synchronous) * h for h in halvings])
+    above_mass = density * mp.quad(area, [synchronous + (top - synchronous) * h for h in halvings][::-1])
     counterweight = stress * area(top) / -g(top)
     return {
         "taper": area(synchronous) / base,
@@ -200,6 +200,11 @@ LINES = [
     ("1440", "1.2e10", "1.0e8", "500", "0.05"),
     ("970", "6.0e9", "6.0e7", "10", "0"),
     ("1300", "1.0e11", "3.6e7", "20000", "0"),
+    # A taper of 1e33, a top a hair above the synchronous height, a top far out, a line of gossamer.
+    ("7900", "1.0e10", "1.0e8", "20000", "0"),
+    ("1300", "1.0e11", "3.57875e7", "20000", "0"),
+    ("1300", "1.0e11", "1.5e9", "20000", "0.2"),
+    ("1300", "1.0e11", "1.0e8", "1e-6", "0"),
 ]
 SPREAD = ["0.01", "0.02", "0.001", "0.03", "0.05"]
 
@@ -211,7 +216,7 @@ def line_case(texts):
     mp.mp.dps = 30
     squares = dict.fromkeys(names, mpf(0))
     for i in range(len(xs)):
-        h = (xs[i] or mpf(1)) * mpf(10) ** -6
+        h = (xs[i] or mpf(1)) * mpf(10) ** -8
         sides = {}
         for step in (h, h / 2):
             up = line(*[*xs[:i], xs[i] + step, *xs[i + 1 :]])

@@ -149,8 +149,10 @@ describe('a text as long as allowed', () => {
 describe('a long chain', () => {
 	it('of five thousand calculations is evaluated without exhausting the stack', () => {
 		const items = Array.from({ length: 5000 }, (_, i) =>
-			calculation(`x_${i}`, i === 0 ? '1' : `x_${i - 1} + 1`)
+			calculation(`x_${i}`, i === 0 ? 'a' : `x_${i - 1} + 1`)
 		);
-		expect(resultsOf(items).get('x_4999')).toMatchObject({ outcome: { quantity: { si: 5000 } } });
+		expect(resultsOf([given('a', '1', '', '0.5'), ...items]).get('x_4999')).toMatchObject({
+			outcome: { quantity: { si: 5000, uncertainty: 0.5 } }
+		});
 	});
 });

@@ -2,7 +2,7 @@
  * Slopes of a function that is known by its values only: central differences at steps halved twice,
  * extrapolated to step 0 (Richardson; W. H. Press et al., Numerical Recipes, 3rd ed., 5.7), in the
  * logarithm of a figure that is positive, where a taper over many decades is nearly straight. The step
- * is made shorter until two extrapolations agree to 1e-7, as it must near an end of the domain.
+ * is made shorter until two extrapolations agree to 1e-9, as it must near an end of the domain.
  *
  * Told to nine digits: the differences magnify the last bit, in which platforms differ.
  */
@@ -12,7 +12,7 @@ export type Figures = (x: number) => readonly (number | null)[] | null;
 
 const FIRST_STEP = 1 / 64;
 const SHORTEST = 1e-7;
-const AGREED = 1e-7;
+const AGREED = 1e-9;
 const DIGITS = 9;
 /** A change of the whole argument that changes a figure by so small a share is none: it is rounding. */
 const NOTHING = 1e-9;
