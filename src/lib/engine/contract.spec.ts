@@ -12,16 +12,19 @@ const imported = (file: string) =>
 		([, path]) => path!
 	);
 
+/** The Sun's longitude by date: in one place, which no page's script reaches. */
+const EPHEMERIS: Record<string, string> = { 'release/sun-longitude.ts': 'astronomy-engine' };
+
 describe('the engine', () => {
-	it('imports nothing outside itself but mathjs', () => {
+	it('imports nothing outside itself but mathjs and one ephemeris', () => {
 		expect(sources.length).toBeGreaterThan(20);
 		for (const file of sources) {
 			for (const path of imported(file)) {
 				const inside =
 					path.startsWith('.') && resolve(dirname(file), path).startsWith(engine + '/');
-				expect(inside || path.startsWith('mathjs/'), `${relative(engine, file)}: ${path}`).toBe(
-					true
-				);
+				const name = relative(engine, file);
+				const allowed = path.startsWith('mathjs/') || path === EPHEMERIS[name];
+				expect(inside || allowed, `${name}: ${path}`).toBe(true);
 			}
 		}
 	});

@@ -3,7 +3,7 @@ import { choice, flag, quantity, variant, type ValueOf } from '../methods/parame
 import { Refused } from '../methods/refused';
 import { LENGTH, PURE, TIME, dimension, over } from '../quantities/dimension';
 import { BODIES, type Body } from './bodies';
-import { bodyField, moonField, type Field } from './field';
+import { bodyField, moonField, type Field, type Spheroid } from './field';
 
 const GRAVITATIONAL = dimension(0, 3, -2);
 
@@ -128,31 +128,33 @@ export type Site = ValueOf<typeof site>;
 /** Constant of gravitation, m³/(kg s²): CODATA 2018. */
 const G = 6.6743e-11;
 
-export const ofBody = ({ gm, radius, rate, j2 }: Body, withJ2: boolean): Field =>
-	bodyField({
-		gm: gm.value,
-		radius: radius.value,
-		rate: rate.value,
-		j2: withJ2 && j2 ? j2.value : 0
-	});
+export const ofBody = (body: Body, withJ2: boolean): Field => bodyField(spheroid(body, withJ2));
+
+const spheroid = ({ gm, radius, rate, j2 }: Body, withJ2: boolean): Spheroid => ({
+	gm: gm.value,
+	radius: radius.value,
+	rate: rate.value,
+	j2: withJ2 && j2 ? j2.value : 0
+});
 
 /** @throws Refused where no line can stand. */
 export function fieldOf(place: Site): Field {
-	const field = place.kind === 'moon' ? moonLine(place) : bodyLine(place);
+	const field = place.kind === 'moon' ? moonLine(place) : bodyField(spheroidOf(place));
 	if (field.balance > field.base * (1 + 1e-9)) return field;
 	throw new Refused('The balance radius lies inside the body: nothing holds a line up.', {
 		remedy: 'Look at the rate of rotation, the radius and the gravitational parameter.'
 	});
 }
 
-function bodyLine(place: Site & { kind: 'body' | 'own' }): Field {
-	if (place.kind === 'body') return ofBody(BODIES[place.body], place.j2);
+/** The one body that a line stands on. */
+export function spheroidOf(place: Site & { kind: 'body' | 'own' }): Spheroid {
+	if (place.kind === 'body') return spheroid(BODIES[place.body], place.j2);
 	const gm = oneOf('site', { gm: place.gm, mass: place.mass && place.mass * G });
 	const rate = oneOf('site', {
 		rate: place.rate,
 		period: place.period && (2 * Math.PI) / place.period
 	});
-	return bodyField({ gm, radius: place.radius, rate, j2: place.j2 });
+	return { gm, radius: place.radius, rate, j2: place.j2 };
 }
 
 function moonLine(place: Site & { kind: 'moon' }): Field {

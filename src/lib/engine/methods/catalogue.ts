@@ -2,7 +2,14 @@
 import { asBuilt } from './as-built';
 import type { AnyMethod } from './method';
 import { climberEnvelope } from './climber-envelope';
+import { cutRate } from './cut-rate';
 import { field } from './field';
+import { reach } from './reach';
+import { release } from './release';
+import { releaseCalendar } from './release-calendar';
+import { severedLine } from './severed-line';
+import { spinningAsBuilt } from './spinning-as-built';
+import { spinningTether } from './spinning-tether';
 import { steppedLine } from './stepped-line';
 import { taper } from './taper';
 import { uniformLine } from './uniform-line';
@@ -13,7 +20,14 @@ const ALL: readonly AnyMethod[] = [
 	taper,
 	steppedLine,
 	asBuilt,
-	climberEnvelope
+	climberEnvelope,
+	release,
+	reach,
+	releaseCalendar,
+	severedLine,
+	cutRate,
+	spinningTether,
+	spinningAsBuilt
 ];
 
 export const METHODS: ReadonlyMap<string, AnyMethod> = new Map(
