@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { amount, marginWords, outcomeWords } from './figures';
+import { amount, marginUncertainty, marginWords, outcomeWords } from './figures';
 
 // U+202F between value and unit and U+2212 for minus: ISO 80000-1, 7.3 and the sheet's grammar.
 test('a margin as a ratio has a sign and three decimals', () => {
@@ -10,6 +10,12 @@ test('a margin as a ratio has a sign and three decimals', () => {
 
 test('a margin as a difference carries its unit', () => {
 	expect(marginWords({ kind: 'difference', value: -2.8, unit: 'GPa' })).toBe('\u22122.80\u202fGPa');
+});
+
+test('a margin tells its standard uncertainty to two digits, in its unit', () => {
+	const margin = { kind: 'difference', value: 3, unit: 'GPa', relative: 0.1 } as const;
+	expect(marginUncertainty({ ...margin, uncertainty: 0.0512 })).toBe('±\u202f0.051\u202fGPa');
+	expect(marginUncertainty({ ...margin, uncertainty: null })).toBe('');
 });
 
 test('a pure number stands without a unit', () => {

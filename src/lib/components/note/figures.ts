@@ -39,6 +39,12 @@ export function marginWords(margin: Margin): string {
 	return sign + (size < 1000 ? size.toFixed(3) : formatFigure(size, 4));
 }
 
+/** ± its standard uncertainty; empty where that is exact or not known. */
+export function marginUncertainty(margin: NonNullable<CheckResult['margin']>): string {
+	if (!margin.uncertainty) return '';
+	return `±${THIN_SPACE}${amount({ value: margin.uncertainty, unit: margin.unit }, 2)}`;
+}
+
 /** What the line does beside a row. */
 export type Strand = { state: 'plain' | CheckState; margin: number | null };
 

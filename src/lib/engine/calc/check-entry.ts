@@ -1,8 +1,17 @@
 /** A check in the sheet. It defines nothing. */
-import { decideCheck, evaluateParts, refreshParts, type CheckFormulas } from './check';
+import {
+	UNCERTAIN,
+	decideCheck,
+	evaluateParts,
+	linearParts,
+	refreshParts,
+	type CheckFormulas,
+	type Uncertain
+} from './check';
 import type { Entry, Refreshed, ResultLinks } from './entry';
 import { Formula } from './formula';
 import type { CheckItem } from './items';
+import type { Linear } from './linear';
 import type { CheckResult } from './results';
 import type { Scope } from './scope';
 import type { Slot } from './slot';
@@ -11,7 +20,8 @@ export class CheckEntry implements Entry {
 	readonly symbol = '';
 	readonly defines: readonly string[] = [];
 	readonly mentions: readonly string[];
-	readonly width = 0;
+	/** Nothing names them: they hold uncertainties. */
+	readonly width = UNCERTAIN.length;
 	private formulas: CheckFormulas;
 	private thinLimit = 0;
 
@@ -35,10 +45,26 @@ export class CheckEntry implements Entry {
 		return refreshParts(this.item, this.formulas);
 	}
 
-	linear = () => [];
+	linear(isUncertain: (slot: Slot) => boolean): (Linear | null)[] {
+		const parts = linearParts(this.item, this.formulas, isUncertain);
+		if (parts.every((part) => part === null)) return parts;
+		const body = this.decide(EXACT);
+		const told = UNCERTAIN.map((name) =>
+			name === 'margin' ? body.margin !== null : body[name]?.state === 'value'
+		);
+		return parts.map((part, i) => (told[i] ? part : null));
+	}
 
-	result(_slots: readonly Slot[], links: ResultLinks): CheckResult {
-		const { item, formulas, thinLimit } = this;
-		return { id: item.id, kind: 'check', ...decideCheck(item, formulas, thinLimit), ...links };
+	result(slots: readonly Slot[], links: ResultLinks): CheckResult {
+		const uncertain = Object.fromEntries(
+			UNCERTAIN.map((name, i) => [name, slots[i]!.uncertainty])
+		) as Uncertain;
+		return { id: this.item.id, kind: 'check', ...this.decide(uncertain), ...links };
+	}
+
+	private decide(uncertain: Uncertain) {
+		return decideCheck(this.item, this.formulas, this.thinLimit, uncertain);
 	}
 }
+
+const EXACT: Uncertain = { left: null, right: null, tolerance: null, margin: null };

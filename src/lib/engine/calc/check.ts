@@ -7,10 +7,12 @@ import type { Refreshed } from './entry';
 import type { Formula, FormulaOutcome } from './formula';
 import type { ValueType } from './infer';
 import type { CheckItem } from './items';
-import { marginKind, marginOf } from './margin';
-import { DEFAULT_DIGITS, shown } from './quantity';
+import { joined, type Linear } from './linear';
+import { marginKind, marginOf, marginSlopes } from './margin';
+import { DEFAULT_DIGITS, shown, uncertaintyIn, withUncertainty } from './quantity';
 import type { CheckResult, Fault, Outcome } from './results';
 import type { Scope } from './scope';
+import type { Slot } from './slot';
 
 export type CheckFormulas = Record<'left' | 'right' | 'tolerance' | 'required', Formula>;
 type Body = Omit<CheckResult, 'id' | 'kind' | 'uses' | 'usedIn'>;
@@ -49,17 +51,48 @@ const partsRead = (relation: CheckItem['relation']): (keyof CheckFormulas)[] =>
 		? ['left', 'right', 'tolerance', 'required']
 		: ['left', 'right', 'required'];
 
+/** How the sides and the margin follow from what is named, in the order of `UNCERTAIN`. */
+export function linearParts(
+	{ relation }: CheckItem,
+	formulas: CheckFormulas,
+	isUncertain: (slot: Slot) => boolean
+): (Linear | null)[] {
+	const names = ['left', 'right', 'tolerance'] as const;
+	const [left, right, tolerance] = names.map((name) => {
+		const { outcome } = formulas[name];
+		return outcome.state === 'value' ? outcome.si : 0;
+	}) as [number, number, number];
+	const slopes = marginSlopes({ relation, left, right, tolerance, required: 0, pure: false });
+	const sides = names.map((name) => formulas[name].linear(isUncertain));
+	const uncertain = sides.flatMap((side, i) => (side ? [{ side, slope: slopes[i]! }] : []));
+	if (uncertain.length === 0) return [null, null, null, null];
+	const margin = joined(
+		uncertain.map(({ side }) => side),
+		uncertain.map(({ slope }) => slope)
+	);
+	return [...sides, margin];
+}
+
+/** Standard uncertainties in SI. */
+export type Uncertain = Record<'left' | 'right' | 'tolerance' | 'margin', number | null>;
+export const UNCERTAIN = ['left', 'right', 'tolerance', 'margin'] as const;
+
 /** What the check says, from its parts as they were evaluated last. */
-export function decideCheck(item: CheckItem, formulas: CheckFormulas, thinLimit: number): Body {
+export function decideCheck(
+	item: CheckItem,
+	formulas: CheckFormulas,
+	thinLimit: number,
+	uncertain: Uncertain
+): Body {
 	const left = formulas.left.outcome;
 	const right = formulas.right.outcome;
 	const tolerance = item.relation === 'within' ? formulas.tolerance.outcome : null;
 	const required = formulas.required.blank ? null : formulas.required.outcome;
 	const waiting: Body = {
 		state: 'waits',
-		left: alone(left),
-		right: alone(right),
-		tolerance: tolerance && alone(tolerance),
+		left: alone(left, uncertain.left),
+		right: alone(right, uncertain.right),
+		tolerance: tolerance && alone(tolerance, uncertain.tolerance),
 		required: 0,
 		margin: null,
 		shortBy: null,
@@ -71,13 +104,15 @@ export function decideCheck(item: CheckItem, formulas: CheckFormulas, thinLimit:
 	if (left.state !== 'value' || right.state !== 'value') return waiting;
 	if (tolerance && tolerance.state !== 'value') return waiting;
 	if (required && required.state !== 'value') return waiting;
-	return decide(item, formulas, { left, right, tolerance, required }, thinLimit, waiting);
+	const figures = { left, right, tolerance, required };
+	return decide(item, formulas, figures, thinLimit, uncertain, waiting);
 }
 
 /** A side shown by itself, in a unit of its own. */
-function alone(side: FormulaOutcome): Outcome {
+function alone(side: FormulaOutcome, uncertainty: number | null): Outcome {
 	if (side.state !== 'value') return side;
-	return shown(side.si, side.type, { unit: '', hint: side.unit, digits: digitsOf(side) });
+	const manner = { unit: '', hint: side.unit, digits: digitsOf(side) };
+	return withUncertainty(shown(side.si, side.type, manner), uncertainty);
 }
 
 const digitsOf = (side: Value) => side.digits ?? DEFAULT_DIGITS;
@@ -87,6 +122,7 @@ function decide(
 	formulas: CheckFormulas,
 	figures: Figures,
 	thinLimit: number,
+	uncertain: Uncertain,
 	waiting: Body
 ): Body {
 	const { left, right, tolerance, required } = figures;
@@ -95,11 +131,12 @@ function decide(
 	if (misfit) return { ...waiting, faults: [misfit] };
 
 	const unit = commonUnit(lead, left);
-	const show = (side: Value) => shown(side.si, lead.type, { unit, digits: digitsOf(side) });
+	const show = (side: Value, uncertainty: number | null) =>
+		withUncertainty(shown(side.si, lead.type, { unit, digits: digitsOf(side) }), uncertainty);
 	const sides = {
-		left: show(left),
-		right: show(right),
-		tolerance: tolerance && show(tolerance)
+		left: show(left, uncertain.left),
+		right: show(right, uncertain.right),
+		tolerance: tolerance && show(tolerance, uncertain.tolerance)
 	};
 	const given = {
 		relation: item.relation,
@@ -127,6 +164,7 @@ function decide(
 			kind: margin.kind,
 			value: ratio ? margin.size : inUnit(margin.size),
 			unit: ratio ? '' : unit,
+			uncertainty: ratio ? uncertain.margin : spread(uncertain.margin, unit),
 			relative: margin.relative
 		},
 		shortBy: holds ? null : { value: inUnit(margin.shortBy), unit },
@@ -143,6 +181,11 @@ function commonUnit(lead: Value, left: Value): string {
 		digits: DEFAULT_DIGITS
 	});
 	return measure.state === 'value' ? measure.quantity.unit : '';
+}
+
+function spread(uncertainty: number | null, unit: string): number | null {
+	const parsed = parseUnit(unit);
+	return parsed.ok ? uncertaintyIn(uncertainty, parsed.unit) : null;
 }
 
 /** A length of the scale, without its zero: 10 K is 10 °C apart. */

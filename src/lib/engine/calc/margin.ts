@@ -45,5 +45,19 @@ export function marginOf(sides: Sides): Margin {
 	return { kind: 'ratio', size: told(size), relative: told(size), shortBy: told(shortBy) };
 }
 
+/**
+ * Slopes of the margin by left, right and tolerance. Within a tolerance it has its corner where both sides
+ * are equal; there its size to either side is taken.
+ */
+export function marginSlopes(sides: Sides): [left: number, right: number, tolerance: number] {
+	const { relation, left, right, tolerance } = sides;
+	const ratio = marginKind(sides) === 'ratio';
+	if (relation === 'le') return ratio ? [-right / left / left, 1 / left, 0] : [-1, 1, 0];
+	if (relation === 'ge') return ratio ? [1 / right, -left / right / right, 0] : [1, -1, 0];
+	const away = left < right ? -1 : 1;
+	if (!ratio) return [-away, away, 0];
+	return [-away / tolerance, away / tolerance, Math.abs(left - right) / tolerance / tolerance];
+}
+
 /** A ratio of the largest to the smallest figure leaves the range of numbers. */
 const told = (value: number) => Math.max(-1e300, Math.min(1e300, value));

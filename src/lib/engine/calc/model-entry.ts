@@ -1,6 +1,5 @@
 /** A line model in the sheet: its symbol is no quantity, its outputs are. */
 import { slopesOf } from '../numerics/slope';
-import { parseUnit } from '../quantities/units';
 import type { Entry, ResultLinks } from './entry';
 import { Formula } from './formula';
 import { valueType } from './infer';
@@ -16,8 +15,8 @@ import {
 	type ModelValues
 } from './line-model';
 import { OUTPUTS } from './model-outputs';
-import { uncertaintyIn } from './quantity';
-import type { Fault, LineModelResult, ModelOutput } from './results';
+import { withUncertainty } from './quantity';
+import type { Fault, LineModelResult } from './results';
 import type { Scope } from './scope';
 import type { Slot } from './slot';
 import { readSymbol } from './symbol';
@@ -71,8 +70,8 @@ export class ModelEntry implements Entry {
 			parts.push(part);
 			slopes.push(this.slopesBy(field));
 		}
-		const outputs = OUTPUTS.map((_, output) => {
-			if (parts.length === 0) return null;
+		const outputs = this.model!.outputs.map(({ outcome }, output) => {
+			if (parts.length === 0 || outcome.state !== 'value') return null;
 			return joined(
 				parts,
 				slopes.map((by) => by[output]!)
@@ -99,7 +98,10 @@ export class ModelEntry implements Entry {
 	result(slots: readonly Slot[], links: ResultLinks): LineModelResult {
 		const { item } = this;
 		const model = this.model!;
-		const outputs = model.outputs.map((output, i) => withUncertainty(output, slots[i + 1]!));
+		const outputs = model.outputs.map((output, i) => ({
+			...output,
+			outcome: withUncertainty(output.outcome, slots[i + 1]!.uncertainty)
+		}));
 		return {
 			id: item.id,
 			kind: 'lineModel',
@@ -109,13 +111,4 @@ export class ModelEntry implements Entry {
 			...links
 		};
 	}
-}
-
-function withUncertainty(output: ModelOutput, { uncertainty }: Slot): ModelOutput {
-	const { outcome } = output;
-	if (outcome.state !== 'value' || uncertainty === null) return output;
-	const { quantity } = outcome;
-	const parsed = parseUnit(quantity.unit);
-	const inUnit = parsed.ok ? uncertaintyIn(uncertainty, parsed.unit) : null;
-	return { ...output, outcome: { state: 'value', quantity: { ...quantity, uncertainty: inUnit } } };
 }

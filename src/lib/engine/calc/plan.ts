@@ -63,11 +63,14 @@ export class Plans {
 
 	/** Marks what stands in a cycle. */
 	for(seeds: ReadonlySet<Held>): Plan {
-		if (this.version !== this.links.version || this.kept.size >= MOST) this.kept.clear();
+		if (this.version !== this.links.version) this.kept.clear();
 		this.version = this.links.version;
 		if (seeds.size > 1) return this.make(seeds);
 		const [only] = seeds;
-		const plan = this.kept.get(only!) ?? this.make(seeds);
+		const known = this.kept.get(only!);
+		if (known) return known;
+		if (this.kept.size >= MOST) this.kept.clear();
+		const plan = this.make(seeds);
 		this.kept.set(only!, plan);
 		return plan;
 	}

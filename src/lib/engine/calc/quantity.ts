@@ -60,6 +60,15 @@ export function uncertaintyIn(uncertainty: number | null, unit: Unit): number | 
 	return size <= LARGEST ? size : null;
 }
 
+/** The outcome with its standard uncertainty, in SI. */
+export function withUncertainty(outcome: Outcome, uncertainty: number | null): Outcome {
+	if (outcome.state !== 'value' || uncertainty === null) return outcome;
+	const { quantity } = outcome;
+	const parsed = parseUnit(quantity.unit);
+	const inUnit = parsed.ok ? uncertaintyIn(uncertainty, parsed.unit) : null;
+	return { state: 'value', quantity: { ...quantity, uncertainty: inUnit } };
+}
+
 /** The value in the unit to show, or why it cannot be shown in it. */
 export function shown(si: number, type: ValueType, manner: Wish & { digits: number }): Outcome {
 	try {

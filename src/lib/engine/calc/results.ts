@@ -94,6 +94,8 @@ export type CheckResult = Common & {
 		kind: 'ratio' | 'difference';
 		value: number;
 		unit: string;
+		/** Standard uncertainty in `unit`; null means exact or not known. Baselines of engine 1 lack it. */
+		uncertainty?: number | null;
 		/** The margin as a pure number: what the thin limit and the width of the line go by. */
 		relative: number;
 	} | null;

@@ -112,7 +112,8 @@ class LiveSheet implements Sheet {
 	uncertainties(): ItemResult[] {
 		if (this.propagatedFor === this.edit) return [];
 		this.propagatedFor = this.edit;
-		const changed = propagate(this.plans.whole(this.held.values()).order);
+		const { order } = this.plans.whole(this.held.values());
+		const changed = propagate(order);
 		for (const held of changed) held.spoil('all');
 		return inOrder(changed).map((held) => held.read(this.links));
 	}

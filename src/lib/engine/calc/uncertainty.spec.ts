@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
-import { calculation, given, lineModel } from './items.fixture';
+import { calculation, check, given, lineModel } from './items.fixture';
 import type { SheetItem } from './items';
-import type { ItemResult } from './results';
+import type { CheckResult, ItemResult } from './results';
 import { createSheet } from './sheet';
 
 const a = given('a', '20', 'GPa', '0.3');
@@ -90,6 +90,35 @@ describe('the standard uncertainty of a quantity', () => {
 			2 * Math.sqrt(150),
 			9
 		);
+	});
+});
+
+describe('the standard uncertainty of a check', () => {
+	const sheetWith = (...args: Parameters<typeof check>) =>
+		sheetOf([a, b, check(...args)])
+			.results()
+			.find(({ id }) => id === 'check') as CheckResult;
+
+	it('is that of its sides and of its margin', () => {
+		const { left, right, margin } = sheetWith('b', 'le', 'a');
+		expect(left).toMatchObject({ quantity: { uncertainty: 0.4 } });
+		expect(right).toMatchObject({ quantity: { uncertainty: 0.3 } });
+		// a/b − 1
+		expect(margin!.uncertainty).toBeCloseTo((20 / 5) * Math.hypot(0.3 / 20, 0.4 / 5), 12);
+		expect(sheetWith('a', 'ge', 'b').margin!.uncertainty).toBeCloseTo(margin!.uncertainty!, 12);
+	});
+
+	it('counts what the sides have in common once', () => {
+		expect(sheetWith('a', 'le', '2 a').margin!.uncertainty).toBeNull();
+	});
+
+	it('is in the unit of a difference, and a share of the tolerance', () => {
+		const difference = sheetWith('-b', 'le', 'a').margin!;
+		expect(difference).toMatchObject({ kind: 'difference', unit: 'GPa' });
+		expect(difference.uncertainty).toBeCloseTo(0.5, 12);
+		const within = sheetWith('a', 'within', '18 GPa', { tolerance: 'b' }).margin!;
+		// 1 − |a − 18|/b
+		expect(within.uncertainty).toBeCloseTo(Math.hypot(0.3 / 5, (2 * 0.4) / 25), 12);
 	});
 });
 

@@ -15,30 +15,23 @@ import type { Slot } from './slot';
 /** Givens taken at once: rows stay short however many givens are uncertain. */
 const BLOCK = 64;
 
-/** Sets the uncertainty of every slot; returns the items where it changed. `order` has all, suppliers first. */
+/** Sets the uncertainty of every slot; returns the items where one changed. `order` has all, suppliers first. */
 export function propagate(order: readonly Held[]): Held[] {
-	const sheet = new Rows();
-	const derived: { held: Held; slots: readonly Slot[] }[] = [];
-	for (const held of order) {
-		if (held.entry.item.kind === 'given') sheet.addGiven(held.slots[0]!);
+	const rows = new Rows();
+	const isUncertain = (slot: Slot) => rows.has(slot);
+	for (const { entry, slots } of order) {
+		if (entry.item.kind === 'given') rows.addGiven(slots[0]!);
 		else {
-			const links = held.entry.linear((slot) => sheet.has(slot));
-			held.slots.forEach((slot, i) => slot.manner && links[i] && sheet.add(slot, links[i]));
-			derived.push({ held, slots: held.slots });
+			entry.linear(isUncertain).forEach((linear, i) => linear && rows.add(slots[i]!, linear));
 		}
 	}
-	const found = sheet.uncertainties();
-	const moved = ({ slots }: { slots: readonly Slot[] }) => {
-		let moved = false;
-		for (const slot of slots) {
-			const uncertainty = found.get(slot) ?? null;
-			if (slot.uncertainty === uncertainty) continue;
-			slot.uncertainty = uncertainty;
-			moved = true;
-		}
-		return moved;
-	};
-	return derived.filter(moved).map(({ held }) => held);
+	const found = rows.uncertainties();
+	return order.filter(({ entry, slots }) => {
+		if (entry.item.kind === 'given') return false;
+		const moved = slots.filter((slot) => slot.uncertainty !== (found.get(slot) ?? null));
+		for (const slot of moved) slot.uncertainty = found.get(slot) ?? null;
+		return moved.length > 0;
+	});
 }
 
 class Rows {
