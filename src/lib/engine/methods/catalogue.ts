@@ -1,6 +1,5 @@
 /** All methods, by the name under which they are called. */
 import { asBuilt } from './as-built';
-import type { AnyMethod } from './method';
 import { climberEnvelope } from './climber-envelope';
 import { cutRate } from './cut-rate';
 import { field } from './field';
@@ -10,8 +9,12 @@ import { releaseCalendar } from './release-calendar';
 import { severedLine } from './severed-line';
 import { spinningAsBuilt } from './spinning-as-built';
 import { spinningTether } from './spinning-tether';
+import type { AnyMethod } from './method';
+import { periods } from './periods';
+import { sideDisplacement } from './side-displacement';
 import { steppedLine } from './stepped-line';
 import { taper } from './taper';
+import { transit } from './transit';
 import { uniformLine } from './uniform-line';
 
 const ALL: readonly AnyMethod[] = [
@@ -27,7 +30,10 @@ const ALL: readonly AnyMethod[] = [
 	severedLine,
 	cutRate,
 	spinningTether,
-	spinningAsBuilt
+	spinningAsBuilt,
+	transit,
+	sideDisplacement,
+	periods
 ];
 
 export const METHODS: ReadonlyMap<string, AnyMethod> = new Map(
