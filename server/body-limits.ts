@@ -8,6 +8,10 @@ const KB = 1024;
 /** Forms and JSON. */
 const LIMIT = 512 * KB;
 
+/** Notes in interchange, tables of sections. */
+const COMPUTING = /^\/api\/(v1|methods)\//;
+const COMPUTING_LIMIT = 4096 * KB;
+
 const UPLOAD = /^\/api\/notes\/[^/?]+\/evidence(\?|$)/;
 
 type Refusal = { send(response: ServerResponse): void };
@@ -21,7 +25,8 @@ export function bodyRefusal(request: IncomingMessage, evidenceMaxMb: number): Re
 		if (isUpload || !request.headers['transfer-encoding']) return null;
 		return refusal(411, 'The request does not say how long it is (Content-Length).');
 	}
-	const limit = isUpload ? evidenceMaxMb * KB * KB : LIMIT;
+	const plain = COMPUTING.test(request.url ?? '') ? COMPUTING_LIMIT : LIMIT;
+	const limit = isUpload ? evidenceMaxMb * KB * KB : plain;
 	if (Number(length) <= limit) return null;
 	const most = isUpload ? `${evidenceMaxMb} MB` : `${limit / KB} kB`;
 	return refusal(413, `The request carries more than ${most}.`);

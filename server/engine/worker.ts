@@ -1,14 +1,10 @@
-/** The engine in a worker thread of the server: a whole note in, all its results out. */
+/** The engine in a worker thread of the server: a whole note, or one method by its name. */
 import type { MessagePort } from 'node:worker_threads';
-import type { SheetChange } from '../../src/lib/engine/calc/items';
-import type { ItemResult } from '../../src/lib/engine/calc/results';
-import { createSheet } from '../../src/lib/engine/calc/sheet';
+import { run, type EngineTask } from '../../src/lib/engine-task';
 
-type Task = { input: SheetChange; begun: MessagePort };
+type Task = { input: EngineTask; begun: MessagePort };
 
-export default function evaluate({ input, begun }: Task): ItemResult[] {
+export default function work({ input, begun }: Task) {
 	begun.postMessage(null);
-	const sheet = createSheet();
-	sheet.apply(input);
-	return sheet.results();
+	return run(input);
 }

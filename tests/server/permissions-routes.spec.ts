@@ -31,6 +31,8 @@ const READ = '  303 404 404 +   +   +   +';
 const WRITE = ' 303 404 404 403 403 +   +';
 const LEAD = '  303 404 404 403 403 403 +';
 const API_PERSON = '401 +   +   +   +   +   +';
+// Programs ask with a token; a session opens nothing there.
+const TOKEN = '     401 401 401 401 401 401 401';
 const API_READ = '  401 404 404 +   +   +   +';
 const API_REVIEW = '401 404 404 403 +   +   +';
 const API_WRITE = ' 401 404 404 403 403 +   +';
@@ -59,9 +61,17 @@ const EXPECTED: Record<string, string> = {
 	'load /account': PERSON,
 	'?/rename /account': PERSON,
 	'?/password /account': PERSON,
+	'?/makeToken /account': PERSON,
+	'?/revokeToken /account': PERSON,
 	'?/signOut /account': LEAVE,
 	'?/signOutEverywhere /account': LEAVE,
 	'GET /api/today': API_PERSON,
+	'POST /api/methods/[name]': API_PERSON,
+	'GET /api/v1/methods': TOKEN,
+	'GET /api/v1/methods/[name]': TOKEN,
+	'POST /api/v1/methods/[name]': TOKEN,
+	'POST /api/v1/evaluate': TOKEN,
+	'GET /api/v1/schemas/note': TOKEN,
 
 	'load /administration': SITE,
 	'?/create /administration': SITE,

@@ -20,12 +20,15 @@ export type FormAnswer = {
 
 const SECRET = /password/i;
 
-/** `work` may throw a Problem, which is shown at the form, or a redirect. */
+/**
+ * `work` may throw a Problem, which is shown at the form, or a redirect. What it answers with stands in
+ * the details, for what is to be seen this once.
+ */
 export async function answerForm<S extends z.ZodObject>(
 	request: Request,
 	form: string,
 	schema: S,
-	work: (data: z.infer<S>) => Promise<void>
+	work: (data: z.infer<S>) => Promise<void | Record<string, unknown>>
 ): Promise<FormAnswer | ActionFailure<FormAnswer>> {
 	const posted = Object.fromEntries(await request.formData());
 	const typed = Object.fromEntries(
@@ -45,7 +48,7 @@ export async function answerForm<S extends z.ZodObject>(
 	if (!parsed.success)
 		return fail(422, { ...answer, errors: z.flattenError(parsed.error).fieldErrors });
 	try {
-		await work(parsed.data);
+		answer.details = (await work(parsed.data)) ?? {};
 	} catch (problem) {
 		if (!(problem instanceof Problem)) throw problem;
 		const { status, message, details } = problem;

@@ -7,7 +7,9 @@ export class Problem extends Error {
 		/** What is wrong, naming the thing and the reason. */
 		message: string,
 		/** Further members of the problem document, e.g. the list of failing checks. */
-		readonly details: Record<string, unknown> = {}
+		readonly details: Record<string, unknown> = {},
+		/** Headers of the answer, e.g. how long to wait. */
+		readonly headers: Record<string, string> = {}
 	) {
 		super(message);
 	}
@@ -26,7 +28,7 @@ const TITLES: Record<Problem['status'], string> = {
 	503: 'Not available just now'
 };
 
-export function problemResponse(problem: Problem, headers: HeadersInit = {}): Response {
+export function problemResponse(problem: Problem): Response {
 	const body = {
 		type: 'about:blank',
 		title: TITLES[problem.status],
@@ -36,6 +38,6 @@ export function problemResponse(problem: Problem, headers: HeadersInit = {}): Re
 	};
 	return new Response(JSON.stringify(body), {
 		status: problem.status,
-		headers: { 'content-type': 'application/problem+json', ...headers }
+		headers: { 'content-type': 'application/problem+json', ...problem.headers }
 	});
 }

@@ -1,11 +1,11 @@
 /** What a request says, in the shape that a route takes; what is wrong with it is said field by field. */
-import type { z } from 'zod';
+import { core } from 'zod';
 import { Problem } from './problems';
 
-export async function readJson<T extends z.ZodType>(
+export async function readJson<T extends core.$ZodType>(
 	request: Request,
 	schema: T
-): Promise<z.output<T>> {
+): Promise<core.output<T>> {
 	let body: unknown;
 	try {
 		body = await request.json();
@@ -15,12 +15,12 @@ export async function readJson<T extends z.ZodType>(
 	return parsed(body, schema);
 }
 
-export function readQuery<T extends z.ZodType>(url: URL, schema: T): z.output<T> {
+export function readQuery<T extends core.$ZodType>(url: URL, schema: T): core.output<T> {
 	return parsed(Object.fromEntries(url.searchParams), schema);
 }
 
-function parsed<T extends z.ZodType>(value: unknown, schema: T): z.output<T> {
-	const found = schema.safeParse(value);
+function parsed<T extends core.$ZodType>(value: unknown, schema: T): core.output<T> {
+	const found = core.safeParse(schema, value);
 	if (found.success) return found.data;
 	const errors = found.error.issues.map(({ path, message }) => ({
 		field: path.join('.'),

@@ -31,6 +31,11 @@ export const resetsOfNetwork = limiter('reset-network', 20, 60 * MINUTE);
 /** Links of invitations and resets opened from one network: guessing one is hopeless, and stays so. */
 export const linksOfNetwork = limiter('link', 120, 15 * MINUTE);
 
+/** Questions of one token to the API: 120 a minute. */
+export const questionsOfToken = limiter('token', 120, MINUTE);
+/** Tokens that open nothing, from one network. */
+export const wrongTokensOfNetwork = limiter('token-network', 60, 15 * MINUTE);
+
 export type Taken = { left: number; until: null } | { left: 0; until: Date };
 
 /** Counts one try; `until` says when the next is taken where this one was too many. */

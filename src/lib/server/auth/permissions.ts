@@ -37,6 +37,17 @@ const PROGRAMME = {
 /** Actions on the site as a whole, for its administrator. */
 const SITE = ['programme.create', 'accounts.read', 'accounts.invite'] as const;
 
+/** Actions of a program that asks the API with a token, with the scopes that include them. */
+const API = {
+	'methods.read': ['read', 'evaluate'],
+	'methods.run': ['evaluate'],
+	'note.evaluate': ['evaluate']
+} as const satisfies Record<string, readonly TokenScope[]>;
+
+export type TokenScope = 'read' | 'evaluate';
+export type ApiAction = keyof typeof API;
+export const API_ACTIONS = Object.keys(API) as ApiAction[];
+
 export type ProgrammeAction = keyof typeof PROGRAMME;
 export type SiteAction = (typeof SITE)[number];
 
@@ -46,6 +57,10 @@ export const SITE_ACTIONS: readonly SiteAction[] = SITE;
 /** Whether somebody with `role` in the programme (null: no member) may take the action. */
 export function may(role: Role | null, action: ProgrammeAction): boolean {
 	return role !== null && (PROGRAMME[action] as readonly Role[]).includes(role);
+}
+
+export function mayWithToken(scope: TokenScope, action: ApiAction): boolean {
+	return (API[action] as readonly TokenScope[]).includes(scope);
 }
 
 export function mayOnSite(person: { isAdministrator: boolean }, _action: SiteAction): boolean {

@@ -74,6 +74,29 @@ export const passwordReset = pgTable('password_reset', {
 	createdAt: createdAt()
 });
 
+export const tokenScope = pgEnum('token_scope', ['read', 'evaluate']);
+
+/** What lets a program ask the API for a person; only the token's SHA-256 is kept. */
+export const apiToken = pgTable(
+	'api_token',
+	{
+		id: uuid('id').primaryKey().defaultRandom(),
+		userId: uuid('user_id')
+			.notNull()
+			.references(() => user.id, { onDelete: 'cascade' }),
+		name: text('name').notNull(),
+		scope: tokenScope('scope').notNull(),
+		tokenHash: text('token_hash').notNull().unique(),
+		/** First letters of the token, by which its owner knows it again. */
+		begins: text('begins').notNull(),
+		expiresAt: moment('expires_at'),
+		/** To a minute. */
+		lastUsedAt: moment('last_used_at'),
+		createdAt: createdAt()
+	},
+	(t) => [index('api_token_user').on(t.userId)]
+);
+
 /** Tries counted against a limit; `key` holds digests of addresses, `expire` is in milliseconds. */
 export const rateLimit = pgTable('rate_limit', {
 	key: varchar('key', { length: 255 }).primaryKey(),

@@ -4,18 +4,20 @@ import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { bundleEngineWorker } from '../../../../server/engine/bundle';
 import type { SheetChange } from '$lib/engine/calc/items';
+import type { EngineTask } from '$lib/engine-task';
 import { createSheet } from '$lib/engine/calc/sheet';
-import type { ItemResult } from '$lib/engine/calc/results';
+import { answer } from '$lib/engine/methods/method';
+import { uniformLine } from '$lib/engine/methods/uniform-line';
 import { EnginePool } from './pool';
 
 const folder = mkdtempSync(join(tmpdir(), 'holdfast-engine-'));
 afterAll(() => rmSync(folder, { recursive: true }));
 
-const limits = { milliseconds: 2000, megabytes: 256, threads: 1 };
+const limits = { subject: 'The note', milliseconds: 2000, megabytes: 256, threads: 1 };
 
 describe('the engine on the server', () => {
 	const worker = join(folder, 'worker.mjs');
-	let pool: EnginePool<SheetChange, ItemResult[]>;
+	let pool: EnginePool<EngineTask, unknown>;
 	beforeAll(async () => {
 		await bundleEngineWorker(worker);
 		pool = new EnginePool({ ...limits, worker });
@@ -32,7 +34,15 @@ describe('the engine on the server', () => {
 		};
 		const here = createSheet();
 		here.apply(note);
-		expect(await pool.run(note)).toEqual(here.results());
+		expect(await pool.run({ kind: 'note', change: note })).toEqual(here.results());
+	});
+
+	it('answers a method by its name, a refusal as well', async () => {
+		const site = { kind: 'body', body: 'earth' };
+		const input = { site, density: 1300, stress: 5e9 };
+		const run = (input: unknown) => pool.run({ kind: 'method', name: 'uniform-line', input });
+		expect(await run(input)).toEqual(answer(uniformLine, input));
+		expect(await run({ site })).toMatchObject({ ok: false, refusal: { code: 'input' } });
 	});
 });
 

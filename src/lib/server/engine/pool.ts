@@ -8,7 +8,14 @@ import { MessageChannel } from 'node:worker_threads';
 import { Piscina } from 'piscina';
 import { Problem } from '../problems';
 
-export type Limits = { worker: string; milliseconds: number; megabytes: number; threads: number };
+export type Limits = {
+	/** What is computed, as a sentence begins with it: "The note". */
+	subject: string;
+	worker: string;
+	milliseconds: number;
+	megabytes: number;
+	threads: number;
+};
 
 /** Said to the person whose note it is. */
 export class EngineLimitError extends Problem {
@@ -36,7 +43,7 @@ export class EnginePool<Input, Answer> {
 
 	/** @throws EngineLimitError when time or memory ran out. */
 	async run(input: Input): Promise<Answer> {
-		const { milliseconds, megabytes } = this.limits;
+		const { subject, milliseconds, megabytes } = this.limits;
 		const { port1: ours, port2: begun } = new MessageChannel();
 		const deadline = new AbortController();
 		let timer: NodeJS.Timeout | undefined;
@@ -49,12 +56,12 @@ export class EnginePool<Input, Answer> {
 		} catch (error) {
 			if (deadline.signal.aborted) {
 				throw new EngineLimitError(
-					`The note could not be computed within ${milliseconds / 1000} s.`
+					`${subject} could not be computed within ${milliseconds / 1000} s.`
 				);
 			}
 			if ((error as { code?: string }).code === 'ERR_WORKER_OUT_OF_MEMORY') {
 				throw new EngineLimitError(
-					`The note could not be computed within ${megabytes} MB of memory.`
+					`${subject} could not be computed within ${megabytes} MB of memory.`
 				);
 			}
 			throw error;

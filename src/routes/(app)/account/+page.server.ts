@@ -1,5 +1,11 @@
 import { redirect, type RequestEvent } from '@sveltejs/kit';
 import { z } from 'zod';
+import {
+	apiTokensOf,
+	makeApiToken,
+	newApiTokenSchema,
+	revokeApiToken
+} from '$lib/server/auth/api-tokens';
 import { requirePerson } from '$lib/server/auth/guard';
 import { newPasswordSchema } from '$lib/server/auth/new-password';
 import { countSessions } from '$lib/server/auth/sessions';
@@ -11,9 +17,14 @@ import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async (event) => {
 	const person = requirePerson(event);
-	const places = await programmesOf(person.id);
+	const [sessions, places, tokens] = await Promise.all([
+		countSessions(person.id),
+		programmesOf(person.id),
+		apiTokensOf(person.id)
+	]);
 	return {
-		sessions: await countSessions(person.id),
+		sessions,
+		tokens,
 		places: places.map(({ programme: { code, title }, role }) => ({ code, title, role }))
 	};
 };
@@ -39,6 +50,20 @@ export const actions: Actions = {
 		});
 		return answerForm(event.request, 'password', schema, ({ oldPassword, password }) =>
 			changePassword(person, sessionId, { old: oldPassword, new: password })
+		);
+	},
+
+	makeToken: (event) => {
+		const { person } = asking(event);
+		return answerForm(event.request, 'makeToken', newApiTokenSchema, async (values) => ({
+			token: await makeApiToken(person.id, values)
+		}));
+	},
+
+	revokeToken: (event) => {
+		const { person } = asking(event);
+		return answerForm(event.request, 'revokeToken', z.object({ id: z.uuid() }), ({ id }) =>
+			revokeApiToken(person.id, id)
 		);
 	},
 

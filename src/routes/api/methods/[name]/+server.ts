@@ -1,0 +1,11 @@
+import { json } from '@sveltejs/kit';
+import { z } from 'zod';
+import { requirePerson } from '$lib/server/auth/guard';
+import { callMethod } from '$lib/server/engine/methods';
+import { readJson } from '$lib/server/reading';
+
+/** For the page of the method. */
+export async function POST(event) {
+	requirePerson(event);
+	return json(await callMethod(event.params.name, await readJson(event.request, z.unknown())));
+}

@@ -1,0 +1,239 @@
+/** The API for programs: tokens, methods, notes in interchange. */
+import { beforeAll, afterAll, expect, test } from 'vitest';
+import { eq } from 'drizzle-orm';
+import './setup';
+import { cookieOf, makePerson } from './fixtures';
+
+const { db } = await import('$lib/server/db');
+const { apiToken } = await import('$lib/server/db/schema');
+const { makeApiToken, apiTokensOf, revokeApiToken } = await import('$lib/server/auth/api-tokens');
+const { closeEngine } = await import('$lib/server/engine/evaluate');
+const { handle, handleError } = await import('../../src/hooks.server');
+const routes = {
+	'/api/v1/methods': await import('../../src/routes/api/v1/methods/+server'),
+	'/api/v1/methods/[name]': await import('../../src/routes/api/v1/methods/[name]/+server'),
+	'/api/v1/evaluate': await import('../../src/routes/api/v1/evaluate/+server'),
+	'/api/v1/schemas/note': await import('../../src/routes/api/v1/schemas/note/+server')
+};
+
+type Asked = {
+	method?: 'GET' | 'POST';
+	token?: string;
+	cookie?: string;
+	name?: string;
+	body?: unknown;
+	from?: string;
+};
+
+/** Asks a route behind the hooks, as SvelteKit does. */
+async function ask(id: keyof typeof routes, asked: Asked = {}): Promise<Response> {
+	const { method = asked.body === undefined ? 'GET' : 'POST', token, cookie, name = '' } = asked;
+	const url = new URL(`http://127.0.0.1:4173${id.replace('[name]', name)}`);
+	const headers = new Headers();
+	if (token !== undefined) headers.set('authorization', `Bearer ${token}`);
+	if (cookie !== undefined) headers.set('cookie', cookie);
+	const body =
+		typeof asked.body === 'string' || asked.body === undefined
+			? asked.body
+			: JSON.stringify(asked.body);
+	const event = {
+		request: new Request(url, { method, headers, body: body as string | undefined }),
+		url,
+		params: { name },
+		route: { id },
+		locals: { person: null, sessionId: null },
+		getClientAddress: () => asked.from ?? '192.0.2.7'
+	} as never;
+	const call = (routes[id] as Record<string, (event: never) => Promise<Response>>)[method]!;
+	return handle({
+		event,
+		resolve: async () =>
+			call(event).catch(async (error: unknown) => {
+				await handleError({ error, event, status: 500, message: 'Internal Error' });
+				return new Response(null, { status: 500 });
+			})
+	}) as Promise<Response>;
+}
+
+const person = await makePerson();
+const token = (scope: 'read' | 'evaluate', days: number | '' = '') =>
+	makeApiToken(person.id, { name: 'sizing script', scope, days });
+let evaluating: string;
+let reading: string;
+
+beforeAll(async () => {
+	evaluating = await token('evaluate');
+	reading = await token('read');
+});
+afterAll(closeEngine);
+
+const earth = { kind: 'body', body: 'earth' };
+const steel = { site: earth, density: 7900, stress: 5e9 };
+
+test('methods are listed with the schemas of what goes in and comes out', async () => {
+	const answer = await ask('/api/v1/methods', { token: reading });
+	const { engine, methods } = await answer.json();
+	expect(answer.status).toBe(200);
+	expect(engine).toMatch(/^\d+/);
+	const names = methods.map(({ name }: { name: string }) => name);
+	expect(names).toContain('uniform-line');
+	for (const { inputs, outputs } of methods)
+		expect([inputs.$schema, outputs.type]).toEqual([
+			'https://json-schema.org/draft/2020-12/schema',
+			'object'
+		]);
+});
+
+test('a method answers in SI with the engine’s version', async () => {
+	const answer = await ask('/api/v1/methods/[name]', {
+		token: evaluating,
+		name: 'uniform-line',
+		body: steel
+	});
+	expect(answer.status).toBe(200);
+	const { engine, outputs } = await answer.json();
+	expect(engine).toMatch(/^\d+/);
+	// 382.5 GPa: consistency figure computed outside with SciPy.
+	expect(outputs.peakStress / 1e9).toBeCloseTo(382.5, 1);
+});
+
+test('what cannot be computed is a problem in words with its places', async () => {
+	const answer = await ask('/api/v1/methods/[name]', {
+		token: evaluating,
+		name: 'uniform-line',
+		body: { ...steel, density: -1 }
+	});
+	expect(answer.status).toBe(422);
+	expect(answer.headers.get('content-type')).toBe('application/problem+json');
+	expect(await answer.json()).toMatchObject({
+		detail: 'density must be above 0; it is -1.',
+		code: 'input',
+		faults: [{ path: 'density' }]
+	});
+});
+
+test('a method that does not exist is answered with names like it', async () => {
+	const answer = await ask('/api/v1/methods/[name]', {
+		token: evaluating,
+		name: 'uniform-lin',
+		body: {}
+	});
+	expect(answer.status).toBe(404);
+	expect(await answer.json()).toMatchObject({ near: ['uniform-line'] });
+});
+
+test('a note in interchange comes back with the result of each item, faults as well', async () => {
+	const given = { source: '', description: '', uncertainty: '1.9' };
+	const calculation = { kind: 'calculation', description: '', digits: '', unit: 'GPa' };
+	const note = {
+		format: 'holdfast-note',
+		version: 1,
+		thinLimit: '0.10',
+		items: [
+			{ id: 'a', kind: 'given', symbol: 'σ_al', value: '110', unit: 'GPa', ...given },
+			{ id: 'b', symbol: 'σ_d', expression: 'σ_al/1.75', ...calculation },
+			{ id: 'c', symbol: 'x', expression: 'σ_al + 1 m', ...calculation }
+		]
+	};
+	const answer = await ask('/api/v1/evaluate', { token: evaluating, body: note });
+	expect(answer.status).toBe(200);
+	const { results } = await answer.json();
+	expect(results[1].outcome.quantity).toMatchObject({ unit: 'GPa' });
+	// By hand: 110/1.75 and 1.9/1.75.
+	expect(results[1].outcome.quantity.value).toBeCloseTo(62.857142857, 8);
+	expect(results[1].outcome.quantity.uncertainty).toBeCloseTo(1.0857142857, 8);
+	expect(results[2].outcome).toMatchObject({ state: 'fault', faults: [{ code: 'dimension' }] });
+});
+
+test('what is no note is refused with the places that are wrong', async () => {
+	const wrong = { format: 'holdfast-note', version: 1, thinLimit: '', items: [{ kind: 'poem' }] };
+	const answer = await ask('/api/v1/evaluate', { token: evaluating, body: wrong });
+	expect(answer.status).toBe(422);
+	const { errors } = await answer.json();
+	expect(errors[0].field).toBe('items.0.kind');
+	expect((await ask('/api/v1/evaluate', { token: evaluating, body: 'no JSON' })).status).toBe(400);
+});
+
+test('the schema of the interchange format is served', async () => {
+	const answer = await ask('/api/v1/schemas/note', { token: reading });
+	expect(answer.headers.get('content-type')).toBe('application/schema+json');
+	expect(await answer.json()).toMatchObject({
+		type: 'object',
+		required: expect.arrayContaining(['items'])
+	});
+});
+
+test('a token that only reads runs nothing', async () => {
+	const body = steel;
+	const answer = await ask('/api/v1/methods/[name]', {
+		token: reading,
+		name: 'uniform-line',
+		body
+	});
+	expect(answer.status).toBe(403);
+	expect((await ask('/api/v1/evaluate', { token: reading, body: {} })).status).toBe(403);
+});
+
+test('missing, unknown, expired and revoked tokens, and a session, are answered alike', async () => {
+	const lapsed = await token('evaluate', 1);
+	await db
+		.update(apiToken)
+		.set({ expiresAt: new Date(0) })
+		.where(eq(apiToken.begins, lapsed.slice(0, 13)));
+	const revoked = await token('evaluate');
+	const mine = await apiTokensOf(person.id);
+	await revokeApiToken(person.id, mine.find(({ begins }) => revoked.startsWith(begins))!.id);
+	const tries: Asked[] = [
+		{},
+		{ token: 'holdfast_' + 'x'.repeat(43) },
+		{ token: lapsed },
+		{ token: revoked },
+		{ cookie: await cookieOf(person) }
+	];
+	const answers = await Promise.all(tries.map((asked) => ask('/api/v1/methods', asked)));
+	const bodies = await Promise.all(answers.map((answer) => answer.text()));
+	expect(answers.map(({ status }) => status)).toEqual([401, 401, 401, 401, 401]);
+	expect(new Set(bodies).size).toBe(1);
+	expect(answers[0]!.headers.get('www-authenticate')).toBe('Bearer');
+});
+
+test('of a token only its digest and its first letters are stored', async () => {
+	const [row] = await db.select().from(apiToken).where(eq(apiToken.userId, person.id));
+	expect(JSON.stringify(row)).not.toContain(evaluating.slice(14));
+	expect(row!.tokenHash).toMatch(/^[0-9a-f]{64}$/);
+	expect(row!.lastUsedAt).toBeInstanceOf(Date);
+});
+
+test('nobody revokes the token of somebody else', async () => {
+	const stranger = await makePerson();
+	const [mine] = await apiTokensOf(person.id);
+	await expect(revokeApiToken(stranger.id, mine!.id)).rejects.toMatchObject({ status: 404 });
+	expect((await ask('/api/v1/methods', { token: evaluating })).status).toBe(200);
+});
+
+test('a token asks so often a minute, and is told when it may again', async () => {
+	const eager = await makeApiToken((await makePerson()).id, {
+		name: 'loop',
+		scope: 'read',
+		days: ''
+	});
+	const statuses: number[] = [];
+	let last: Response | undefined;
+	for (let n = 0; n < 125 && last?.status !== 429; n += 1) {
+		last = await ask('/api/v1/schemas/note', { token: eager });
+		statuses.push(last.status);
+	}
+	expect(statuses.at(-1)).toBe(429);
+	expect(statuses).toHaveLength(121);
+	expect(Number(last!.headers.get('retry-after'))).toBeGreaterThan(0);
+});
+
+test('guessing tokens from one network comes to an end', async () => {
+	const statuses = [];
+	for (let n = 0; n < 61; n += 1)
+		statuses.push(
+			(await ask('/api/v1/methods', { token: 'y'.repeat(40), from: '192.0.2.99' })).status
+		);
+	expect(statuses.at(-1)).toBe(429);
+	expect(statuses.at(-2)).toBe(401);
+});
