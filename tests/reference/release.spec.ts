@@ -84,8 +84,9 @@ describe('reach about the Sun', () => {
 
 describe('the release calendar', () => {
 	it('agrees on 320 days with vectors in three dimensions', () => {
-		expect(data.calendars.flatMap(({ days }) => days)).toHaveLength(320);
-		for (const { days, ...place } of data.calendars) {
+		const calendars: { days: { sunLongitude: number }[] }[] = data.calendars;
+		expect(calendars.flatMap(({ days }) => days)).toHaveLength(320);
+		for (const { days, ...place } of calendars) {
 			const longitudes = days.map(({ sunLongitude }) => sunLongitude);
 			const got = outputsOf(releaseCalendar, {
 				...place,

@@ -108,11 +108,12 @@ export const cutRate = defineMethod({
 		});
 		const bandRates = cutRates(bands);
 		const rate = bandRates.reduce((sum, part) => sum + part, 0);
+		const meanTime = 1 / rate;
 		return {
 			outputs: {
 				rate,
 				probability: cutProbability(rate, time),
-				meanTime: rate > 0 ? 1 / rate : undefined,
+				meanTime: Number.isFinite(meanTime) ? meanTime : undefined,
 				bandRates
 			},
 			warnings: bands.flatMap(({ from }, i) => {

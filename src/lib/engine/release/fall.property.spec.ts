@@ -1,10 +1,17 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { exactly } from '../numerics/double-double';
-import { share, someBody } from './bodies.fixture';
+import { bodyOf } from './bodies.fixture';
 import { fallFrom } from './fall';
 import { grazingRadius } from './thresholds';
 import type { TurningBody } from './turning-body';
+
+const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
+const share = between(0, 1);
+/** From a boulder to a giant; the balance radius from just above the surface to 10⁴ radii. */
+const someBody = fc
+	.tuple(between(1, 9), between(300, 2e4), between(0.01, 1e4))
+	.map(([size, density, ratio]) => bodyOf(size, density, ratio));
 
 /** A body, an entry interface, and radii between that and the grazing one. */
 const someFalls = fc

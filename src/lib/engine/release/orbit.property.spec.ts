@@ -1,10 +1,17 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { exactly } from '../numerics/double-double';
-import { someBody, share } from './bodies.fixture';
+import { bodyOf } from './bodies.fixture';
 import { fateFrom } from './fate';
 import { c3At, orbitFrom } from './orbit';
 import { escapeRadius, grazingRadius, radiusForC3 } from './thresholds';
+
+const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
+const share = between(0, 1);
+/** From a boulder to a giant; the balance radius from just above the surface to 10⁴ radii. */
+const someBody = fc
+	.tuple(between(1, 9), between(300, 2e4), between(0.01, 1e4))
+	.map(([size, density, ratio]) => bodyOf(size, density, ratio));
 
 describe('the orbit of a mass let go', () => {
 	it('has the energy and the angular momentum of letting go at both apsides', () => {
