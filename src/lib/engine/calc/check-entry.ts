@@ -46,25 +46,14 @@ export class CheckEntry implements Entry {
 	}
 
 	linear(isUncertain: (slot: Slot) => boolean): (Linear | null)[] {
-		const parts = linearParts(this.item, this.formulas, isUncertain);
-		if (parts.every((part) => part === null)) return parts;
-		const body = this.decide(EXACT);
-		const told = UNCERTAIN.map((name) =>
-			name === 'margin' ? body.margin !== null : body[name]?.state === 'value'
-		);
-		return parts.map((part, i) => (told[i] ? part : null));
+		return linearParts(this.item, this.formulas, isUncertain);
 	}
 
 	result(slots: readonly Slot[], links: ResultLinks): CheckResult {
 		const uncertain = Object.fromEntries(
 			UNCERTAIN.map((name, i) => [name, slots[i]!.uncertainty])
 		) as Uncertain;
-		return { id: this.item.id, kind: 'check', ...this.decide(uncertain), ...links };
-	}
-
-	private decide(uncertain: Uncertain) {
-		return decideCheck(this.item, this.formulas, this.thinLimit, uncertain);
+		const body = decideCheck(this.item, this.formulas, this.thinLimit, uncertain);
+		return { id: this.item.id, kind: 'check', ...body, ...links };
 	}
 }
-
-const EXACT: Uncertain = { left: null, right: null, tolerance: null, margin: null };

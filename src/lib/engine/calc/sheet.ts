@@ -113,9 +113,13 @@ class LiveSheet implements Sheet {
 		if (this.propagatedFor === this.edit) return [];
 		this.propagatedFor = this.edit;
 		const { order } = this.plans.whole(this.held.values());
-		const changed = propagate(order);
-		for (const held of changed) held.spoil('all');
-		return inOrder(changed).map((held) => held.read(this.links));
+		const changed = propagate(order).filter(({ held, uncertainties }) => {
+			const before = held.read(this.links);
+			held.slots.forEach((slot, i) => (slot.uncertainty = uncertainties[i]!));
+			held.spoil('all');
+			return !same(held.read(this.links), before);
+		});
+		return inOrder(changed.map(({ held }) => held)).map((held) => held.read(this.links));
 	}
 
 	results(): ItemResult[] {

@@ -15,23 +15,28 @@ import type { Slot } from './slot';
 /** Givens taken at once: rows stay short however many givens are uncertain. */
 const BLOCK = 64;
 
-/** Sets the uncertainty of every slot; returns the items where one changed. `order` has all, suppliers first. */
-export function propagate(order: readonly Held[]): Held[] {
+/** Of the slots of one item, in SI. */
+export type Found = { held: Held; uncertainties: (number | null)[] };
+
+/** The items where an uncertainty is another now than the slots have. `order` has all, suppliers first. */
+export function propagate(order: readonly Held[]): Found[] {
 	const rows = new Rows();
 	const isUncertain = (slot: Slot) => rows.has(slot);
-	for (const { entry, slots } of order) {
-		if (entry.item.kind === 'given') rows.addGiven(slots[0]!);
-		else {
-			entry.linear(isUncertain).forEach((linear, i) => linear && rows.add(slots[i]!, linear));
+	const derived = order.filter(({ entry, slots }) => {
+		if (entry.item.kind === 'given') {
+			rows.addGiven(slots[0]!);
+			return false;
 		}
-	}
-	const found = rows.uncertainties();
-	return order.filter(({ entry, slots }) => {
-		if (entry.item.kind === 'given') return false;
-		const moved = slots.filter((slot) => slot.uncertainty !== (found.get(slot) ?? null));
-		for (const slot of moved) slot.uncertainty = found.get(slot) ?? null;
-		return moved.length > 0;
+		entry.linear(isUncertain).forEach((linear, i) => linear && rows.add(slots[i]!, linear));
+		return true;
 	});
+	const found = rows.uncertainties();
+	return derived
+		.filter(({ slots }) => slots.some((slot) => slot.uncertainty !== (found.get(slot) ?? null)))
+		.map((held) => ({
+			held,
+			uncertainties: held.slots.map((slot) => found.get(slot) ?? null)
+		}));
 }
 
 class Rows {
