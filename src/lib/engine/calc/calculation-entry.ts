@@ -15,6 +15,7 @@ import { symbolTex } from './tex';
 export class CalculationEntry implements Entry {
 	readonly symbol: string;
 	readonly symbolTex: string;
+	private typedSymbol: string;
 	readonly defines: readonly string[];
 	readonly mentions: readonly string[];
 	readonly width = 1;
@@ -27,6 +28,7 @@ export class CalculationEntry implements Entry {
 
 	constructor(readonly item: CalculationItem) {
 		({ symbol: this.symbol, trouble: this.trouble } = readSymbol(item.symbol));
+		this.typedSymbol = item.symbol.trim();
 		this.symbolTex = this.symbol === '' ? '' : symbolTex(this.symbol);
 		this.formula = new Formula(item.expression, 'expression');
 		this.digits = parseDigits(item.digits);
@@ -82,7 +84,7 @@ export class CalculationEntry implements Entry {
 		return {
 			id: item.id,
 			kind: 'calculation',
-			symbol: item.symbol.trim(),
+			symbol: this.typedSymbol,
 			tex: formula.tex,
 			symbolTex,
 			outcome: this.outcome(slots[0]!),

@@ -1,5 +1,5 @@
 /** An item where it stands in the sheet: what stands behind its names, and its result as last told. */
-import { createEntry, type Entry } from './entry';
+import { createEntry, type Entry, type ResultLinks } from './entry';
 import type { SheetItem } from './items';
 import { alike, type Links } from './links';
 import type { ItemResult } from './results';
@@ -14,11 +14,13 @@ export class Held {
 	cyclic = false;
 	wasCyclic = false;
 	gone = false;
+	/** Whether it is among those about to be told. */
+	isTold = false;
 	/** The edit that opened its result, which may say something else now than it said before (null: nothing). */
 	openedBy = 0;
 	before: ItemResult | null = null;
 	private result: ItemResult | null = null;
-	private linked = false;
+	private neighbours: ResultLinks | null = null;
 
 	constructor(item: SheetItem) {
 		this.id = item.id;
@@ -41,15 +43,16 @@ export class Held {
 	/** What was built of the result no longer holds, or only what it says of links. */
 	spoil(what: 'all' | 'links'): void {
 		if (what === 'all') this.result = null;
-		this.linked = false;
+		else this.neighbours = null;
 	}
 
 	/** The result as plain data. */
 	read(links: Links<Held>): ItemResult {
-		if (this.result && this.linked) return this.result;
-		const found = { uses: links.uses(this), usedIn: links.usedIn(this) };
-		this.result = this.result ? { ...this.result, ...found } : this.entry.result(this.slots, found);
-		this.linked = true;
+		if (this.result && this.neighbours) return this.result;
+		this.neighbours ??= { uses: links.uses(this), usedIn: links.usedIn(this) };
+		this.result = this.result
+			? { ...this.result, ...this.neighbours }
+			: this.entry.result(this.slots, this.neighbours);
 		return this.result;
 	}
 

@@ -223,12 +223,15 @@ class LiveSheet implements Sheet {
 
 	/** The results of those moved, and of those open that are not what they were before, in sheet order. */
 	private tell(open: Held[], moved: Held[]): ItemResult[] {
-		const changed = new Set(moved);
+		const changed = [...moved];
+		for (const held of moved) held.isTold = true;
 		for (const held of open) {
-			if (!held.gone && !same(held.read(this.links), held.before)) changed.add(held);
+			const told = held.isTold || held.gone || same(held.read(this.links), held.before);
+			if (!told) changed.push(held);
 			held.before = null;
 		}
-		return inOrder([...changed]).map((held) => held.read(this.links));
+		for (const held of moved) held.isTold = false;
+		return inOrder(changed).map((held) => held.read(this.links));
 	}
 }
 
