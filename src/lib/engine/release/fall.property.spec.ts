@@ -6,12 +6,13 @@ import { fallFrom } from './fall';
 import { grazingRadius } from './thresholds';
 import type { TurningBody } from './turning-body';
 
-const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
+/** Even over the range: doubles at random as they are stored lie near zero, most of them. */
+const between = (min: number, max: number) => fc.nat(1e9).map((n) => min + (max - min) * (n / 1e9));
 const share = between(0, 1);
 /** From a boulder to a giant; the balance radius from just above the surface to 10⁴ radii. */
 const someBody = fc
-	.tuple(between(1, 9), between(300, 2e4), between(0.01, 1e4))
-	.map(([size, density, ratio]) => bodyOf(size, density, ratio));
+	.tuple(between(1, 9), between(300, 2e4), between(-2, 4))
+	.map(([size, density, ratio]) => bodyOf(size, density, 10 ** ratio));
 
 /** A body, an entry interface, and radii between that and the grazing one. */
 const someFalls = fc

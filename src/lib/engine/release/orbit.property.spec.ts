@@ -6,12 +6,13 @@ import { fateFrom } from './fate';
 import { c3At, orbitFrom } from './orbit';
 import { escapeRadius, grazingRadius, radiusForC3 } from './thresholds';
 
-const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
+/** Even over the range: doubles at random as they are stored lie near zero, most of them. */
+const between = (min: number, max: number) => fc.nat(1e9).map((n) => min + (max - min) * (n / 1e9));
 const share = between(0, 1);
 /** From a boulder to a giant; the balance radius from just above the surface to 10⁴ radii. */
 const someBody = fc
-	.tuple(between(1, 9), between(300, 2e4), between(0.01, 1e4))
-	.map(([size, density, ratio]) => bodyOf(size, density, ratio));
+	.tuple(between(1, 9), between(300, 2e4), between(-2, 4))
+	.map(([size, density, ratio]) => bodyOf(size, density, 10 ** ratio));
 
 describe('the orbit of a mass let go', () => {
 	it('has the energy and the angular momentum of letting go at both apsides', () => {
@@ -42,7 +43,7 @@ describe('the orbit of a mass let go', () => {
 
 	it('escapes exactly where C3 is not below zero, which is from 2^⅓ r_s on', () => {
 		fc.assert(
-			fc.property(someBody, fc.double({ min: -1e-3, max: 1e-3, noNaN: true }), (body, off) => {
+			fc.property(someBody, fc.oneof(between(-1e-3, 1e-3), between(-1e-12, 1e-12)), (body, off) => {
 				fc.pre(Math.abs(off) > 1e-14 && off > body.radius / escapeRadius(body) - 1);
 				const r = escapeRadius(body) * (1 + off);
 				const { c3, apoapsis, excessSpeed, eccentricity } = orbitFrom(body, r);
@@ -82,7 +83,8 @@ describe('the orbit of a mass let go', () => {
 
 	it('has the C3 for which a radius was asked', () => {
 		fc.assert(
-			fc.property(someBody, fc.double({ min: 0, max: 1e4, noNaN: true }), (body, times) => {
+			fc.property(someBody, between(-6, 4), (body, exponent) => {
+				const times = 10 ** exponent;
 				const wanted = times * (body.rate * body.balance) ** 2;
 				const r = radiusForC3(body, wanted);
 				const [c3] = c3At(body, r);
