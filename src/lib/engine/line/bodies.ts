@@ -24,6 +24,9 @@ export type Body = {
 
 export type BodyName = 'earth' | 'mars' | 'moon' | 'ceres';
 
+/** The Sun's gravitational parameter, m³/s². */
+export const SUN_GM = 1.32712440018e20;
+
 const turn = 2 * Math.PI;
 
 export const BODIES: Record<BodyName, Body> = {

@@ -1,5 +1,5 @@
 /** Constants that expressions may name. */
-import { BODIES, type BodyName } from '../line/bodies';
+import { BODIES, SUN_GM, type BodyName } from '../line/bodies';
 import { ACCELERATION, LENGTH, PURE, TIME, dimension, over, type Dimension } from './dimension';
 
 export type Constant = {
@@ -31,7 +31,7 @@ const general: Record<string, Constant> = {
 		tex: 'G'
 	},
 	'sun.GM': {
-		value: 1.32712440018e20,
+		value: SUN_GM,
 		dimension: GRAVITATIONAL,
 		unit: 'm^3/s^2',
 		description: 'Sun, gravitational parameter',

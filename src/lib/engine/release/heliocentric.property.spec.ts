@@ -1,8 +1,9 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { SUN_GM } from '../line/bodies';
 import { exactly } from '../numerics/double-double';
 import { departureAt } from './departure';
-import { IN_PLANE, SUN_GM, c3ToReach, heliocentricPath, relativeExcess } from './heliocentric';
+import { IN_PLANE, c3ToReach, heliocentricPath, relativeExcess } from './heliocentric';
 
 /** Even over the range: doubles at random as they are stored lie near zero, most of them. */
 const between = (min: number, max: number) => fc.nat(1e9).map((n) => min + (max - min) * (n / 1e9));

@@ -14,9 +14,6 @@ import {
 	type DoubleDouble
 } from '../numerics/double-double';
 
-/** 1.327 124 400 18e20 m³/s², the Sun's gravitational parameter. */
-export const SUN_GM = 1.32712440018e20;
-
 /** How v∞ lies to the body's velocity: cosines to it and to the radius from the Sun, and out of the ecliptic. */
 export type Direction = {
 	/** Cosine to the body's velocity, above 0; the other way about is `sense` −1. */

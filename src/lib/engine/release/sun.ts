@@ -3,7 +3,7 @@ import { group, quantity, type ValuesOf } from '../methods/parameter';
 import { refuseInput, Refused } from '../methods/refused';
 import type { Site } from '../line/site';
 import { LENGTH, PURE, dimension } from '../quantities/dimension';
-import { SUN_GM } from './heliocentric';
+import { SUN_GM } from '../line/bodies';
 import { SUN_DISTANCES } from './planets';
 
 export const sunInputs = {
