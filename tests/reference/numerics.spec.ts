@@ -1,4 +1,4 @@
-/** Numerical tools against mpmath at 40 digits (make_reference.py). */
+/** Numerical tools against mpmath at 40 digits (make_numerics.py). */
 import { describe, expect, it } from 'vitest';
 import { erf, erfc } from '$lib/engine/numerics/erf';
 import { integrate } from '$lib/engine/numerics/quadrature';

@@ -1,5 +1,5 @@
 /**
- * Line models against figures from outside: a published table, and mpmath and SciPy (make_reference.py).
+ * Line models against figures from outside: a published table, and mpmath and SciPy (make_sizing.py).
  * Tolerances: 1e-9 for closed forms, 1e-8 for integrals.
  */
 import { describe, expect, it } from 'vitest';

@@ -28,6 +28,8 @@ export type Field = {
 	limit: number;
 	/** Rate of rotation of the frame, rad/s. */
 	omega: number;
+	/** r − r_s, m, with the digits of r_s that a double has no place for. */
+	beyond: (r: number) => number;
 	/** Inward acceleration, m/s². */
 	g: (r: number) => number;
 	/** U(b) − U(a), J/kg, with (b − a) factored out so that near radii lose no digits. */
@@ -71,6 +73,7 @@ export function bodyField({ gm, radius, rate, j2 }: Spheroid): Field {
 		balance: s,
 		limit: Infinity,
 		omega: rate,
+		beyond,
 		g,
 		rise: (a, b) =>
 			(b - a) *
@@ -159,6 +162,7 @@ export function moonField(system: MoonSystem, side: 'near' | 'far'): Field {
 		balance,
 		limit: side === 'near' ? d : Infinity,
 		omega: Math.sqrt(omega2),
+		beyond,
 		g: (s) => {
 			const [here, there] = [fromPrimary(s), fromPrimary(balance)];
 			return (

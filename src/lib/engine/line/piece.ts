@@ -35,7 +35,8 @@ export function linearPiece(
 ): Piece {
 	if (start === end) return constantPiece(field, from, to, start);
 	const slope = (end - start) / (to - from);
-	const area = (r: number) => start + slope * (r - from);
+	// A mean of both ends, so that it is exact at them however far apart the two sections are.
+	const area = (r: number) => (start * (to - r) + end * (r - from)) / (to - from);
 	return {
 		from,
 		to,

@@ -146,7 +146,9 @@ export function spread(field: Field, k: number, near: number, far: number): numb
 		return over(from, middle, fallen, between) + over(middle, to, between, falls);
 	}
 
-	return over(near, far, 0, k * fall(far));
+	const sum = over(near, far, 0, k * fall(far));
+	// From the double nearest to r_s to r_s itself, for an end a hair away.
+	return near === balance && far !== near ? (sum * field.beyond(far)) / (far - near) : sum;
 }
 
 /** The same of a peak too narrow for radii to be told apart in it: half a Gaussian at r_s, else an exponential. */

@@ -1,80 +1,22 @@
 /** As-built: tension, stress and margin of a line whose section, masses and length are fixed. */
 import { analyse, lineMass } from '../line/as-built';
-import { elongation, lengthOf, type Elasticity } from '../line/elongation';
+import { elasticity, requiredLift, thermal } from '../line/as-built-inputs';
+import { elongation, lengthOf } from '../line/elongation';
 import { lineInputs, lineOf, topOf } from '../line/line';
+import { forceOf, marginAt, massOf, radiusOf, stressOf } from '../line/parameters';
 import { siteWarnings } from '../line/site-warnings';
 import { designStressOf, strengthInputs, strengthWarnings } from '../line/strength';
 import { hang } from '../line/tension';
-import {
-	AREA,
-	FORCE,
-	LENGTH,
-	MASS,
-	PRESSURE,
-	PURE,
-	TEMPERATURE,
-	over
-} from '../quantities/dimension';
+import { AREA, PURE } from '../quantities/dimension';
 import { distance } from '../quantities/format';
 import { defineMethod } from './method';
-import { group, integer, list, quantity, type ValuesOf } from './parameter';
-
-const radius = (label: string) => quantity({ label, symbol: 'r', dimension: LENGTH, unit: 'km' });
-const force = (label: string, symbol: string) =>
-	quantity({ label, symbol, dimension: FORCE, unit: 'kN' });
-const mass = (label: string) => quantity({ label, symbol: 'm', dimension: MASS, unit: 't' });
+import { group, integer, list, quantity } from './parameter';
 
 const inputs = {
 	...lineInputs,
 	...strengthInputs,
-	lift: group({
-		label: 'lift that the anchor must hold in reserve',
-		optional: true,
-		fields: {
-			mass: quantity({
-				label: 'lift',
-				symbol: 'm_lift',
-				dimension: MASS,
-				unit: 't',
-				range: { above: 0 }
-			}),
-			reserve: quantity({
-				label: 'required reserve, as a fraction of the lift’s weight at the anchor',
-				dimension: PURE,
-				unit: '',
-				range: { least: 0 },
-				help: 'The anchor tension with all masses in place must reach this share of the lift’s weight.'
-			})
-		}
-	}),
-	elasticity: group({
-		label: 'elasticity, for strain and stretch',
-		optional: true,
-		fields: {
-			modulus: quantity({
-				label: 'modulus of elasticity',
-				symbol: 'E',
-				dimension: PRESSURE,
-				unit: 'GPa',
-				range: { above: 0 }
-			}),
-			expansion: quantity({
-				label: 'coefficient of thermal expansion',
-				symbol: 'α',
-				dimension: over(PURE, TEMPERATURE),
-				unit: '1/K',
-				default: 0
-			}),
-			temperatureRise: quantity({
-				label: 'temperature above that of manufacture',
-				symbol: 'ΔT',
-				dimension: TEMPERATURE,
-				unit: 'K',
-				default: 0,
-				help: 'A difference of temperatures.'
-			})
-		}
-	}),
+	lift: requiredLift,
+	elasticity,
 	points: integer({
 		label: 'radii told, equally spaced from the anchor to the top',
 		range: { least: 2, most: 20_000 },
@@ -91,11 +33,11 @@ export const asBuilt = defineMethod({
 	inputs,
 	outputs: {
 		anchorTension: {
-			...force('tension at the anchor', 'T₀'),
+			...forceOf('tension at the anchor', 'T₀'),
 			help: 'Below a mass that sits there.'
 		},
 		requiredTension: {
-			...force('tension that the required reserve asks for at the anchor', 'T_req'),
+			...forceOf('tension that the required reserve asks for at the anchor', 'T_req'),
 			optional: true
 		},
 		reserveHeld: quantity({
@@ -104,28 +46,12 @@ export const asBuilt = defineMethod({
 			unit: '',
 			optional: true
 		}),
-		greatestTension: force('greatest tension', 'T_max'),
-		greatestStress: quantity({
-			label: 'greatest stress',
-			symbol: 'σ_max',
-			dimension: PRESSURE,
-			unit: 'GPa'
-		}),
-		allowedStress: quantity({
-			label: 'allowable over factor of safety',
-			dimension: PRESSURE,
-			unit: 'GPa'
-		}),
-		leastMargin: quantity({
-			label: 'least margin of safety',
-			symbol: 'MS',
-			dimension: PURE,
-			unit: '',
-			optional: true,
-			help: 'σ_al/(FS σ) − 1; none where nothing is under tension.'
-		}),
+		greatestTension: forceOf('greatest tension', 'T_max'),
+		greatestStress: stressOf('greatest stress', 'σ_max'),
+		allowedStress: stressOf('allowable over factor of safety'),
+		leastMargin: marginAt('least margin of safety'),
 		leastMarginRadius: {
-			...radius('radius of the least margin'),
+			...radiusOf('radius of the least margin'),
 			optional: true,
 			help: 'The lowest of those told within 1e-9 of the least.'
 		},
@@ -135,28 +61,19 @@ export const asBuilt = defineMethod({
 			most: 100_000,
 			of: group({
 				label: 'stretch',
-				fields: { from: radius('from the radius'), to: radius('to the radius') }
+				fields: { from: radiusOf('from the radius'), to: radiusOf('to the radius') }
 			}),
 			help: 'T < 0; less than 1e-13 of the greatest tension counts as rounding.'
 		}),
-		lineMass: mass('mass of the line, without point masses'),
-		pointMass: mass('point masses together'),
-		total: mass('line, point masses and counterweight'),
-		length: quantity({ label: 'length as deployed', symbol: 'L', dimension: LENGTH, unit: 'km' }),
-		manufacturedLength: quantity({
-			label: 'length as manufactured',
-			symbol: 'L₀',
-			dimension: LENGTH,
-			unit: 'km',
+		lineMass: massOf('mass of the line, without point masses'),
+		pointMass: massOf('point masses together'),
+		total: massOf('line, point masses and counterweight'),
+		length: radiusOf('length as deployed', 'L'),
+		manufacturedLength: { ...radiusOf('length as manufactured', 'L₀'), optional: true },
+		stretch: {
+			...radiusOf('stretch, deployed less manufactured length', 'L − L₀'),
 			optional: true
-		}),
-		stretch: quantity({
-			label: 'stretch, deployed less manufactured length',
-			symbol: 'L − L₀',
-			dimension: LENGTH,
-			unit: 'km',
-			optional: true
-		}),
+		},
 		rows: list({
 			label: 'along the line, upwards; two rows where something jumps',
 			fewest: 2,
@@ -164,17 +81,11 @@ export const asBuilt = defineMethod({
 			of: group({
 				label: 'radius',
 				fields: {
-					radius: radius('radius'),
+					radius: radiusOf('radius'),
 					area: quantity({ label: 'section', symbol: 'A', dimension: AREA, unit: 'mm^2' }),
-					tension: force('tension', 'T'),
-					stress: quantity({ label: 'stress', symbol: 'σ', dimension: PRESSURE, unit: 'GPa' }),
-					margin: quantity({
-						label: 'margin of safety',
-						symbol: 'MS',
-						dimension: PURE,
-						unit: '',
-						optional: true
-					}),
+					tension: forceOf('tension'),
+					stress: stressOf('stress'),
+					margin: marginAt('margin of safety'),
 					strain: quantity({
 						label: 'strain',
 						symbol: 'ε',
@@ -208,7 +119,7 @@ export const asBuilt = defineMethod({
 	run(input) {
 		const line = lineOf(input);
 		const limitStress = designStressOf(input);
-		const elastic = input.elasticity && elasticityOf(input.elasticity);
+		const elastic = input.elasticity && thermal(input.elasticity);
 		const found = analyse(line, limitStress, input.points, elastic);
 		const { rows, extremes, leastMargin, slack } = found;
 		const { anchorTension, greatestTension, stress, stressRadius } = extremes;
@@ -254,15 +165,6 @@ export const asBuilt = defineMethod({
 			]
 		};
 	}
-});
-
-const elasticityOf = ({
-	modulus,
-	expansion,
-	temperatureRise
-}: NonNullable<ValuesOf<typeof inputs>['elasticity']>): Elasticity => ({
-	modulus,
-	thermalStrain: expansion * temperatureRise
 });
 
 /** A line whose greatest tension dwarfs that at its anchor gives the latter as a small difference. */

@@ -2,20 +2,14 @@
 import { climberGrid, envelope, leastOf } from '../line/envelope';
 import { lineInputs, lineOf, topOf, type Line, type PointMass } from '../line/line';
 import { slackBelow } from '../line/slack';
+import { forceOf, givenRadius, marginAt, radiusOf } from '../line/parameters';
 import { siteWarnings } from '../line/site-warnings';
 import { designStressOf, strengthInputs, strengthWarnings } from '../line/strength';
-import { FORCE, LENGTH, MASS, PURE } from '../quantities/dimension';
+import { MASS } from '../quantities/dimension';
 import { defineMethod } from './method';
 import { group, integer, list, quantity, variant, type ValuesOf } from './parameter';
 import { refuseInput } from './refused';
 
-const radius = (label: string) => quantity({ label, symbol: 'r', dimension: LENGTH, unit: 'km' });
-const onLine = (label: string) =>
-	quantity({ label, symbol: 'r', dimension: LENGTH, unit: 'km', range: { above: 0 } });
-const force = (label: string, symbol: string) =>
-	quantity({ label, symbol, dimension: FORCE, unit: 'kN' });
-const margin = (label: string) =>
-	quantity({ label, symbol: 'MS', dimension: PURE, unit: '', optional: true });
 const climberMass = quantity({
 	label: 'mass of the climber',
 	symbol: 'm',
@@ -36,8 +30,8 @@ const inputs = {
 				label: 'one climber at equally spaced radii',
 				fields: {
 					mass: climberMass,
-					from: { ...onLine('lowest radius; the anchor where left out'), optional: true },
-					to: { ...onLine('highest radius; the top where left out'), optional: true },
+					from: { ...givenRadius('lowest radius; the anchor where left out'), optional: true },
+					to: { ...givenRadius('highest radius; the top where left out'), optional: true },
 					count: integer({
 						label: 'positions',
 						range: { least: 2, most: 5000 },
@@ -61,7 +55,7 @@ const inputs = {
 									most: 100,
 									of: group({
 										label: 'climber',
-										fields: { radius: onLine('radius'), mass: climberMass }
+										fields: { radius: givenRadius('radius'), mass: climberMass }
 									})
 								})
 							}
@@ -81,13 +75,10 @@ export const climberEnvelope = defineMethod({
 	subject: 'line',
 	inputs,
 	outputs: {
-		leastMargin: {
-			...margin('least margin of safety of all moments'),
-			help: 'None where nothing is under tension.'
-		},
+		leastMargin: marginAt('least margin of safety of all moments'),
 		leastMarginMoment: { ...momentNumber('moment of the least margin'), optional: true },
-		leastMarginRadius: { ...radius('radius on the line of the least margin'), optional: true },
-		leastAnchorTension: force('least tension at the anchor', 'T₀'),
+		leastMarginRadius: { ...radiusOf('radius on the line of the least margin'), optional: true },
+		leastAnchorTension: forceOf('least tension at the anchor', 'T₀'),
 		leastAnchorTensionMoment: momentNumber('moment of the least tension at the anchor'),
 		slackMoments: integer({
 			label: 'moments in which the line is slack somewhere; a failed check if any'
@@ -100,15 +91,15 @@ export const climberEnvelope = defineMethod({
 				label: 'moment',
 				fields: {
 					climberRadius: {
-						...radius('radius of the climber'),
+						...radiusOf('radius of the climber'),
 						optional: true,
 						help: 'For a grid.'
 					},
-					margin: margin('least margin of safety'),
-					marginRadius: { ...radius('radius of the least margin'), optional: true },
-					anchorTension: force('tension at the anchor', 'T₀'),
-					leastTension: force('least tension along the line', 'T_min'),
-					leastTensionRadius: radius('radius of the least tension')
+					margin: marginAt('least margin of safety'),
+					marginRadius: { ...radiusOf('radius of the least margin'), optional: true },
+					anchorTension: forceOf('tension at the anchor', 'T₀'),
+					leastTension: forceOf('least tension along the line', 'T_min'),
+					leastTensionRadius: radiusOf('radius of the least tension')
 				}
 			})
 		})

@@ -1,9 +1,9 @@
 /** Field: what pulls on a line at given radii, and where it balances. */
+import { givenRadius, radiusOf } from '../line/parameters';
 import { fieldOf, site } from '../line/site';
 import { siteWarnings } from '../line/site-warnings';
 import {
 	ACCELERATION,
-	LENGTH,
 	PURE,
 	SPECIFIC_STRENGTH,
 	TIME,
@@ -15,8 +15,6 @@ import { defineMethod } from './method';
 import { group, list, quantity } from './parameter';
 import { refuseInput } from './refused';
 
-const radius = (label: string, symbol: string) =>
-	quantity({ label, symbol, dimension: LENGTH, unit: 'km' });
 const stiffness = (label: string, symbol: string) =>
 	quantity({ label, symbol, dimension: dimension(0, 0, -2), unit: '1/s^2' });
 const energy = (label: string, symbol: string) =>
@@ -34,19 +32,13 @@ export const field = defineMethod({
 			label: 'radii to tell, from the body’s centre',
 			fewest: 0,
 			most: 5000,
-			of: quantity({
-				label: 'radius',
-				symbol: 'r',
-				dimension: LENGTH,
-				unit: 'km',
-				range: { above: 0 }
-			})
+			of: givenRadius('radius')
 		})
 	},
 	outputs: {
-		baseRadius: radius('radius of the anchor', 'R'),
+		baseRadius: radiusOf('radius of the anchor', 'R'),
 		balanceRadius: {
-			...radius('balance radius', 'r_s'),
+			...radiusOf('balance radius', 'r_s'),
 			help: 'Where g is zero: the synchronous radius, or L1 or L2 on a line from a moon.'
 		},
 		rate: quantity({
@@ -63,7 +55,7 @@ export const field = defineMethod({
 			of: group({
 				label: 'radius',
 				fields: {
-					radius: radius('radius', 'r'),
+					radius: radiusOf('radius', 'r'),
 					g: quantity({
 						label: 'inward acceleration',
 						symbol: 'g',

@@ -1,20 +1,16 @@
 /** Stepped line: a line as manufactured, in sections of constant area with joints between them. */
 import { equalHeights, equalRises } from '../line/boundaries';
 import type { Field } from '../line/field';
+import { givenRadius, radiusOf, stressOf, toldArea, toldForce, toldMass } from '../line/parameters';
 import { sizingInputs, sizingOf, sizingWarnings } from '../line/sizing';
 import { sizeStepped, type Section } from '../line/stepped';
 import { baseSection, taperShape } from '../line/taper';
 import { lnSum, told as toldOf } from '../numerics/logarithm';
-import { AREA, FORCE, LENGTH, MASS, PRESSURE, PURE } from '../quantities/dimension';
+import { MASS, PURE } from '../quantities/dimension';
 import { defineMethod } from './method';
 import { group, integer, list, quantity, told, variant, type ValuesOf } from './parameter';
 import { refuseInput } from './refused';
 
-const mass = (label: string, symbol: string) => told({ label, symbol, dimension: MASS, unit: 't' });
-const stress = (label: string) =>
-	quantity({ label, symbol: 'σ', dimension: PRESSURE, unit: 'GPa' });
-const tension = (label: string) => told({ label, symbol: 'T', dimension: FORCE, unit: 'kN' });
-const radius = (label: string) => quantity({ label, symbol: 'r', dimension: LENGTH, unit: 'km' });
 const penalty = (label: string) => told({ label, dimension: PURE, unit: '%' });
 const count = integer({
 	label: 'number of sections',
@@ -39,13 +35,7 @@ const inputs = {
 						label: 'interior boundaries upwards, without anchor and top',
 						fewest: 0,
 						most: 20_000,
-						of: quantity({
-							label: 'radius',
-							symbol: 'r',
-							dimension: LENGTH,
-							unit: 'km',
-							range: { above: 0 }
-						})
+						of: givenRadius('radius')
 					})
 				}
 			}
@@ -70,17 +60,14 @@ export const steppedLine = defineMethod({
 	subject: 'line',
 	inputs,
 	outputs: {
-		designStress: {
-			...stress('design stress, allowable over factor of safety'),
-			symbol: 'σ_d'
-		},
-		sectionMass: mass('mass of the sections', 'm'),
-		jointMass: mass('mass of the joints', 'm_j'),
-		lineMass: mass('mass of the line, joints included', 'm'),
-		counterweight: mass('counterweight', 'm_c'),
-		total: mass('line and counterweight, lift excluded', 'm_tot'),
-		taperLineMass: mass('mass of the exact taper from the same base', 'm'),
-		taperTotal: mass('exact taper and its counterweight', 'm_tot'),
+		designStress: stressOf('design stress, allowable over factor of safety', 'σ_d'),
+		sectionMass: toldMass('mass of the sections', 'm'),
+		jointMass: toldMass('mass of the joints', 'm_j'),
+		lineMass: toldMass('mass of the line, joints included', 'm'),
+		counterweight: toldMass('counterweight', 'm_c'),
+		total: toldMass('line and counterweight, lift excluded', 'm_tot'),
+		taperLineMass: toldMass('mass of the exact taper from the same base', 'm'),
+		taperTotal: toldMass('exact taper and its counterweight', 'm_tot'),
 		linePenalty: {
 			...penalty('mass penalty of the line over the exact taper'),
 			help: 'Joints included.'
@@ -89,9 +76,9 @@ export const steppedLine = defineMethod({
 			...penalty('mass penalty with the counterweight'),
 			help: 'Joints included.'
 		},
-		balanceRadius: { ...radius('balance radius'), symbol: 'r_s' },
-		greatestTension: tension('greatest tension'),
-		leastStress: stress('least stress along the line'),
+		balanceRadius: radiusOf('balance radius', 'r_s'),
+		greatestTension: toldForce('greatest tension'),
+		leastStress: stressOf('least stress along the line'),
 		sections: list({
 			label: 'sections upwards from the anchor; the greatest stress in each is the design stress',
 			fewest: 1,
@@ -99,14 +86,14 @@ export const steppedLine = defineMethod({
 			of: group({
 				label: 'section',
 				fields: {
-					from: radius('radius of its lower end'),
-					to: radius('radius of its upper end'),
-					area: told({ label: 'section', symbol: 'A', dimension: AREA, unit: 'mm^2' }),
-					mass: mass('mass', 'm'),
-					lowerTension: tension('tension at its lower end'),
-					upperTension: tension('tension at its upper end'),
-					lowerStress: stress('stress at its lower end'),
-					upperStress: stress('stress at its upper end')
+					from: radiusOf('radius of its lower end'),
+					to: radiusOf('radius of its upper end'),
+					area: toldArea('section', 'A'),
+					mass: toldMass('mass', 'm'),
+					lowerTension: toldForce('tension at its lower end'),
+					upperTension: toldForce('tension at its upper end'),
+					lowerStress: stressOf('stress at its lower end'),
+					upperStress: stressOf('stress at its upper end')
 				}
 			})
 		})

@@ -1,18 +1,21 @@
 /** Constant-stress taper: sections, masses and counterweight of a line sized for one stress. */
+import {
+	givenRadius,
+	massOf,
+	radiusOf,
+	stressOf,
+	toldArea,
+	toldForce,
+	toldMass
+} from '../line/parameters';
 import { sizingInputs, sizingOf, sizingWarnings, refuseTop } from '../line/sizing';
 import { sizeTaper, taperShape } from '../line/taper';
 import { topWithin, tradeCurve } from '../line/trade';
 import { lnOf, told as toldOf } from '../numerics/logarithm';
-import { AREA, FORCE, LENGTH, MASS, PRESSURE, PURE } from '../quantities/dimension';
+import { AREA, PURE } from '../quantities/dimension';
 import { defineMethod } from './method';
 import { group, integer, list, quantity, told } from './parameter';
 import { refuseInput } from './refused';
-
-const mass = (label: string, symbol: string) => told({ label, symbol, dimension: MASS, unit: 't' });
-const area = (label: string, symbol: string) =>
-	told({ label, symbol, dimension: AREA, unit: 'mm^2' });
-const radius = (label: string, symbol: string) =>
-	quantity({ label, symbol, dimension: LENGTH, unit: 'km' });
 
 export const taper = defineMethod({
 	name: 'taper',
@@ -22,24 +25,16 @@ export const taper = defineMethod({
 	subject: 'line',
 	inputs: {
 		...sizingInputs,
-		rangeFrom: quantity({
-			label: 'lowest top of the trade curve',
-			symbol: 'r_t',
-			dimension: LENGTH,
-			unit: 'km',
-			range: { above: 0 },
+		rangeFrom: {
+			...givenRadius('lowest top of the trade curve', 'r_t'),
 			optional: true,
 			help: 'A tenth of the way from the balance radius to the range’s top where left out.'
-		}),
-		rangeTop: quantity({
-			label: 'highest top of the trade curve',
-			symbol: 'r_t',
-			dimension: LENGTH,
-			unit: 'km',
-			range: { above: 0 },
+		},
+		rangeTop: {
+			...givenRadius('highest top of the trade curve', 'r_t'),
 			optional: true,
 			help: 'The top where left out.'
-		}),
+		},
 		rangePoints: integer({
 			label: 'points of the trade curve',
 			range: { least: 2, most: 5000 },
@@ -55,12 +50,7 @@ export const taper = defineMethod({
 		})
 	},
 	outputs: {
-		designStress: quantity({
-			label: 'design stress, allowable over factor of safety',
-			symbol: 'σ_d',
-			dimension: PRESSURE,
-			unit: 'GPa'
-		}),
+		designStress: stressOf('design stress, allowable over factor of safety', 'σ_d'),
 		taper: told({
 			label: 'taper ratio, section at the balance radius over that at the anchor',
 			symbol: 'A(r_s)/A₀',
@@ -73,36 +63,23 @@ export const taper = defineMethod({
 			dimension: AREA,
 			unit: 'mm^2'
 		}),
-		balanceArea: area('section at the balance radius', 'A(r_s)'),
-		topArea: area('section at the top', 'A(r_t)'),
-		greatestTension: told({
-			label: 'greatest tension, at the balance radius',
-			symbol: 'T_max',
-			dimension: FORCE,
-			unit: 'kN'
-		}),
-		lineMass: mass('mass of the line', 'm'),
-		massBelow: mass('mass of the line below the balance radius', 'm_b'),
-		massAbove: mass('mass of the line above it', 'm_a'),
-		counterweight: mass('counterweight', 'm_c'),
-		total: mass('line and counterweight, lift excluded', 'm_tot'),
-		lift: quantity({
-			label: 'lift that the anchor section carries',
-			symbol: 'm_lift',
-			dimension: MASS,
-			unit: 't',
+		balanceArea: toldArea('section at the balance radius', 'A(r_s)'),
+		topArea: toldArea('section at the top', 'A(r_t)'),
+		greatestTension: toldForce('greatest tension, at the balance radius', 'T_max'),
+		lineMass: toldMass('mass of the line', 'm'),
+		massBelow: toldMass('mass of the line below the balance radius', 'm_b'),
+		massAbove: toldMass('mass of the line above it', 'm_a'),
+		counterweight: toldMass('counterweight', 'm_c'),
+		total: toldMass('line and counterweight, lift excluded', 'm_tot'),
+		lift: {
+			...massOf('lift that the anchor section carries', 'm_lift'),
 			help: 'σ_d A₀/(g(R)(1 + reserve)).'
-		}),
+		},
 		totalPerLift: told({ label: 'total over lift', dimension: PURE, unit: '' }),
-		length: quantity({
-			label: 'length, anchor to top',
-			symbol: 'L',
-			dimension: LENGTH,
-			unit: 'km'
-		}),
-		balanceRadius: radius('balance radius', 'r_s'),
+		length: radiusOf('length, anchor to top', 'L'),
+		balanceRadius: radiusOf('balance radius', 'r_s'),
 		topWithin: {
-			...radius('least radius of the top at which the total is that near', 'r_t'),
+			...radiusOf('least radius of the top at which the total is that near', 'r_t'),
 			help: 'The total only falls with the radius of the top: a least total exists only with a cost per length.'
 		},
 		trade: list({
@@ -112,10 +89,10 @@ export const taper = defineMethod({
 			of: group({
 				label: 'top',
 				fields: {
-					top: radius('radius of the top', 'r_t'),
-					line: mass('line', 'm'),
-					counterweight: mass('counterweight', 'm_c'),
-					total: mass('line and counterweight', 'm_tot')
+					top: radiusOf('radius of the top', 'r_t'),
+					line: toldMass('line', 'm'),
+					counterweight: toldMass('counterweight', 'm_c'),
+					total: toldMass('line and counterweight', 'm_tot')
 				}
 			})
 		})

@@ -1,5 +1,6 @@
 /** Uniform section: what a line of one section must carry, and where it would stand free. */
 import { DENSITY, LENGTH, PRESSURE, SPECIFIC_STRENGTH } from '../quantities/dimension';
+import { radiusOf, stressOf } from '../line/parameters';
 import { fieldOf, site } from '../line/site';
 import { siteWarnings } from '../line/site-warnings';
 import {
@@ -50,24 +51,9 @@ export const uniformLine = defineMethod({
 		})
 	},
 	outputs: {
-		peakStress: quantity({
-			label: 'greatest stress, at the balance radius',
-			symbol: 'σ_u',
-			dimension: PRESSURE,
-			unit: 'GPa'
-		}),
-		balanceRadius: quantity({
-			label: 'balance radius',
-			symbol: 'r_s',
-			dimension: LENGTH,
-			unit: 'km'
-		}),
-		freeRadius: quantity({
-			label: 'radius of the upper end, where the stress is zero again',
-			symbol: 'H',
-			dimension: LENGTH,
-			unit: 'km'
-		}),
+		peakStress: stressOf('greatest stress, at the balance radius', 'σ_u'),
+		balanceRadius: radiusOf('balance radius', 'r_s'),
+		freeRadius: radiusOf('radius of the upper end, where the stress is zero again', 'H'),
 		breakingLength: quantity({
 			label: 'breaking length at g₀',
 			dimension: LENGTH,
@@ -86,8 +72,8 @@ export const uniformLine = defineMethod({
 			of: group({
 				label: 'radius',
 				fields: {
-					radius: quantity({ label: 'radius', symbol: 'r', dimension: LENGTH, unit: 'km' }),
-					stress: quantity({ label: 'stress', symbol: 'σ', dimension: PRESSURE, unit: 'GPa' })
+					radius: radiusOf('radius'),
+					stress: stressOf('stress')
 				}
 			})
 		})

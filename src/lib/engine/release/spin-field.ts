@@ -9,6 +9,7 @@ export function spinField(rate: number): Field {
 		balance: 0,
 		limit: Infinity,
 		omega: rate,
+		beyond: (r) => r,
 		g: (r) => -square * r,
 		rise: (a, b) => (-square * (b - a) * (a + b)) / 2,
 		depth: (r) => (square * r ** 2) / 2,

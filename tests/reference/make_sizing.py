@@ -1,18 +1,18 @@
 #!/usr/bin/env python3
-"""Reference figures for line models, computed with mpmath at 40 digits and SciPy.
+"""Reference figures for sizing on known bodies, computed with mpmath at 40 digits and SciPy.
 
 Shares nothing with the engine: constants are written out again from their sources, the potential is
 used as it stands (no factoring), radii come from root finding, masses from tanh-sinh quadrature.
 
-    python3 tests/reference/make_reference.py
+    python3 tests/reference/make_sizing.py
 
-writes tests/reference/data/*.json. Needs python3-mpmath and python3-scipy (1.10 or later).
+writes tests/reference/data/{taper,field,mass,moon}.json. Needs python3-mpmath and python3-scipy (1.10 or later).
 """
 import json
 import math
 from pathlib import Path
 
-from mpmath import erf, erfc, exp, findroot, inf, log, mp, mpf, pi, quad
+from mpmath import exp, findroot, mp, mpf, pi, quad
 from scipy.integrate import solve_ivp
 
 mp.dps = 40
@@ -170,28 +170,12 @@ def moon_l1():
     return dict(distance=float(findroot(pull, mpf(58_000_000))))
 
 
-def error_function():
-    points = [i / 10 for i in range(-60, 61)] + [1e-8, 1e-3, 2.4999, 2.5001, 8, 12, 25]
-    return [dict(x=x, erf=float(erf(mpf(x))), erfc=float(erfc(mpf(x)))) for x in points]
-
-
-def integrals():
-    """Integrals with closed forms or at 40 digits, to hold the quadrature against."""
-    return dict(
-        gaussian=float(quad(lambda x: exp(-(x**2) * 1e6), [-1, -0.01, 0, 0.01, 1])),
-        logarithm=float(quad(lambda x: log(1 + x) / x, [mpf("1e-3"), 1])),
-        decay=float(quad(lambda x: exp(-x), [0, inf])),
-    )
-
-
 if __name__ == "__main__":
     DATA.mkdir(exist_ok=True)
     for name, rows in dict(
         taper=tapers(),
         field=field_values(),
         mass=mass_by_integration(),
-        erf=error_function(),
-        integrals=integrals(),
         moon=moon_l1(),
     ).items():
         (DATA / f"{name}.json").write_text(json.dumps(rows, indent="\t") + "\n")
