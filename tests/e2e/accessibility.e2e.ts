@@ -11,6 +11,8 @@ const PAGES = [
 	'/programmes/CL/baselines',
 	'/programmes/CL/notes/CL-DN-002/freeze',
 	'/programmes/CL/notes/CL-DN-002/compare?from=A&to=now',
+	'/methods',
+	'/methods/as-built',
 	'/account'
 ];
 

@@ -72,6 +72,8 @@ test('a note page loads at most 300 kB of script, gzipped; any other at most 120
 		'/programmes/CL/baselines',
 		baseline!,
 		'/programmes/CL/notes/CL-DN-004/compare?from=A&to=now',
+		'/methods',
+		'/methods/as-built',
 		'/account'
 	];
 	for (const path of paths) {

@@ -59,6 +59,8 @@ const EXPECTED: Record<string, string> = {
 	'load /': PERSON,
 	'load /programmes': PERSON,
 	'load /account': PERSON,
+	'load /methods': PERSON,
+	'load /methods/[name]': PERSON,
 	'?/rename /account': PERSON,
 	'?/password /account': PERSON,
 	'?/makeToken /account': PERSON,
@@ -144,6 +146,7 @@ beforeAll(async () => {
 	});
 	params = {
 		...{ programme: programme.code, note: note.id, baseline, remark },
+		name: 'uniform-line',
 		token: 'a-token-that-opens-nothing'
 	};
 	noteNumber = note.number;
