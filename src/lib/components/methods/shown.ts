@@ -1,6 +1,7 @@
 /** Outputs of a method in the units that it names, as rows of a table. */
 import type { Parameter, Parameters } from '$lib/engine/methods/parameter';
 import { formatFigure, unitText } from '$lib/engine/quantities/format';
+import { significant } from '$lib/engine/quantities/number';
 import { fromSi, parseUnit } from '$lib/engine/quantities/units';
 
 const DIGITS = 6;
@@ -16,6 +17,14 @@ export function cellOf(parameter: Parameter, value: unknown): string {
 	if (parameter.kind === 'integer') return String(value);
 	const unit = parseUnit('unit' in parameter ? parameter.unit : '');
 	return formatFigure(unit.ok ? fromSi(value, unit.unit) : value, DIGITS);
+}
+
+/** A bound or a default as short as it was written. */
+export function figureOf(parameter: Parameter, value: unknown): string {
+	if (parameter.kind !== 'number' || typeof value !== 'number') return cellOf(parameter, value);
+	const unit = parseUnit(parameter.unit);
+	const figure = unit.ok ? fromSi(value, unit.unit) : value;
+	return formatFigure(figure, significant(String(Number(figure.toPrecision(10)))));
 }
 
 export const unitOf = (parameter: Parameter, value?: unknown): string => {
