@@ -80,6 +80,19 @@ describe('the standard uncertainty of a quantity', () => {
 		expect(of('ln(line.taper)', givens)! / (0.01 * lnTaper)).toBeCloseTo(1, 8);
 	});
 
+	it('is the same to the last digit in whatever order the items came', () => {
+		const many = Array.from({ length: 12 }, (_, i) =>
+			given(`x_${i}`, `${1 + i / 7}`, '', `${0.1 / (i + 1)}`)
+		);
+		const product = calculation('p', many.map(({ symbol }) => `sin(${symbol})`).join(' * '));
+		const found = many.map((_, i) => {
+			const turned = [...many.slice(i), ...many.slice(0, i), product];
+			return quantity(sheetOf(turned).results(), 'p').uncertainty;
+		});
+		expect(found[0]).toBeGreaterThan(0);
+		expect(new Set(found).size).toBe(1);
+	});
+
 	it('comes through more givens than are taken at once', () => {
 		const many = Array.from({ length: 150 }, (_, i) => given(`x_${i}`, '1', '', '2'));
 		const sums = [0, 1, 2, 3, 4].map((k) => {

@@ -10,6 +10,7 @@
 import { LARGEST } from './compile';
 import type { Held } from './held';
 import type { Linear } from './linear';
+import { byId } from './links';
 import type { Slot } from './slot';
 
 /** Givens taken at once: rows stay short however many givens are uncertain. */
@@ -22,14 +23,13 @@ export type Found = { held: Held; uncertainties: (number | null)[] };
 export function propagate(order: readonly Held[]): Found[] {
 	const rows = new Rows();
 	const isUncertain = (slot: Slot) => rows.has(slot);
-	const derived = order.filter(({ entry, slots }) => {
-		if (entry.item.kind === 'given') {
-			rows.addGiven(slots[0]!);
-			return false;
-		}
+	const isGiven = ({ entry }: Held) => entry.item.kind === 'given';
+	// By id, so that sums do not hang on the order in which the items came.
+	for (const { slots } of order.filter(isGiven).sort(byId)) rows.addGiven(slots[0]!);
+	const derived = order.filter((held) => !isGiven(held));
+	for (const { entry, slots } of derived) {
 		entry.linear(isUncertain).forEach((linear, i) => linear && rows.add(slots[i]!, linear));
-		return true;
-	});
+	}
 	const found = rows.uncertainties();
 	return derived
 		.filter(({ slots }) => slots.some((slot) => slot.uncertainty !== (found.get(slot) ?? null)))
