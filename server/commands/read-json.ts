@@ -21,7 +21,7 @@ export function readJson(file: string | undefined): unknown {
 		throw new CommandRefused(`${file} cannot be read: ${(error as Error).message}.`);
 	}
 	try {
-		return JSON.parse(text);
+		return JSON.parse(text.replace(/^\uFEFF/, ''));
 	} catch {
 		throw new CommandRefused(`${file === '-' ? 'What was piped in' : file} is not JSON.`);
 	}

@@ -13,7 +13,7 @@ test('a method is found, tried with a wrong figure, and gives its result', async
 	await expect(form).toContainText('Write 5.0.');
 	await form.getByLabel('stress of the material').fill('5');
 	await form.getByRole('button', { name: 'Compute' }).click();
-	await expect(form).toContainText('density must be above 0');
+	await expect(form).toContainText('Must be above 0.');
 
 	await form.getByLabel('density').fill('7900');
 	await form.getByRole('button', { name: 'Compute' }).click();

@@ -7,6 +7,7 @@ import { cookieOf, makePerson } from './fixtures';
 const { db } = await import('$lib/server/db');
 const { apiToken } = await import('$lib/server/db/schema');
 const { makeApiToken, apiTokensOf, revokeApiToken } = await import('$lib/server/auth/api-tokens');
+const { signOutEverywhere } = await import('$lib/server/people/accounts');
 const { closeEngine } = await import('$lib/server/engine/evaluate');
 const { handle, handleError } = await import('../../src/hooks.server');
 const routes = {
@@ -209,6 +210,23 @@ test('nobody revokes the token of somebody else', async () => {
 	const [mine] = await apiTokensOf(person.id);
 	await expect(revokeApiToken(stranger.id, mine!.id)).rejects.toMatchObject({ status: 404 });
 	expect((await ask('/api/v1/methods', { token: evaluating })).status).toBe(200);
+});
+
+test('ending every session revokes every token as well', async () => {
+	const leaver = await makePerson();
+	const left = await makeApiToken(leaver.id, { name: 'old script', scope: 'read', days: '' });
+	expect((await ask('/api/v1/methods', { token: left })).status).toBe(200);
+	await signOutEverywhere(leaver.id);
+	expect((await ask('/api/v1/methods', { token: left })).status).toBe(401);
+});
+
+test('one person has two methods computed at a time', async () => {
+	const body = steel;
+	const run = () =>
+		ask('/api/v1/methods/[name]', { token: evaluating, name: 'uniform-line', body });
+	const statuses = (await Promise.all([run(), run(), run(), run()])).map(({ status }) => status);
+	expect(statuses.filter((status) => status === 429).length).toBeGreaterThan(0);
+	expect((await run()).status).toBe(200);
 });
 
 test('a token asks so often a minute, and is told when it may again', async () => {

@@ -1,5 +1,10 @@
 /** Outputs of a method in the units that it names, as rows of a table. */
-import type { Parameter, Parameters } from '$lib/engine/methods/parameter';
+import type {
+	IntegerParameter,
+	NumberParameter,
+	Parameter,
+	Parameters
+} from '$lib/engine/methods/parameter';
 import { formatFigure, unitText } from '$lib/engine/quantities/format';
 import { significant } from '$lib/engine/quantities/number';
 import { fromSi, parseUnit } from '$lib/engine/quantities/units';
@@ -25,6 +30,21 @@ export function figureOf(parameter: Parameter, value: unknown): string {
 	const unit = parseUnit(parameter.unit);
 	const figure = unit.ok ? fromSi(value, unit.unit) : value;
 	return formatFigure(figure, significant(String(Number(figure.toPrecision(10)))));
+}
+
+/** The bounds of a number, in the unit that it is shown in. */
+export function rangeWords(parameter: NumberParameter | IntegerParameter): string[] {
+	const { above, least, below, most } = parameter.range;
+	const shown = (bound: number) =>
+		[figureOf(parameter, bound), bound === 0 ? '' : unitOf(parameter)]
+			.filter((word) => word !== '')
+			.join('\u202f');
+	return [
+		...(above !== undefined ? [`above ${shown(above)}`] : []),
+		...(least !== undefined ? [`${shown(least)} or more`] : []),
+		...(below !== undefined ? [`below ${shown(below)}`] : []),
+		...(most !== undefined ? [`${shown(most)} or less`] : [])
+	];
 }
 
 export const unitOf = (parameter: Parameter, value?: unknown): string => {

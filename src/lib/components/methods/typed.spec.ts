@@ -47,6 +47,20 @@ describe('what is typed into a form', () => {
 		expect(faults).toEqual([{ path: 'rows.2', message: 'Line 3 has 3 values, not 2.' }]);
 	});
 
+	it('takes no comma for the end of a figure', () => {
+		const rows = list({ label: 'rows', fewest: 1, most: 9, of: radius });
+		expect(read({ rows }, { rows: '1,5' }).faults).toEqual([
+			{ path: 'rows.0', message: expect.stringContaining('Write 1.5') }
+		]);
+	});
+
+	it('is held against its range in the unit in which it was typed', () => {
+		const share = quantity({ label: 'x', dimension: PRESSURE, unit: 'GPa', range: { most: 1e12 } });
+		expect(read({ share }, { share: '2000' }).faults).toEqual([
+			{ path: 'share', message: 'Must be 1\u202f000\u202fGPa or less.' }
+		]);
+	});
+
 	it('leaves out a part that is not wanted, and reads the kind that is chosen', () => {
 		const fields = {
 			part: group({ label: 'part', optional: true, fields: { radius } }),

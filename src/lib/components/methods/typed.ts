@@ -8,9 +8,11 @@ import type {
 	Parameter,
 	Parameters
 } from '$lib/engine/methods/parameter';
+import { fits } from '$lib/engine/methods/check';
 import type { InputFault } from '$lib/engine/methods/refused';
 import { parseNumber } from '$lib/engine/quantities/number';
 import { fromSi, parseUnit, toSi } from '$lib/engine/quantities/units';
+import { rangeWords } from './shown';
 
 /** What stands in one field: a text, a mark, named parts, or rows. */
 export type Typed = string | boolean | TypedFields | Typed[];
@@ -118,12 +120,14 @@ function readNumber(
 		faults.push({ path, message: `${number.message} ${number.remedy}`.trim() });
 		return undefined;
 	}
-	if (parameter.kind === 'integer') return number.value;
-	const unit = parseUnit(parameter.unit);
-	return unit.ok ? toSi(number.value, unit.unit) : number.value;
+	const unit = parameter.kind === 'number' ? parseUnit(parameter.unit) : null;
+	const si = unit?.ok ? toSi(number.value, unit.unit) : number.value;
+	if (!fits(parameter.range, si))
+		faults.push({ path, message: `Must be ${rangeWords(parameter).join(' and ')}.` });
+	return si;
 }
 
-/** Rows of figures parted by tabs, semicolons or commas, as they come from a table. */
+/** Rows of figures parted by tabs or semicolons; a comma may be meant as a decimal sign. */
 function readTable(
 	list: ListParameter,
 	typed: string,
@@ -134,7 +138,7 @@ function readTable(
 	const lines = typed.split('\n').filter((line) => line.trim() !== '');
 	if (lines.length === 0 && (list.optional || list.fewest > 0)) return undefined;
 	return lines.map((line, i) => {
-		const cells = line.split(/[\t;,]/).map((cell) => cell.trim());
+		const cells = line.split(/[\t;]/).map((cell) => cell.trim());
 		const at = `${path}.${i}`;
 		if (cells.length > columns.length)
 			faults.push({

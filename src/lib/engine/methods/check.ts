@@ -109,18 +109,21 @@ function checkOne(
 	}
 }
 
+export const fits = ({ above, least, below, most }: Range, value: number): boolean =>
+	(above === undefined || value > above) &&
+	(least === undefined || value >= least) &&
+	(below === undefined || value < below) &&
+	(most === undefined || value <= most);
+
 /** What the number must be, in words; null when it is. */
-function outOfRange({ above, least, below, most }: Range, value: number): string | null {
+function outOfRange(range: Range, value: number): string | null {
+	if (fits(range, value)) return null;
+	const { above, least, below, most } = range;
 	const wanted = [
 		...(above !== undefined ? [`above ${above}`] : []),
 		...(least !== undefined ? [`${least} or more`] : []),
 		...(below !== undefined ? [`below ${below}`] : []),
 		...(most !== undefined ? [`${most} or less`] : [])
 	];
-	const fits =
-		(above === undefined || value > above) &&
-		(least === undefined || value >= least) &&
-		(below === undefined || value < below) &&
-		(most === undefined || value <= most);
-	return fits ? null : wanted.join(' and ');
+	return wanted.join(' and ');
 }

@@ -130,7 +130,10 @@ describe('the method', () => {
 	});
 
 	it('counts no tides elsewhere', () => {
-		const found = answer(periods, { ...sized({ kind: 'body', body: 'mars', j2: false }, 50e9, 4e7), count: 1 });
+		const found = answer(periods, {
+			...sized({ kind: 'body', body: 'mars', j2: false }, 50e9, 4e7),
+			count: 1
+		});
 		if (!found.ok) throw new Error(found.refusal.message);
 		expect(found.outputs.separations.map(({ forcing }) => forcing)).not.toContain('M2');
 	});

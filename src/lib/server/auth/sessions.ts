@@ -9,7 +9,7 @@ import { DrizzlePostgreSQLAdapter } from '@lucia-auth/adapter-drizzle';
 import { and, eq, ne, sql } from 'drizzle-orm';
 import { Lucia, TimeSpan } from 'lucia';
 import { db, type Db } from '../db';
-import { session, user } from '../db/schema';
+import { apiToken, session, user } from '../db/schema';
 import { settings } from '../settings';
 
 /** Who is signed in, as routes and the sync server see them. */
@@ -113,6 +113,8 @@ export async function endSessions(tx: Db, userId: string, except?: string): Prom
 	await tx
 		.delete(session)
 		.where(and(eq(session.userId, userId), except ? ne(session.id, except) : undefined));
+	// Whoever had the account may have made themselves a way in.
+	await tx.delete(apiToken).where(eq(apiToken.userId, userId));
 }
 
 export async function countSessions(userId: string): Promise<number> {

@@ -13,7 +13,7 @@ type Pool = EnginePool<EngineTask, unknown>;
 /** A note waits for nobody's study: they have threads of their own. */
 const LIMITS = {
 	notes: { subject: 'The note', milliseconds: 2000, megabytes: 256, threads: 2 },
-	methods: { subject: 'The method', milliseconds: 10_000, megabytes: 256, threads: 1 }
+	methods: { subject: 'The method', milliseconds: 10_000, megabytes: 256, threads: 2 }
 } as const satisfies Record<string, Omit<Limits, 'worker'>>;
 
 const pools = new Map<keyof typeof LIMITS, Pool>();

@@ -23,7 +23,12 @@ export function describe({ run: _, ...method }: AnyMethod): Description {
 
 export function describeForApi(method: AnyMethod) {
 	const { inputs, outputs, ...about } = describe(method);
-	return { ...about, inputs: schemaOf(inputs), outputs: schemaOf(outputs) };
+	return {
+		engine: ENGINE_VERSION,
+		...about,
+		inputs: schemaOf(inputs),
+		outputs: schemaOf(outputs)
+	};
 }
 
 export const catalogueForApi = () => ({
@@ -31,9 +36,30 @@ export const catalogueForApi = () => ({
 	methods: [...METHODS.values()].map(describeForApi)
 });
 
-/** @throws Problem with the refusal in words where there is no result. */
-export async function callMethod(name: string, input: unknown) {
-	const answer = await runMethod(methodNamed(name).name, input);
+/** Runs of one person at a time: nobody holds up the rest. */
+const MOST_AT_ONCE = 2;
+const running = new Map<string, number>();
+
+/**
+ * @param userId whose run it is
+ * @throws Problem with the refusal in words where there is no result.
+ */
+export async function callMethod(userId: string, name: string, input: unknown) {
+	const method = methodNamed(name);
+	const before = running.get(userId) ?? 0;
+	if (before >= MOST_AT_ONCE)
+		throw new Problem(
+			429,
+			`${MOST_AT_ONCE} methods are being computed for you already; wait for one of them.`,
+			{},
+			{ 'retry-after': '2' }
+		);
+	running.set(userId, before + 1);
+	const answer = await runMethod(method.name, input).finally(() => {
+		const left = running.get(userId)! - 1;
+		if (left > 0) running.set(userId, left);
+		else running.delete(userId);
+	});
 	if (answer.ok) {
 		const { method, engine, outputs, warnings } = answer;
 		return { method, engine, outputs, warnings };

@@ -64,6 +64,13 @@ export class EnginePool<Input, Answer> {
 					`${subject} could not be computed within ${megabytes} MB of memory.`
 				);
 			}
+			if ((error as Error).message === 'Task queue is at limit')
+				throw new Problem(
+					503,
+					'More is being computed just now than this server can take.',
+					{},
+					{ 'retry-after': '10' }
+				);
 			throw error;
 		} finally {
 			clearTimeout(timer);

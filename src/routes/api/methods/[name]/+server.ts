@@ -6,6 +6,7 @@ import { readJson } from '$lib/server/reading';
 
 /** For the page of the method. */
 export async function POST(event) {
-	requirePerson(event);
-	return json(await callMethod(event.params.name, await readJson(event.request, z.unknown())));
+	const person = requirePerson(event);
+	const input = await readJson(event.request, z.unknown());
+	return json(await callMethod(person.id, event.params.name, input));
 }

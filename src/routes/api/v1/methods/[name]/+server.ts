@@ -10,7 +10,8 @@ export async function GET(event) {
 }
 
 export async function POST(event) {
-	await requireToken(event, 'methods.run');
+	const { userId } = await requireToken(event, 'methods.run');
 	// The engine checks the input against the method's description.
-	return json(await callMethod(event.params.name, await readJson(event.request, z.unknown())));
+	const input = await readJson(event.request, z.unknown());
+	return json(await callMethod(userId, event.params.name, input));
 }
