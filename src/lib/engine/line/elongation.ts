@@ -35,10 +35,12 @@ export function elongation(line: Line, { stretches }: Hanging, elasticity: Elast
 			{ remedy: 'Look at the modulus, the change of temperature and the slack.' }
 		);
 	const shortening = ends.map(({ strain }) => strain / (1 + strain));
-	const noise = 1e-13 * Math.max(...shortening.map(Math.abs));
+	const greatest = shortening.reduce((most, share) => Math.max(most, Math.abs(share)), 0);
 	let sum = 0;
 	for (const stretch of stretches) {
-		const { piece } = stretch;
+		const { from, to, piece } = stretch;
+		// Rounding of the stress, and of r where the stretch is short against its radius.
+		const noise = greatest * (1e-13 + (2 ** -50 * to) / (to - from));
 		const share = (r: number) => {
 			const here = strain(tensionAt(line, stretch, r) / piece.area(r));
 			return here / (1 + here);

@@ -4,9 +4,10 @@
  */
 import { group, list, quantity, variant, type ValuesOf } from '../methods/parameter';
 import { Refused, refuseInput } from '../methods/refused';
-import { AREA, DENSITY, LENGTH, MASS, PRESSURE } from '../quantities/dimension';
+import { AREA, DENSITY, MASS, PRESSURE } from '../quantities/dimension';
 import type { Field } from './field';
 import { constantPiece, linearPiece, taperPiece, type Piece } from './piece';
+import { givenRadius } from './parameters';
 import { fieldOf, site } from './site';
 
 export type { Piece };
@@ -26,9 +27,6 @@ export type Line = {
 };
 
 export const topOf = ({ pieces }: Line): number => pieces.at(-1)!.to;
-
-const radius = (label: string) =>
-	quantity({ label, symbol: 'r', dimension: LENGTH, unit: 'km', range: { above: 0 } });
 
 const sectionAt = (label: string) =>
 	quantity({ label, symbol: 'A', dimension: AREA, unit: 'mm^2', range: { above: 0 } });
@@ -57,26 +55,23 @@ export const lineInputs = {
 						unit: 'GPa',
 						range: { above: 0 }
 					}),
-					top: radius('radius of the top, from the body’s centre')
+					top: givenRadius('radius of the top, from the body’s centre', 'r_t')
 				}
 			},
 			stepped: {
 				label: 'sections of constant area',
 				fields: {
-					baseRadius: quantity({
-						label: 'radius of the anchor; the body’s own where left out',
-						dimension: LENGTH,
-						unit: 'km',
-						range: { above: 0 },
+					baseRadius: {
+						...givenRadius('radius of the anchor; the body’s own where left out'),
 						optional: true
-					}),
+					},
 					sections: list({
 						label: 'sections upwards from the anchor',
 						fewest: 1,
 						most: 20_000,
 						of: group({
 							label: 'section',
-							fields: { to: radius('radius of its upper end'), area: sectionAt('area') }
+							fields: { to: givenRadius('radius of its upper end'), area: sectionAt('area') }
 						})
 					})
 				}
@@ -90,7 +85,7 @@ export const lineInputs = {
 						most: 20_000,
 						of: group({
 							label: 'row',
-							fields: { radius: radius('radius'), area: sectionAt('area') }
+							fields: { radius: givenRadius('radius'), area: sectionAt('area') }
 						})
 					})
 				}
@@ -104,7 +99,7 @@ export const lineInputs = {
 		of: group({
 			label: 'point mass',
 			fields: {
-				radius: radius('radius'),
+				radius: givenRadius('radius'),
 				mass: quantity({
 					label: 'mass',
 					symbol: 'm',

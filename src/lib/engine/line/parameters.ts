@@ -5,9 +5,9 @@ import { AREA, FORCE, LENGTH, MASS, PRESSURE, PURE } from '../quantities/dimensi
 export const radiusOf = (label: string, symbol = 'r') =>
 	quantity({ label, symbol, dimension: LENGTH, unit: 'km' });
 
-/** A radius that is asked for. */
+/** A radius that is asked for; a hundred light-years are beyond any line. */
 export const givenRadius = (label: string, symbol = 'r') =>
-	quantity({ label, symbol, dimension: LENGTH, unit: 'km', range: { above: 0 } });
+	quantity({ label, symbol, dimension: LENGTH, unit: 'km', range: { above: 0, most: 1e18 } });
 
 export const forceOf = (label: string, symbol = 'T') =>
 	quantity({ label, symbol, dimension: FORCE, unit: 'kN' });

@@ -1,9 +1,10 @@
 /** What describes a line to be sized: its place, material, base and top. Shared by the exact taper and the stepped line. */
 import { quantity, variant, type ValuesOf } from '../methods/parameter';
 import { refuseInput } from '../methods/refused';
-import { AREA, DENSITY, LENGTH, MASS, PURE } from '../quantities/dimension';
+import { AREA, DENSITY, MASS, PURE } from '../quantities/dimension';
 import { distance } from '../quantities/format';
 import type { Field } from './field';
+import { givenRadius } from './parameters';
 import { fieldOf, site } from './site';
 import { siteWarnings } from './site-warnings';
 import { designStressOf, strengthInputs, strengthWarnings } from './strength';
@@ -55,14 +56,10 @@ export const sizingInputs = {
 		range: { least: 0 },
 		default: 0
 	}),
-	top: quantity({
-		label: 'radius of the top, from the body’s centre',
-		symbol: 'r_t',
-		dimension: LENGTH,
-		unit: 'km',
-		range: { above: 0 },
+	top: {
+		...givenRadius('radius of the top, from the body’s centre', 'r_t'),
 		help: 'Above the balance radius: only there the counterweight pulls outwards.'
-	})
+	}
 } as const;
 
 export type Sizing = ValuesOf<typeof sizingInputs>;

@@ -136,12 +136,13 @@ export function spread(field: Field, k: number, near: number, far: number): numb
 	const shape = (r: number) => Math.exp(-k * fall(r));
 
 	function over(from: number, to: number, fallen: number, falls: number): number {
-		if (fallen > NO_WEIGHT) return 0;
+		if (!(fallen <= NO_WEIGHT)) return 0;
 		const clear = Math.min(from, to, limit - Math.max(from, to));
 		if (falls - fallen <= STEEPEST && Math.abs(to - from) <= 3 * clear)
 			return Math.abs(gauss16(shape, from, to));
 		if (Math.abs(to - from) <= NARROWEST * near) return widthOfPeak(field, k, near);
 		const middle = from + (to - from) / 2;
+		if (middle === from || middle === to) return Math.abs(gauss16(shape, from, to));
 		const between = k * fall(middle);
 		return over(from, middle, fallen, between) + over(middle, to, between, falls);
 	}

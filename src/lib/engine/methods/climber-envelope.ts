@@ -121,7 +121,7 @@ export const climberEnvelope = defineMethod({
 		const loads = loadsOf(line, input.climbers);
 		const moments = envelope(line, designStressOf(input), loads);
 		const worst = leastOf(moments, ({ margin }) => margin);
-		const loosest = leastOf(moments, ({ anchorTension }) => anchorTension)!;
+		const loosest = leastOf(moments, ({ anchorTension }) => anchorTension) ?? 0;
 		const slackMoments = moments.filter(
 			({ leastTension, greatestTension }) => leastTension < slackBelow(greatestTension)
 		).length;

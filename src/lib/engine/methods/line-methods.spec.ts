@@ -1,4 +1,5 @@
 /** What the methods of the line say at the door: refusals, warnings, figures beyond any build. */
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { asBuilt } from './as-built';
 import { climberEnvelope } from './climber-envelope';
@@ -247,5 +248,57 @@ describe('the field', () => {
 	it('knows no balance inside a body', () => {
 		const fast = { kind: 'own', gm: 4e14, radius: 6.4e6, period: 3600 };
 		expect(refusal(field, { site: fast, radii: [] }).message).toContain('inside the body');
+	});
+});
+
+describe('whatever comes in', () => {
+	const figure = fc.oneof(
+		fc.constantFrom(R, 42_164_173, 1e8, 3.8e8, 1300, 1e-6, 5e10, 1e-12),
+		fc.double({ min: 1e-300, max: 1e300, noNaN: true }),
+		fc.double({ min: -30, max: 30, noNaN: true }).map((power) => 10 ** power)
+	);
+	const place = fc.oneof(
+		fc.constant(EARTH),
+		fc.record({ kind: fc.constant('moon'), side: fc.constantFrom('near', 'far') }),
+		fc.record({ kind: fc.constant('own'), gm: figure, radius: figure, rate: figure })
+	);
+	const ascending = fc
+		.array(figure, { minLength: 2, maxLength: 5 })
+		.map((radii) => radii.sort((a, b) => a - b));
+	const given = fc.record({
+		site: place,
+		density: figure,
+		allowable: figure,
+		factorOfSafety: fc.constantFrom(1, 2.5)
+	});
+	const anySizing = fc
+		.record({ lift: figure, top: figure })
+		.chain(({ lift, top }) =>
+			given.map((more) => ({ ...more, base: { kind: 'lift', lift }, top, rangePoints: 3 }))
+		);
+	const anyLine = fc.record({ given, ascending, figure, mass: figure }).map((drawn) => ({
+		...drawn.given,
+		section: {
+			kind: 'table',
+			rows: drawn.ascending.map((radius, i) => ({ radius, area: drawn.figure ** (1 / (i + 1)) }))
+		},
+		masses: [{ radius: drawn.ascending[1], mass: drawn.mass }],
+		counterweight: drawn.mass,
+		elasticity: { modulus: drawn.figure },
+		points: 5
+	}));
+
+	it.each([
+		['taper', taper, anySizing],
+		['as-built', asBuilt, anyLine]
+	] as const)('%s answers in numbers or refuses in words', (_, method, input) => {
+		fc.assert(
+			fc.property(input as fc.Arbitrary<unknown>, (input) => {
+				const found = answer(method as AnyMethod, input);
+				if (!found.ok) expect(found.refusal.message).toMatch(/\w.*\./);
+				else expect(JSON.stringify(found.outputs)).not.toContain('null');
+			}),
+			{ numRuns: 400 }
+		);
 	});
 });
