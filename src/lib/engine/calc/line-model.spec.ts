@@ -66,7 +66,7 @@ describe('a line model', () => {
 		['density', '-3 kg/m^3', 'The density must be above 0.'],
 		['density', '3 km', 'The density must be a density, M L⁻³; this is a length, L.'],
 		['factorOfSafety', '0', 'The factor of safety must be above 0.'],
-		['reserve', '-1', 'The reserve must be 0 or more.'],
+		['reserve', '-1', 'The reserve of lift must be 0 or more.'],
 		['lift', 'foo', 'There is no quantity foo in this note.']
 	])('tells what is wrong with its %s: %s', (field, text, message) => {
 		expect(modelOf([lineModel({ [field]: text })]).faults).toMatchObject([

@@ -1,55 +1,26 @@
 /** A line model in its first form: the constant-stress taper on one body, with its refusals in words. */
-import {
-	AREA,
-	DENSITY,
-	LENGTH,
-	MASS,
-	PRESSURE,
-	PURE,
-	equal,
-	inWords,
-	type Dimension
-} from '../quantities/dimension';
+import { equal, inWords, type Dimension } from '../quantities/dimension';
 import { formatFigure, kilometres } from '../quantities/format';
 import { BODIES } from '../line/bodies';
 import type { Field } from '../line/field';
 import { ofBody } from '../line/site';
 import { profileTaper, sizeTaper, type TaperInput } from '../line/taper';
+import { fits } from '../methods/check';
 import type { Told } from '../methods/parameter';
 import { fault } from './faults';
 import type { Formula, FormulaOutcome } from './formula';
 import { valueType } from './infer';
 import type { LineModelItem } from './items';
+import { MODEL_FIELDS, MODEL_INPUTS, type ModelField } from './model-inputs';
 import { OUTPUTS } from './model-outputs';
 import { DEFAULT_DIGITS, shown } from './quantity';
 import type { Fault, LineModelResult, ModelOutput, Outcome } from './results';
 import type { Scope } from './scope';
 import { warnings } from './model-warnings';
 
-export const MODEL_FIELDS = [
-	'density',
-	'allowable',
-	'factorOfSafety',
-	'lift',
-	'area',
-	'reserve',
-	'top'
-] as const;
-export type ModelField = (typeof MODEL_FIELDS)[number];
 export type ModelFormulas = Record<ModelField, Formula>;
 
 type Body = Omit<LineModelResult, 'id' | 'kind' | 'uses' | 'usedIn' | 'symbol'>;
-
-const WANTED: Record<ModelField, { what: string; dimension: Dimension; atLeast: 'above 0' | '0' }> =
-	{
-		density: { what: 'density', dimension: DENSITY, atLeast: 'above 0' },
-		allowable: { what: 'allowable', dimension: PRESSURE, atLeast: 'above 0' },
-		factorOfSafety: { what: 'factor of safety', dimension: PURE, atLeast: 'above 0' },
-		lift: { what: 'lift', dimension: MASS, atLeast: 'above 0' },
-		area: { what: 'section at the anchor', dimension: AREA, atLeast: 'above 0' },
-		reserve: { what: 'reserve', dimension: PURE, atLeast: '0' },
-		top: { what: 'height of the top', dimension: LENGTH, atLeast: 'above 0' }
-	};
 
 /** The fields that the chosen way of sizing reads. */
 export const fieldsRead = (item: LineModelItem): ModelField[] =>
@@ -145,19 +116,18 @@ function inputShown(field: ModelField, outcome: FormulaOutcome): Outcome {
 function inputFaults(field: ModelField, outcome: FormulaOutcome): Fault[] {
 	if (outcome.state === 'fault') return outcome.faults;
 	if (outcome.state !== 'value') return [];
-	const { what, dimension, atLeast } = WANTED[field];
+	const { label, dimension, range } = MODEL_INPUTS[field];
 	if (!equal(outcome.type.dimension, dimension)) {
 		return [
 			fault(
 				'dimension',
-				`The ${what} must be ${inWords(dimension)}; this is ${inWords(outcome.type.dimension)}.`
+				`The ${label} must be ${inWords(dimension)}; this is ${inWords(outcome.type.dimension)}.`
 			)
 		];
 	}
-	const fits = atLeast === '0' ? outcome.si >= 0 : outcome.si > 0;
-	return fits
-		? []
-		: [fault('refused', `The ${what} must be ${atLeast === '0' ? '0 or more' : 'above 0'}.`)];
+	if (fits(range, outcome.si)) return [];
+	const wanted = 'least' in range ? '0 or more' : 'above 0';
+	return [fault('refused', `The ${label} must be ${wanted}.`)];
 }
 
 /** In SI, null for what is blank. */

@@ -6,14 +6,13 @@ import { valueType } from './infer';
 import type { LineModelItem } from './items';
 import { joined, type Linear } from './linear';
 import {
-	MODEL_FIELDS,
 	evaluateLineModel,
 	fieldsRead,
 	outputsAt,
-	type ModelField,
 	type ModelFormulas,
 	type ModelValues
 } from './line-model';
+import { MODEL_FIELDS, type ModelField } from './model-inputs';
 import { OUTPUTS } from './model-outputs';
 import { withUncertainty } from './quantity';
 import type { Fault, LineModelResult } from './results';

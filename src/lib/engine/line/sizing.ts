@@ -50,11 +50,12 @@ export const sizingInputs = {
 		}
 	}),
 	reserve: quantity({
-		label: 'further lift held in reserve, as a fraction',
+		label: 'reserve of lift',
 		dimension: PURE,
 		unit: '',
 		range: { least: 0 },
-		default: 0
+		default: 0,
+		help: 'Further lift that the base carries, as a fraction of the lift.'
 	}),
 	top: {
 		...givenRadius('radius of the top, from the body’s centre', 'r_t'),

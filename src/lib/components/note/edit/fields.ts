@@ -1,4 +1,6 @@
 /** How the fields of each kind stand in an open row. */
+import { MODEL_INPUTS, type ModelField } from '$lib/engine/calc/model-inputs';
+import type { NumberParameter } from '$lib/engine/methods/parameter';
 import type { Item, ItemKind } from '$lib/note/items';
 
 export type FieldPlan = {
@@ -27,6 +29,12 @@ const expression = (field: string, label: string, span: number, hint = ''): Fiel
 	...words(field, label, span, hint),
 	typed: 'expression'
 });
+
+/** Named and explained by the method's own description. */
+function input(field: ModelField, span: number): FieldPlan {
+	const { label, help = '' }: NumberParameter = MODEL_INPUTS[field];
+	return expression(field, label[0]!.toUpperCase() + label.slice(1), span, help);
+}
 
 const model = (test: (item: Extract<Item, { kind: 'lineModel' }>) => boolean) => (item: Item) =>
 	item.kind === 'lineModel' && test(item);
@@ -62,19 +70,13 @@ export const PLANS: Record<Exclude<ItemKind, 'text'>, FieldPlan[]> = {
 	lineModel: [
 		name('symbol', 'Name', 2, 'outputs are name.taper …'),
 		words('description', 'What it is', 7),
-		expression('density', 'Density', 4),
-		expression('allowable', 'Allowable strength', 4),
-		expression('factorOfSafety', 'Factor of safety', 4),
-		{ ...expression('lift', 'Lift at the anchor', 4), shown: model((m) => m.baseMode === 'lift') },
-		{
-			...expression('reserve', 'Reserve of lift', 4, 'a fraction; empty is 0'),
-			shown: model((m) => m.baseMode === 'lift')
-		},
-		{
-			...expression('area', 'Section at the anchor', 4),
-			shown: model((m) => m.baseMode === 'area')
-		},
-		expression('top', 'Height of the top', 4)
+		input('density', 4),
+		input('allowable', 4),
+		input('factorOfSafety', 4),
+		{ ...input('lift', 4), shown: model((m) => m.baseMode === 'lift') },
+		{ ...input('reserve', 4), shown: model((m) => m.baseMode === 'lift') },
+		{ ...input('area', 4), shown: model((m) => m.baseMode === 'area') },
+		input('top', 4)
 	],
 	evidence: [words('description', 'What it shows', 12)]
 };
