@@ -1,12 +1,6 @@
 /** Bodies a line may stand on. Each figure carries its unit, its standard uncertainty and its source. */
 
-export type Figure = {
-	/** In coherent SI units. */
-	value: number;
-	/** Standard uncertainty in the same unit; null where the source gives none, 0 where it is defined. */
-	uncertainty: number | null;
-	source: string;
-};
+import type { Figure } from '../quantities/universal';
 
 export type Body = {
 	label: string;
@@ -23,9 +17,6 @@ export type Body = {
 };
 
 export type BodyName = 'earth' | 'mars' | 'moon' | 'ceres';
-
-/** The Sun's gravitational parameter, m³/s². */
-export const SUN_GM = 1.32712440018e20;
 
 const turn = 2 * Math.PI;
 

@@ -2,6 +2,7 @@
 import { choice, flag, quantity, variant, type ValueOf } from '../methods/parameter';
 import { Refused } from '../methods/refused';
 import { LENGTH, PURE, TIME, dimension, over } from '../quantities/dimension';
+import { UNIVERSAL } from '../quantities/universal';
 import { BODIES, type Body } from './bodies';
 import { bodyField, moonField, type Field, type Spheroid } from './field';
 
@@ -125,9 +126,6 @@ export const site = variant({
 
 export type Site = ValueOf<typeof site>;
 
-/** Constant of gravitation, m³/(kg s²): CODATA 2018. */
-const G = 6.6743e-11;
-
 export const ofBody = (body: Body, withJ2: boolean): Field => bodyField(spheroid(body, withJ2));
 
 const spheroid = ({ gm, radius, rate, j2 }: Body, withJ2: boolean): Spheroid => ({
@@ -149,7 +147,10 @@ export function fieldOf(place: Site): Field {
 /** The one body that a line stands on. */
 export function spheroidOf(place: Site & { kind: 'body' | 'own' }): Spheroid {
 	if (place.kind === 'body') return spheroid(BODIES[place.body], place.j2);
-	const gm = oneOf('site', { gm: place.gm, mass: place.mass && place.mass * G });
+	const gm = oneOf('site', {
+		gm: place.gm,
+		mass: place.mass && place.mass * UNIVERSAL.gravitation.value
+	});
 	const rate = oneOf('site', {
 		rate: place.rate,
 		period: place.period && (2 * Math.PI) / place.period

@@ -2,6 +2,7 @@
  * A line of uniform section in the co-rotating frame: σ(r) = σ₀ + ρ [U(r) − U(R)], greatest at r_s. With
  * σ₀ at the anchor and nothing pulling at its upper end, that end lies above r_s, where σ is zero again.
  */
+import { UNIVERSAL } from '../quantities/universal';
 import type { Field } from './field';
 import { radiusAbove } from './level';
 
@@ -29,4 +30,5 @@ export function uniformStress(
 }
 
 /** Length of a uniform wire that breaks under its own weight at g₀, m. */
-export const breakingLength = (stress: number, density: number) => stress / (density * 9.80665);
+export const breakingLength = (stress: number, density: number) =>
+	stress / (density * UNIVERSAL.standardGravity.value);

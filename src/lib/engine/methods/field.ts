@@ -1,4 +1,5 @@
 /** Field: what pulls on a line at given radii, and where it balances. */
+import { BODIES, type BodyName } from '../line/bodies';
 import { givenRadius, radiusOf } from '../line/parameters';
 import { fieldOf, site } from '../line/site';
 import { siteWarnings } from '../line/site-warnings';
@@ -11,8 +12,9 @@ import {
 	over
 } from '../quantities/dimension';
 import { distance } from '../quantities/format';
+import type { Figure } from '../quantities/universal';
 import { defineMethod } from './method';
-import { group, list, quantity } from './parameter';
+import { group, list, quantity, text } from './parameter';
 import { refuseInput } from './refused';
 
 const stiffness = (label: string, symbol: string) =>
@@ -46,6 +48,13 @@ export const field = defineMethod({
 			symbol: 'ω',
 			dimension: over(PURE, TIME),
 			unit: 'rad/s'
+		}),
+		figures: list({
+			label: 'figures of a known body, with standard uncertainty and source',
+			fewest: 0,
+			most: 4,
+			of: text({ label: 'figure', longest: 200 }),
+			help: 'In SI units; an uncertainty of 0 is a definition.'
 		}),
 		climb: energy('gain of potential from the anchor to the balance radius', 'U(r_s) − U(R)'),
 		points: list({
@@ -100,6 +109,7 @@ export const field = defineMethod({
 				baseRadius: field.base,
 				balanceRadius: field.balance,
 				rate: field.omega,
+				figures: site.kind === 'body' ? figuresOf(site.body) : [],
 				climb: field.depth(field.base),
 				points: radii.map((r) => ({
 					radius: r,
@@ -115,3 +125,17 @@ export const field = defineMethod({
 		};
 	}
 });
+
+function figuresOf(name: BodyName): string[] {
+	const { gm, radius, rate, j2 } = BODIES[name];
+	const told = (symbol: string, unit: string, { value, uncertainty, source }: Figure) => {
+		const spread = uncertainty === null ? 'no uncertainty given' : `± ${uncertainty}`;
+		return `${symbol} = ${value}${unit} (${spread}; ${source})`;
+	};
+	return [
+		told('GM', ' m³/s²', gm),
+		told('R', ' m', radius),
+		told('ω', ' rad/s', rate),
+		...(j2 ? [told('J2', '', j2)] : [])
+	];
+}

@@ -1,6 +1,7 @@
 /** Constants that expressions may name. */
-import { BODIES, SUN_GM, type BodyName } from '../line/bodies';
+import { BODIES, type BodyName } from '../line/bodies';
 import { ACCELERATION, LENGTH, PURE, TIME, dimension, over, type Dimension } from './dimension';
+import { UNIVERSAL } from './universal';
 
 export type Constant = {
 	/** In coherent SI units. */
@@ -17,21 +18,21 @@ const general: Record<string, Constant> = {
 	pi: { value: Math.PI, dimension: PURE, unit: '', description: 'Circle constant', tex: '\\pi' },
 	e: { value: Math.E, dimension: PURE, unit: '', description: 'Base of ln', tex: '\\mathrm{e}' },
 	g_0: {
-		value: 9.80665,
+		value: UNIVERSAL.standardGravity.value,
 		dimension: ACCELERATION,
 		unit: 'm/s^2',
 		description: 'Standard acceleration of free fall, exact (3rd CGPM, 1901)',
 		tex: 'g_0'
 	},
 	G: {
-		value: 6.6743e-11,
+		value: UNIVERSAL.gravitation.value,
 		dimension: dimension(-1, 3, -2),
 		unit: 'm^3/(kg s^2)',
 		description: 'Constant of gravitation (CODATA 2018)',
 		tex: 'G'
 	},
 	'sun.GM': {
-		value: SUN_GM,
+		value: UNIVERSAL.sunGm.value,
 		dimension: GRAVITATIONAL,
 		unit: 'm^3/s^2',
 		description: 'Sun, gravitational parameter',

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { SUN_GM } from '../line/bodies';
+import { UNIVERSAL } from '../quantities/universal';
 import { exactly } from '../numerics/double-double';
 import { departureAt } from './departure';
 import { IN_PLANE, c3ToReach, heliocentricPath, relativeExcess } from './heliocentric';
@@ -16,8 +16,8 @@ describe('the path about the Sun', () => {
 		fc.assert(
 			fc.property(distance, distance, (from, target) => {
 				fc.pre(Math.abs(target / from - 1) > 1e-9);
-				const c3 = c3ToReach(target, from, SUN_GM);
-				const excess = relativeExcess(exactly(c3), from, SUN_GM);
+				const c3 = c3ToReach(target, from, UNIVERSAL.sunGm.value);
+				const excess = relativeExcess(exactly(c3), from, UNIVERSAL.sunGm.value);
 				const { nearPoint, farPoint } = heliocentricPath(
 					from,
 					excess,

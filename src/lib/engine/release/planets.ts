@@ -3,9 +3,9 @@
  * planets, JPL (E. M. Standish), table 1; from memory. The Earth's is that of the Earth–Moon barycentre.
  */
 import type { BodyName } from '../line/bodies';
+import { UNIVERSAL } from '../quantities/universal';
 
-/** IAU 2012 resolution B2, exact, m. */
-export const AU = 149_597_870_700;
+const AU = UNIVERSAL.astronomicalUnit.value;
 
 const IN_AU = {
 	Mercury: 0.38709927,

@@ -3,7 +3,7 @@ import { group, quantity, type ValuesOf } from '../methods/parameter';
 import { refuseInput, Refused } from '../methods/refused';
 import type { Site } from '../line/site';
 import { LENGTH, PURE, dimension } from '../quantities/dimension';
-import { SUN_GM } from '../line/bodies';
+import { UNIVERSAL } from '../quantities/universal';
 import { SUN_DISTANCES } from './planets';
 
 export const sunInputs = {
@@ -22,7 +22,7 @@ export const sunInputs = {
 		dimension: dimension(0, 3, -2),
 		unit: 'm^3/s^2',
 		range: { above: 0 },
-		default: SUN_GM
+		default: UNIVERSAL.sunGm.value
 	})
 } as const;
 
