@@ -1,8 +1,8 @@
 /** What describes a line to be sized: its place, material, base and top. Shared by the exact taper and the stepped line. */
-import { quantity, variant, type ValuesOf } from '../methods/parameter';
+import { quantity, variant, type Told, type ValuesOf } from '../methods/parameter';
 import { refuseInput } from '../methods/refused';
 import { AREA, DENSITY, MASS, PURE } from '../quantities/dimension';
-import { distance } from '../quantities/format';
+import { distance, formatFigure } from '../quantities/format';
 import type { Field } from './field';
 import { givenRadius } from './parameters';
 import { fieldOf, site } from './site';
@@ -89,7 +89,13 @@ export function refuseTop(field: Field, path: string, top: number): void {
 		);
 }
 
-export const sizingWarnings = (input: Sizing, field: Field): string[] => [
+/** @param peakArea greatest section, m² */
+export const sizingWarnings = (input: Sizing, field: Field, peakArea: Told): string[] => [
+	...(typeof peakArea === 'number'
+		? []
+		: [
+				`Beyond any build: the greatest section is 10 to the power ${formatFigure(peakArea.log10, 4)} m².`
+			]),
 	'Sized for a climber below the balance radius only: one above it adds its outward pull to everything below. The as-built analysis and the climber envelope look at that.',
 	...strengthWarnings(input),
 	...siteWarnings(input.site, field, input.top)

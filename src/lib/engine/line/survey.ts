@@ -69,10 +69,16 @@ export function survey(
 		const [isTop, isBottom] = [to === stretch.to, from === stretch.from];
 		const upper = isTop ? added + stretch.upper : inside(to);
 		const lower = isBottom ? added + stretch.lower : inside(from);
-		look(to, isTop ? stretch.upperArea : piece.area(to), upper);
-		const peak = piece.slope && innerPeak(line, piece, [from, lower], [to, upper], inside);
-		if (peak) look(peak, piece.area(peak), inside(peak));
-		look(from, isBottom ? stretch.lowerArea : piece.area(from), lower);
+		const upperArea = isTop ? stretch.upperArea : piece.area(to);
+		const lowerArea = isBottom ? stretch.lowerArea : piece.area(from);
+		look(to, upperArea, upper);
+		// T and A are monotonic here: no stress inside is above this, so most stretches of a long table are passed by.
+		const most = Math.max(lower, upper) / Math.min(lowerArea, upperArea);
+		if (piece.slope && most > found.stress) {
+			const peak = innerPeak(line, piece, [from, lower], [to, upper], inside);
+			if (peak !== null) look(peak, piece.area(peak), inside(peak));
+		}
+		look(from, lowerArea, lower);
 	};
 	let next = 0;
 	const passed = (r: number) => next < down.length && down[next]!.radius >= r;

@@ -67,6 +67,7 @@ describe('the taper', () => {
 		const steel = outputs(taper, { ...sizing, density: 7900, allowable: 1e9 });
 		expect(steel.taper.log10).toBeGreaterThan(300);
 		expect(steel.trade[0].line.log10).toBeGreaterThan(300);
+		expect(steel.warnings[0]).toMatch(/^Beyond any build: .* 10 to the power 3\d\d/);
 	});
 
 	it('stands on both sides of a moon, and ends before the primary', () => {

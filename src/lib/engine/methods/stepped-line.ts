@@ -159,7 +159,7 @@ export const steppedLine = defineMethod({
 				),
 				sections: sections.map(describe)
 			},
-			warnings: sizingWarnings(input, field)
+			warnings: sizingWarnings(input, field, toldOf(lnGreatestArea))
 		};
 	}
 });

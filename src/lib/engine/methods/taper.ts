@@ -151,7 +151,7 @@ export const taper = defineMethod({
 				topWithin: topWithin(field, shape, { designStress, rangeTop, share: input.within }),
 				trade: tradeCurve(field, shape, lnPeak, tops)
 			},
-			warnings: sizingWarnings(input, field)
+			warnings: sizingWarnings(input, field, sized.synchronousArea)
 		};
 	}
 });
