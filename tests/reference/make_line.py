@@ -1,14 +1,14 @@
 #!/usr/bin/env python3
 """Reference figures for the statics of a line: field, uniform line, taper, stepped line, as-built and envelope.
 
-Shares nothing with the engine: potentials stand as they are (no factoring) at 50 digits, balance radii and
-ends come from bisection, masses, tensions and stretches from tanh-sinh quadrature of the plain integrands,
-greatest stresses from a search along the line. Lines are drawn at random over the whole permitted range
+Shares nothing with the engine: potentials stand as they are (no factoring) at 40 digits, balance radii and
+ends come from bisection, masses and stretches from tanh-sinh quadrature of the plain integrands, tensions from
+antiderivatives as they stand (and in case D1 from SciPy's steps), greatest stresses from a search along the line. Lines are drawn at random over the whole permitted range
 (seeded), and some extremes by hand. Every input is a double, and the reference starts from the same doubles.
 
     python3 tests/reference/make_line.py
 
-writes tests/reference/data/line.json in about three minutes. Needs python3-mpmath and python3-scipy.
+writes tests/reference/data/line.json in a minute or two. Needs python3-mpmath and python3-scipy.
 """
 import json
 import sys

@@ -9,7 +9,7 @@ from sizing import Taper
 
 
 class Piece:
-    """A stretch with A(r) and an antiderivative of A g, at 50 digits, where no cancellation matters."""
+    """A stretch with A(r) and an antiderivative of A g, at 40 digits, where no cancellation matters."""
 
     def __init__(self, field, a, b, area_a, area_b):
         slope = (area_b - area_a) / (b - a)
