@@ -2,6 +2,7 @@
 import { describe, expect, it } from 'vitest';
 import { create, unitDependencies } from 'mathjs';
 import { fromSi, parseUnit, toSi } from '$lib/engine/quantities/units';
+import gnu from './data/units.json';
 import { OFFERED_UNITS, PREFIXES, UNITS } from '$lib/engine/quantities/unit-table';
 
 const unit = (text: string) => {
@@ -48,7 +49,22 @@ const PUBLISHED: [text: string, si: number, digits: number, source: string][] = 
 	['W/(m K)', 1, 15, 'SI Brochure, table 5']
 ];
 
+/** Unknown to GNU units under the meaning they have here; held against other sources above. */
+const WITHOUT_GNU = ['degC', '°C', 'degF', 'sidereal_day', 'strain'];
+
 describe('units', () => {
+	it('agree with GNU units, every one that may be typed (make_units.py)', () => {
+		expect(Object.keys(gnu)).toHaveLength(406);
+		for (const [name, factor] of Object.entries(gnu))
+			expect(Math.abs(toSi(1, unit(name)) / factor - 1), name).toBeLessThan(1e-14);
+		const missing = [...UNITS.keys()].filter(
+			(name) =>
+				!(name.replace('μ', 'µ') in gnu) &&
+				!WITHOUT_GNU.includes(name.replace(/^[mµμun](?=strain)/u, ''))
+		);
+		expect(missing).toEqual([]);
+	});
+
 	it('convert as published', () => {
 		expect(PUBLISHED).toHaveLength(34);
 		for (const [text, si, digits, source] of PUBLISHED) {

@@ -1,6 +1,9 @@
 /** All methods, by the name under which they are called. */
+import { allowable } from './allowable';
 import { asBuilt } from './as-built';
+import { batchTest } from './batch-test';
 import { climberEnvelope } from './climber-envelope';
+import { couponStatistics } from './coupon-statistics';
 import { cutRate } from './cut-rate';
 import { field } from './field';
 import { reach } from './reach';
@@ -14,6 +17,7 @@ import { periods } from './periods';
 import { sideDisplacement } from './side-displacement';
 import { steppedLine } from './stepped-line';
 import { taper } from './taper';
+import { toleranceFactor } from './tolerance-factor';
 import { transit } from './transit';
 import { uniformLine } from './uniform-line';
 
@@ -33,7 +37,11 @@ const ALL: readonly AnyMethod[] = [
 	spinningAsBuilt,
 	transit,
 	sideDisplacement,
-	periods
+	periods,
+	couponStatistics,
+	batchTest,
+	toleranceFactor,
+	allowable
 ];
 
 export const METHODS: ReadonlyMap<string, AnyMethod> = new Map(
