@@ -16,6 +16,7 @@ export function cellOf(parameter: Parameter, value: unknown): string {
 	if (value === undefined || value === null) return 'none';
 	if (parameter.kind === 'choice') return parameter.options[String(value)] ?? String(value);
 	if (typeof value === 'boolean') return value ? 'yes' : 'no';
+	if (parameter.kind === 'open') return JSON.stringify(value);
 	if (typeof value === 'object' && 'log10' in value)
 		return `10 to the power ${formatFigure(Number(value.log10), DIGITS)}, beyond any build`;
 	if (typeof value !== 'number') return String(value);

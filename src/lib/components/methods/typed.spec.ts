@@ -86,7 +86,8 @@ describe('what is typed into a form', () => {
 			expect(faults, name).toEqual([]);
 			const checked = checkInputs(inputs, values);
 			if (!checked.ok)
-				for (const { message } of checked.faults) expect(message, name).toMatch(/is missing|must have/);
+				for (const { message } of checked.faults)
+					expect(message, name).toMatch(/is missing|must have/);
 		}
 	});
 });

@@ -103,8 +103,21 @@ function readOne(parameter: Parameter, typed: Typed, faults: InputFault[], path:
 			const kind = String(parts.kind);
 			return { kind, ...readFields(parameter.cases[kind]!.fields, parts, faults, path) };
 		}
+		case 'open':
+			return readOpen(String(typed), faults, path);
 		case 'told':
 			return undefined;
+	}
+}
+
+/** What another method's description tells of, as JSON in SI. */
+function readOpen(typed: string, faults: InputFault[], path: string): unknown {
+	if (typed.trim() === '') return undefined;
+	try {
+		return JSON.parse(typed);
+	} catch {
+		faults.push({ path, message: 'This is not JSON.' });
+		return undefined;
 	}
 }
 

@@ -8,7 +8,7 @@ import type { Formula, FormulaOutcome } from './formula';
 import type { ValueType } from './infer';
 import type { CheckItem } from './items';
 import { joined, type Linear } from './linear';
-import { marginKind, marginOf, marginSlopes } from './margin';
+import { marginKind, marginOf, marginSlopes, verdictOf } from './margin';
 import { DEFAULT_DIGITS, shown, uncertaintyIn, withUncertainty } from './quantity';
 import type { CheckResult, Fault, Outcome } from './results';
 import type { Scope } from './scope';
@@ -18,9 +18,6 @@ export type CheckFormulas = Record<'left' | 'right' | 'tolerance' | 'required', 
 type Body = Omit<CheckResult, 'id' | 'kind' | 'uses' | 'usedIn'>;
 type Value = FormulaOutcome & { state: 'value' };
 type Figures = { left: Value; right: Value; tolerance: Value | null; required: Value | null };
-
-/** Equal to twelve digits is equal: exp and log differ in the last one between platforms. */
-const TWELVE_DIGITS = 1e-12;
 
 /** Finds the figure of each part that the check reads. */
 export function evaluateParts(
@@ -151,14 +148,12 @@ function decide(
 
 	const margin = marginOf(given);
 	const ratio = margin.kind === 'ratio';
-	const slack = TWELVE_DIGITS * (ratio ? 1 : Math.max(Math.abs(left.si), Math.abs(right.si)));
-	const holds = margin.size >= given.required - slack;
-	const thin = margin.relative < thinLimit - TWELVE_DIGITS;
+	const state = verdictOf(margin, given, thinLimit);
 	const inUnit = (si: number) => difference(si, unit);
 	return {
 		...waiting,
 		...sides,
-		state: !holds ? 'fails' : thin ? 'thin' : 'holds',
+		state,
 		required: ratio ? given.required : inUnit(given.required),
 		margin: {
 			kind: margin.kind,
@@ -167,7 +162,7 @@ function decide(
 			uncertainty: ratio ? uncertain.margin : spread(uncertain.margin, unit),
 			relative: margin.relative
 		},
-		shortBy: holds ? null : { value: inUnit(margin.shortBy), unit },
+		shortBy: state !== 'fails' ? null : { value: inUnit(margin.shortBy), unit },
 		tex: conditionTex(item.relation, formulas, { ...sides, unit })
 	};
 }

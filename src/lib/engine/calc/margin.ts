@@ -59,5 +59,16 @@ export function marginSlopes(sides: Sides): [left: number, right: number, tolera
 	return [-away / tolerance, away / tolerance, Math.abs(left - right) / tolerance / tolerance];
 }
 
+/** Equal to twelve digits is equal: exp and log differ in the last one between platforms. */
+const TWELVE_DIGITS = 1e-12;
+
+/** Below the required margin a check fails; above it, it is thin below the thin limit. */
+export function verdictOf(margin: Margin, sides: Sides, thinLimit: number) {
+	const { left, right, required } = sides;
+	const scale = margin.kind === 'ratio' ? 1 : Math.max(Math.abs(left), Math.abs(right));
+	if (margin.size < required - TWELVE_DIGITS * scale) return 'fails';
+	return margin.relative < thinLimit - TWELVE_DIGITS ? 'thin' : 'holds';
+}
+
 /** A ratio of the largest to the smallest figure leaves the range of numbers. */
 const told = (value: number) => Math.max(-1e300, Math.min(1e300, value));

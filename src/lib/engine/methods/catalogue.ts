@@ -15,13 +15,19 @@ import { spinningTether } from './spinning-tether';
 import type { AnyMethod } from './method';
 import { periods } from './periods';
 import { sideDisplacement } from './side-displacement';
+import { firstOrder } from './first-order';
+import { margin } from './margin';
+import { massBudget } from './mass-budget';
+import { monteCarlo } from './monte-carlo';
 import { steppedLine } from './stepped-line';
+import { sweep } from './sweep';
 import { taper } from './taper';
 import { toleranceFactor } from './tolerance-factor';
 import { transit } from './transit';
+import { tornado } from './tornado';
 import { uniformLine } from './uniform-line';
 
-const ALL: readonly AnyMethod[] = [
+const PLAIN: readonly AnyMethod[] = [
 	field,
 	uniformLine,
 	taper,
@@ -41,9 +47,17 @@ const ALL: readonly AnyMethod[] = [
 	couponStatistics,
 	batchTest,
 	toleranceFactor,
-	allowable
+	allowable,
+	margin,
+	massBudget
 ];
 
-export const METHODS: ReadonlyMap<string, AnyMethod> = new Map(
-	ALL.map((method) => [method.name, method])
+const byName = (methods: readonly AnyMethod[]) =>
+	new Map(methods.map((method) => [method.name, method]));
+
+/** Studies act on the other methods, and are given them, so that no study acts on a study. */
+const STUDIES: readonly AnyMethod[] = [monteCarlo, firstOrder, tornado, sweep].map((study) =>
+	study(byName(PLAIN))
 );
+
+export const METHODS: ReadonlyMap<string, AnyMethod> = byName([...PLAIN, ...STUDIES]);

@@ -104,6 +104,8 @@ function checkOne(
 			const fields = checkFields(parameter.cases[kind]!.fields, given, path, faults, ['kind']);
 			return fields && { kind, ...fields };
 		}
+		case 'open':
+			return isRecord(given) ? given : fail('must be an object of named values.');
 		case 'told':
 			throw new Error('Only outputs may be beyond any build.');
 	}
@@ -116,7 +118,7 @@ export const fits = ({ above, least, below, most }: Range, value: number): boole
 	(most === undefined || value <= most);
 
 /** What the number must be, in words; null when it is. */
-function outOfRange(range: Range, value: number): string | null {
+export function outOfRange(range: Range, value: number): string | null {
 	if (fits(range, value)) return null;
 	const { above, least, below, most } = range;
 	const wanted = [

@@ -68,6 +68,8 @@ function one(parameter: Parameter): JsonSchema {
 					...objectOf(fields, { kind: { const: kind } })
 				}))
 			};
+		case 'open':
+			return { ...about, type: 'object' };
 		case 'told':
 			return {
 				...about,
@@ -89,11 +91,11 @@ const preset = (parameter: { default?: unknown }): JsonSchema =>
 /** Keywords of our own beside the standard's: which quantity it is, and the unit that is usual for it. */
 const measure = ({ dimension, unit, symbol }: Measured): JsonSchema => ({
 	...(symbol && { 'x-symbol': symbol }),
-	'x-dimension': dimensionText(dimension),
+	...(dimension && { 'x-dimension': dimensionText(dimension) }),
 	'x-usual-unit': unit
 });
 
-type Measured = { dimension: readonly number[]; unit: string; symbol?: string };
+type Measured = { dimension: readonly number[] | null; unit: string; symbol?: string };
 
 const bounds = ({ above, least, below, most }: Range): JsonSchema => ({
 	...(above !== undefined && { exclusiveMinimum: above }),

@@ -30,7 +30,10 @@ export type Method<I extends Parameters = Parameters, O extends Parameters = Par
 > & {
 	inputs: I;
 	outputs: O;
-	/** @throws Refused */
+	/**
+	 * Outputs that cost much may be getters, for a study reads only some.
+	 * @throws Refused
+	 */
 	run(input: ValuesOf<I>): { outputs: ValuesOf<O>; warnings?: string[] };
 };
 
@@ -62,7 +65,10 @@ export function answer<M extends AnyMethod>(
 		return refuse({ code: 'input', message, remedy: '', faults: checked.faults });
 	}
 	try {
-		const { outputs, warnings = [] } = method.run(checked.values as never);
+		const found = method.run(checked.values as never);
+		// Plain figures, also of outputs that are computed when they are read.
+		const outputs = { ...found.outputs };
+		const { warnings = [] } = found;
 		const lost = notFinite(outputs);
 		if (lost !== null)
 			return refuse({

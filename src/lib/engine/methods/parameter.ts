@@ -22,7 +22,8 @@ export type Range = { above?: number; least?: number; below?: number; most?: num
 
 export type NumberParameter = About & {
 	kind: 'number';
-	dimension: Dimension;
+	/** Null where it is that of what the figure is about, e.g. of an output named beside it. */
+	dimension: Dimension | null;
 	/** The unit that forms and tables show, e.g. "GPa"; values are in SI all the same. */
 	unit: string;
 	range: Range;
@@ -67,7 +68,10 @@ export type VariantParameter = About & {
 };
 
 /** A figure that may be beyond any build. Outputs only. */
-export type ToldParameter = About & { kind: 'told'; dimension: Dimension; unit: string };
+export type ToldParameter = About & { kind: 'told'; dimension: Dimension | null; unit: string };
+
+/** An object that another description tells of: the input of a method that is named beside it. */
+export type OpenParameter = About & { kind: 'open' };
 
 export type Parameter =
 	| NumberParameter
@@ -78,7 +82,8 @@ export type Parameter =
 	| ListParameter
 	| GroupParameter
 	| VariantParameter
-	| ToldParameter;
+	| ToldParameter
+	| OpenParameter;
 
 export type Parameters = Readonly<Record<string, Parameter>>;
 
@@ -95,17 +100,19 @@ type Required<P> = P extends { kind: 'number' | 'integer' }
 				? string
 				: P extends { kind: 'told' }
 					? Told
-					: P extends { kind: 'list'; of: infer Q }
-						? ValueOf<Q>[]
-						: P extends { kind: 'group'; fields: infer F }
-							? ValuesOf<F>
-							: P extends { kind: 'variant'; cases: infer C }
-								? {
-										[K in keyof C]: { kind: K } & (C[K] extends { fields: infer F }
-											? ValuesOf<F>
-											: never);
-									}[keyof C]
-								: never;
+					: P extends { kind: 'open' }
+						? Readonly<Record<string, unknown>>
+						: P extends { kind: 'list'; of: infer Q }
+							? ValueOf<Q>[]
+							: P extends { kind: 'group'; fields: infer F }
+								? ValuesOf<F>
+								: P extends { kind: 'variant'; cases: infer C }
+									? {
+											[K in keyof C]: { kind: K } & (C[K] extends { fields: infer F }
+												? ValuesOf<F>
+												: never);
+										}[keyof C]
+									: never;
 
 export type ValuesOf<F> = { [K in keyof F]: ValueOf<F[K]> };
 
@@ -158,4 +165,9 @@ export const variant = <const P extends Given<VariantParameter, never>>(about: P
 export const told = <const P extends Given<ToldParameter, never>>(about: P) => ({
 	...about,
 	kind: 'told' as const
+});
+
+export const open = <const P extends Given<OpenParameter, never>>(about: P) => ({
+	...about,
+	kind: 'open' as const
 });

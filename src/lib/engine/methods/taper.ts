@@ -148,10 +148,17 @@ export const taper = defineMethod({
 				totalPerLift: toldOf(lnOf(sized.total) - Math.log(sized.lift)),
 				length: sized.length,
 				balanceRadius: field.balance,
-				topWithin: topWithin(field, shape, { designStress, rangeTop, share: input.within }),
-				trade: tradeCurve(field, shape, lnPeak, tops)
+				// Computed where they are read: a study of the masses sizes many lines and reads neither.
+				get topWithin() {
+					return topWithin(field, shape, { designStress, rangeTop, share: input.within });
+				},
+				get trade() {
+					return tradeCurve(field, shape, lnPeak, tops);
+				}
 			},
-			warnings: sizingWarnings(input, field, sized.synchronousArea)
+			get warnings() {
+				return sizingWarnings(input, field, sized.synchronousArea);
+			}
 		};
 	}
 });
