@@ -3,12 +3,14 @@ import { DEMO_PASSWORD } from '../../server/seed/people';
 import { expect, signIn, test, type Site } from './harness';
 
 /** The address in the newest mail to somebody that leads into this site. */
-async function linkMailedTo(site: Site, to: string): Promise<string> {
+/** The newest link of its kind that somebody was sent; other journeys mail the same people. */
+async function linkMailedTo(site: Site, to: string, kind: 'invitation' | 'reset'): Promise<string> {
+	const link = new RegExp(`https?://\\S+/${kind}/\\S+`);
 	const newest = () =>
 		site
 			.mails(to)
-			.at(-1)
-			?.text.match(/https?:\/\/\S+/)?.[0] ?? '';
+			.flatMap(({ text }) => link.exec(text)?.[0] ?? [])
+			.at(-1) ?? '';
 	await expect.poll(newest, { timeout: 15_000 }).toContain(site.origin);
 	return newest();
 }
@@ -27,7 +29,7 @@ test('somebody is invited by mail, enters, works in the role given, and loses it
 	await solvang.getByRole('button', { name: 'Invite as engineer' }).click();
 	await expect(solvang.getByRole('main')).toContainText('ferrand@kelda.example');
 
-	const link = await linkMailedTo(site, 'ferrand@kelda.example');
+	const link = await linkMailedTo(site, 'ferrand@kelda.example', 'invitation');
 	const page = await (await browser.newContext({ baseURL })).newPage();
 	await page.goto(link);
 	await expect(page.getByRole('heading', { level: 1 })).toContainText('Cordillera Line');
@@ -70,7 +72,7 @@ test('a forgotten password is set anew by mail, once, and says the same for ever
 	expect(await says('nobody@halden.example')).toBe(known);
 	expect(site.mails('nobody@halden.example')).toEqual([]);
 
-	const link = await linkMailedTo(site, 'cordeiro@halden.example');
+	const link = await linkMailedTo(site, 'cordeiro@halden.example', 'reset');
 	await page.goto(link);
 	await page
 		.getByLabel(/password/i)
