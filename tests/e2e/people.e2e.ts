@@ -2,7 +2,6 @@ import type { Page } from '@playwright/test';
 import { DEMO_PASSWORD } from '../../server/seed/people';
 import { expect, signIn, test, type Site } from './harness';
 
-/** The address in the newest mail to somebody that leads into this site. */
 /** The newest link of its kind that somebody was sent; other journeys mail the same people. */
 async function linkMailedTo(site: Site, to: string, kind: 'invitation' | 'reset'): Promise<string> {
 	const link = new RegExp(`https?://\\S+/${kind}/\\S+`);
