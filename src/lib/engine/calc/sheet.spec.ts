@@ -64,6 +64,16 @@ describe('an edit', () => {
 		});
 	});
 
+	it('that makes a line model of a given is seen by what named the given', () => {
+		const named = lineModel({ id: 'other', symbol: '', lift: 'a' });
+		const model = lineModel({ id: 'a', symbol: 'a', lift: 'unknown' });
+		const sheet = createSheet();
+		for (const item of [given('a', '1', 't'), named, model]) sheet.apply({ upsert: [item] });
+		const fresh = createSheet();
+		fresh.apply({ upsert: [model, named] });
+		expect(sheet.results()).toEqual(fresh.results());
+	});
+
 	it('that brings a symbol back heals what waited for it', () => {
 		const sheet = sheetOf();
 		const before = sheet.results();

@@ -20,7 +20,8 @@ export class Slot {
 	roots: readonly string[];
 	/** Standard uncertainty in SI; null means exact or not known. */
 	uncertainty: number | null = null;
-	private move: Move = 'none';
+	/** Nothing that names it has seen a new slot: what stood there before may have been of another kind. */
+	private move: Move = 'manner';
 
 	constructor(id: string) {
 		this.roots = [id];
