@@ -110,6 +110,32 @@ test('a line model shows the figures that an independent integration gives, and 
 	await expect(saved(quispe)).toContainText('Saved');
 });
 
+test('a list goes value by value through a formula, and whoever reads the note opens its values', async ({
+	as
+}) => {
+	const abara = await as('abara');
+	const laine = await as('laine');
+	for (const page of [abara, laine]) await openNote(page, 'CL-DN-003');
+	const energy = row(laine, 'cl3-energy');
+	const expression = await field(abara, 'cl3-energy', 'Expression');
+	const before = await expression.inputValue();
+	await expression.fill('[14 t, 15 t, 3 s] * ΔU');
+	await expect(row(abara, 'cl3-energy')).toContainText('cannot be set beside it: it is a time');
+	await expression.fill('[14 t, 15 t, 16 t] * ΔU');
+	// 14, 15 and 16 t × 48.4227 MJ/kg in MWh.
+	await expect(row(abara, 'cl3-energy').getByRole('region', { name: 'Values' })).toContainText(
+		'E_s[2]201.8'
+	);
+	await expect(energy.locator('summary')).toHaveText(/^3 values, 188.3 to 215.2.MWh$/);
+	await energy.locator('summary').click();
+	await expect(energy.getByRole('row')).toHaveText([/188.3/, /201.8/, /215.2/]);
+	await expression.fill('interpolate(3 t, [2 t, 4 t], [1 MWh, 2 MWh])');
+	await expect(value(laine, 'cl3-energy')).toHaveText('1.500');
+	await expression.fill(before);
+	await expression.press('Enter');
+	await expect(value(laine, 'cl3-energy')).toHaveText('219.0');
+});
+
 test('a symbol is completed with Tab, and Esc leaves a row as it was', async ({ as }) => {
 	const abara = await as('abara');
 	await openNote(abara, 'CL-DN-003');

@@ -1,5 +1,5 @@
 /** The figures of an item, one by one, and how far they moved. */
-import type { CheckResult, Dimension, ItemResult, Outcome } from '../engine/calc/results';
+import type { CheckResult, Dimension, ItemResult, Listed, Outcome } from '../engine/calc/results';
 import { canonicalJson, sameFigure } from './canonical';
 import { FIELDS, type FieldForm, type Item, type NoteContent } from './items';
 
@@ -64,7 +64,14 @@ export function outcomeMoved(before: Outcome, after: Outcome): boolean {
 	if (before.state === 'value' && after.state === 'value') {
 		return relativeChange(before, after) !== 0;
 	}
+	if (before.state === 'list' && after.state === 'list') return listMoved(before.list, after.list);
 	return before.state !== after.state;
+}
+
+function listMoved(before: Listed, after: Listed): boolean {
+	if (before.count !== after.count || !sameDimension(before.dimension, after.dimension))
+		return true;
+	return after.si.some((si, i) => !sameFigure(before.si[i]!, si));
 }
 
 export function readingMoved(before: Reading, after: Reading): boolean {

@@ -1,5 +1,6 @@
 import { expect, test } from 'vitest';
-import { amount, marginUncertainty, marginWords, outcomeWords } from './figures';
+import type { Listed } from '$lib/engine/calc/results';
+import { amount, listWords, marginUncertainty, marginWords, outcomeWords } from './figures';
 
 // U+202F between value and unit and U+2212 for minus: ISO 80000-1, 7.3 and the sheet's grammar.
 test('a margin as a ratio has a sign and three decimals', () => {
@@ -10,6 +11,15 @@ test('a margin as a ratio has a sign and three decimals', () => {
 
 test('a margin as a difference carries its unit', () => {
 	expect(marginWords({ kind: 'difference', value: -2.8, unit: 'GPa' })).toBe('\u22122.80\u202fGPa');
+});
+
+test('a list says how many values it has and between which they lie', () => {
+	const list = { unit: 'km', digits: 3, si: [], values: [], uncertainties: null, mean: 0 };
+	const length: Listed['dimension'] = [0, 1, 0, 0, 0, 0, 0];
+	const of = (count: number, least: number, greatest: number) =>
+		listWords({ ...list, dimension: length, count, least, greatest });
+	expect(of(3, 1, 20)).toBe('3 values, 1.00 to 20.0\u202fkm');
+	expect(of(1, 7, 7)).toBe('1 value, 7.00\u202fkm');
 });
 
 test('a margin tells its standard uncertainty to two digits, in its unit', () => {

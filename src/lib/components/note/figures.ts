@@ -1,5 +1,12 @@
 /** Figures and states of results, in the words and signs that rows show. */
-import type { CheckResult, Fault, ItemResult, Outcome, Quantity } from '$lib/engine/calc/results';
+import type {
+	CheckResult,
+	Fault,
+	ItemResult,
+	Listed,
+	Outcome,
+	Quantity
+} from '$lib/engine/calc/results';
 import { formatFigure, unitText } from '$lib/engine/quantities/format';
 import type { Item } from '$lib/note/items';
 import type { CheckState } from '$lib/note/summary';
@@ -22,6 +29,14 @@ export function figure(quantity: Quantity): Figure {
 export function valueWithUnit(quantity: Quantity): string {
 	const { value, unit } = figure(quantity);
 	return unit === '' ? value : `${value}${THIN_SPACE}${unit}`;
+}
+
+/** How many values and between which: "5 values, 1 to 5 km". */
+export function listWords({ count, least, greatest, unit, digits }: Listed): string {
+	const values = count === 1 ? '1 value' : `${count} values`;
+	const end = amount({ value: greatest, unit }, digits);
+	const start = formatFigure(least, digits);
+	return least === greatest ? `${values}, ${end}` : `${values}, ${start} to ${end}`;
 }
 
 export function amount({ value, unit }: { value: number; unit: string }, digits = 3): string {
@@ -84,6 +99,8 @@ export function outcomeWords(outcome: Outcome): string {
 	switch (outcome.state) {
 		case 'value':
 			return valueWithUnit(outcome.quantity);
+		case 'list':
+			return listWords(outcome.list);
 		case 'blank':
 			return 'not given yet';
 		case 'waits':

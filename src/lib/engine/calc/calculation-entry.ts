@@ -5,6 +5,7 @@ import type { Entry, Refreshed, ResultLinks } from './entry';
 import { Refusal } from './faults';
 import { Formula } from './formula';
 import type { CalculationItem } from './items';
+import { largestOf, listed } from './listed';
 import { inUnit, parseDigits, showing, uncertaintyIn, type Showing } from './quantity';
 import type { Fault, Outcome, QuantityResult } from './results';
 import type { Scope } from './scope';
@@ -30,7 +31,7 @@ export class CalculationEntry implements Entry {
 		({ symbol: this.symbol, trouble: this.trouble } = readSymbol(item.symbol));
 		this.typedSymbol = item.symbol.trim();
 		this.symbolTex = this.symbol === '' ? '' : symbolTex(this.symbol);
-		this.formula = new Formula(item.expression, 'expression');
+		this.formula = new Formula(item.expression, 'expression', true);
 		this.digits = parseDigits(item.digits);
 		this.defines = this.symbol === '' ? [] : [this.symbol];
 		this.mentions = [...new Set(this.formula.mentions)];
@@ -44,12 +45,15 @@ export class CalculationEntry implements Entry {
 		if (found.state !== 'value') return this.lack(slot, found);
 		const { digits } = this;
 		if (typeof digits !== 'number') return this.lack(slot, { state: 'fault', faults: [digits] });
-		const { si, type, unit: hint } = found;
+		const { si, list, type, unit: hint } = found;
+		const largest = list ? largestOf(list) : si;
 		try {
-			const how = showing(si, type, { unit: this.item.unit, hint });
-			inUnit(si, how);
+			const how = showing(largest, type, { unit: this.item.unit, hint });
+			inUnit(largest, how);
 			this.how = how;
-			slot.give(si, { type, unit: how.text, digits });
+			const manner = { type, unit: how.text, digits };
+			if (list) slot.giveList(list, manner);
+			else slot.give(si, manner);
 		} catch (error) {
 			if (!(error instanceof Refusal)) throw error;
 			this.lack(slot, { state: 'fault', faults: [error.in('unit')] });
@@ -93,10 +97,11 @@ export class CalculationEntry implements Entry {
 		};
 	}
 
-	private outcome({ si, manner, uncertainty }: Slot): Outcome {
+	private outcome({ si, list, manner, uncertainty, uncertainties }: Slot): Outcome {
 		const { how } = this;
 		if (!how || !manner) return this.without;
 		const { unit, digits } = manner;
+		if (list) return { state: 'list', list: listed(list, uncertainties, how, digits) };
 		return {
 			state: 'value',
 			quantity: {

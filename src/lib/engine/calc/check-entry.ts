@@ -11,7 +11,7 @@ import {
 import type { Entry, Refreshed, ResultLinks } from './entry';
 import { Formula } from './formula';
 import type { CheckItem } from './items';
-import type { Linear } from './linear';
+import type { Derived } from './linear';
 import type { CheckResult } from './results';
 import type { Scope } from './scope';
 import type { Slot } from './slot';
@@ -45,7 +45,7 @@ export class CheckEntry implements Entry {
 		return refreshParts(this.item, this.formulas);
 	}
 
-	linear(isUncertain: (slot: Slot) => boolean): (Linear | null)[] {
+	linear(isUncertain: (slot: Slot) => boolean): (Derived | null)[] {
 		return linearParts(this.item, this.formulas, isUncertain);
 	}
 

@@ -7,7 +7,7 @@ import type { Refreshed } from './entry';
 import type { Formula, FormulaOutcome } from './formula';
 import type { ValueType } from './infer';
 import type { CheckItem } from './items';
-import { joined, type Linear } from './linear';
+import { joined, type Derived } from './linear';
 import { marginKind, marginOf, marginSlopes, verdictOf } from './margin';
 import { DEFAULT_DIGITS, shown, uncertaintyIn, withUncertainty } from './quantity';
 import type { CheckResult, Fault, Outcome } from './results';
@@ -53,7 +53,7 @@ export function linearParts(
 	{ relation }: CheckItem,
 	formulas: CheckFormulas,
 	isUncertain: (slot: Slot) => boolean
-): (Linear | null)[] {
+): (Derived | null)[] {
 	const names = ['left', 'right', 'tolerance'] as const;
 	const [left, right, tolerance] = names.map((name) => {
 		const { outcome } = formulas[name];

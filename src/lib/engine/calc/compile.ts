@@ -6,7 +6,6 @@ import { placeOf, type Comparison, type Expr } from './tree';
 
 /** Reads the values of names by their place in the list given to `compile`. */
 export type Program = (values: ArrayLike<number>) => number;
-export type Condition = (values: ArrayLike<number>) => boolean;
 
 /** The largest figure that is told. */
 export const LARGEST = 1e300;
@@ -37,29 +36,34 @@ export function compile(expr: Expr, names: readonly string[]): Program {
 		case 'binary':
 			return arithmetic(expr, value(expr.left), value(expr.right));
 		case 'choose': {
-			const met = compileCondition(expr.condition, names);
+			const met = compileCondition(expr.condition, value);
 			const [yes, no] = [value(expr.yes), value(expr.no)];
 			return (values) => (met(values) ? yes(values) : no(values));
 		}
 		case 'call':
 			return call(expr, expr.args.map(value));
 		default:
-			throw new Error('A condition has no value.');
+			throw new Error('Neither a condition nor a list is one value.');
 	}
 }
 
-export function compileCondition(expr: Expr, names: readonly string[]): Condition {
+/** A condition over whatever `valueOf` makes its sides read from. */
+export function compileCondition<V>(
+	expr: Expr,
+	valueOf: (expr: Expr) => (values: V) => number
+): (values: V) => boolean {
 	if (expr.kind === 'not') {
-		const of = compileCondition(expr.of, names);
+		const of = compileCondition(expr.of, valueOf);
 		return (values) => !of(values);
 	}
 	if (expr.kind === 'logic') {
-		const [left, right] = [compileCondition(expr.left, names), compileCondition(expr.right, names)];
+		const left = compileCondition(expr.left, valueOf);
+		const right = compileCondition(expr.right, valueOf);
 		if (expr.op === 'and') return (values) => left(values) && right(values);
 		return (values) => left(values) || right(values);
 	}
 	if (expr.kind !== 'compare') throw new Error('A value is no condition.');
-	const [left, right] = [compile(expr.left, names), compile(expr.right, names)];
+	const [left, right] = [valueOf(expr.left), valueOf(expr.right)];
 	const holds = COMPARE[expr.op];
 	return (values) => holds(left(values), right(values));
 }
@@ -73,7 +77,12 @@ const COMPARE: Record<Comparison, (a: number, b: number) => boolean> = {
 	'!=': (a, b) => a !== b
 };
 
-function arithmetic(expr: Expr & { kind: 'binary' }, left: Program, right: Program): Program {
+/** The operation with all that it checks. */
+export function arithmetic(
+	expr: Expr & { kind: 'binary' },
+	left: Program,
+	right: Program
+): Program {
 	switch (expr.op) {
 		case '+':
 			return (values) => told(left(values) + right(values), expr);
@@ -104,7 +113,8 @@ function raise(base: number, exponent: number, expr: Expr & { kind: 'binary' }):
 	return told(base ** exponent, expr);
 }
 
-function call(expr: Expr & { kind: 'call' }, args: Program[]): Program {
+/** The function with all that it checks. */
+export function call(expr: Expr & { kind: 'call' }, args: Program[]): Program {
 	const { evaluate, domain } = functionNamed(expr.name);
 	const checked = (...given: number[]) => {
 		if (domain && !domain.holds(...given)) throw outOfDomain(expr, domain.words);
@@ -117,7 +127,7 @@ function call(expr: Expr & { kind: 'call' }, args: Program[]): Program {
 }
 
 /** Passes a figure on if it can be told. */
-function told(value: number, expr: Expr): number {
+export function told(value: number, expr: Expr): number {
 	if (value <= LARGEST && value >= -LARGEST) return value;
 	throw new Refusal('beyond-any-build', `${asText(expr)} is beyond any build: above 1e300.`, {
 		remedy: 'Look at the exponents and the units of what goes into it.',
@@ -130,7 +140,7 @@ const divisionByZero = (divisor: Expr) =>
 		place: placeOf(divisor)
 	});
 
-const outOfDomain = (expr: Expr & { kind: 'call' }, words: string) => {
+export const outOfDomain = (expr: Expr & { kind: 'call' }, words: string) => {
 	const args = expr.args.map(asText).join(', ');
 	return new Refusal('domain', `${expr.name}(${args}) has no value here: ${words}.`, {
 		place: placeOf(expr)

@@ -5,7 +5,7 @@ import { GivenEntry } from './given-entry';
 import type { SheetItem } from './items';
 import { ModelEntry } from './model-entry';
 import type { Fault, ItemResult } from './results';
-import type { Linear } from './linear';
+import type { Derived } from './linear';
 import type { Scope } from './scope';
 import type { Slot } from './slot';
 
@@ -36,7 +36,7 @@ export interface Entry {
 	 * How the figure in each slot follows from those that the item names, to first order; null where it
 	 * follows from none that is uncertain.
 	 */
-	linear(isUncertain: (slot: Slot) => boolean): readonly (Linear | null)[];
+	linear(isUncertain: (slot: Slot) => boolean): readonly (Derived | null)[];
 	/** The result as plain data, built when it is read. */
 	result(slots: readonly Slot[], links: ResultLinks): ItemResult;
 }

@@ -104,7 +104,7 @@ describe('a fault in an expression', () => {
 		['x = 3', 'not-allowed'],
 		['f(x) = 3', 'not-allowed'],
 		['"text"', 'not-allowed'],
-		['[1, 2]', 'not-allowed'],
+		['[1:2]', 'not-allowed'],
 		['1; 2', 'not-allowed'],
 		['5!', 'not-allowed'],
 		["a'", 'not-allowed'],

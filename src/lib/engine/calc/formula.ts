@@ -4,18 +4,32 @@ import { equal, isPure } from '../quantities/dimension';
 import { compile, type Program } from './compile';
 import { Refusal } from './faults';
 import { compileGradient, type Gradient } from './gradient';
-import { inferValue, type ValueType } from './infer';
-import type { Linear } from './linear';
+import { Inputs, type Figures } from './figures';
+import { PICK_ONE, inferType, type ValueType } from './infer';
+import type { Carried, Derived } from './linear';
+import { compileLists, hasList, type ListProgram } from './lists';
 import { ambiguousName, modelName, unknownName } from './name-refusals';
 import { parse, type Parsed } from './parse';
-import { asTex } from './print';
+import { asTex, asText } from './print';
 import type { Fault } from './results';
 import type { Scope } from './scope';
 import { sameManner, type Manner, type Slot } from './slot';
-import { leaves, type Expr } from './tree';
+import { leaves, placeOf, type Expr } from './tree';
+
+/** Unit and digits where something in it had them. */
+export type FormulaValue = {
+	state: 'value';
+	/** 0 for a list. */
+	si: number;
+	/** In SI; null for one value. Only a formula that may be a list comes to one. */
+	list: Float64Array | null;
+	type: ValueType;
+	unit: string | null;
+	digits: number | null;
+};
 
 export type FormulaOutcome =
-	| { state: 'value'; si: number; type: ValueType; unit: string | null; digits: number | null }
+	| FormulaValue
 	| { state: 'blank' }
 	| { state: 'waits'; for: string[]; rootIds: string[] }
 	| { state: 'fault'; faults: Fault[] };
@@ -32,6 +46,8 @@ export class Formula {
 	private parsed: Parsed | null = null;
 	private fault: Fault | null = null;
 	private program: Program | null = null;
+	/** Takes the place of the program where lists stand in the expression. */
+	private lists: ListProgram | null = null;
 	private gradient: Gradient | null = null;
 	/** What stands behind the names, and the manners for which the type below was found. */
 	private inputs: Slot[] = [];
@@ -42,7 +58,8 @@ export class Formula {
 
 	constructor(
 		text: string,
-		private field: string
+		private field: string,
+		private takesLists = false
 	) {
 		this.blank = text.trim() === '';
 		if (!this.blank) {
@@ -81,7 +98,7 @@ export class Formula {
 	 * does not do, and `evaluate` has to tell.
 	 */
 	refresh(): number | null {
-		if (!this.hasValue) return null;
+		if (!this.hasValue || this.lists) return null;
 		try {
 			return this.figure();
 		} catch {
@@ -90,13 +107,22 @@ export class Formula {
 	}
 
 	/** How the figure follows from what is named; null where nothing of that is uncertain. */
-	linear(isUncertain: (slot: Slot) => boolean): Linear | null {
+	linear(isUncertain: (slot: Slot) => boolean): Derived | null {
 		const { parsed, inputs } = this;
 		if (!parsed || !this.hasValue || !inputs.some(isUncertain)) return null;
+		if (this.lists) return this.carried(this.lists);
 		this.gradient ??= compileGradient(parsed.expr, this.names);
 		const slopes = new Float64Array(inputs.length);
 		this.gradient(read(inputs), slopes);
 		return { inputs, slopes };
+	}
+
+	private carried(program: ListProgram): Carried {
+		const { inputs, outcome } = this;
+		const count = (outcome.state === 'value' && outcome.list?.length) || 1;
+		const carry: Carried['carry'] = (shares, width) =>
+			program(new Inputs(figuresOf(inputs, shares), width)).shares;
+		return { inputs, count, carry };
 	}
 
 	private figure(): number {
@@ -119,8 +145,14 @@ export class Formula {
 		if (missing) return this.waits();
 		try {
 			const type = this.typed(expr);
-			this.program ??= compile(expr, this.names);
-			return { state: 'value', si: this.figure(), type, unit: this.unit, digits: this.digits };
+			const shown = { type, unit: this.unit, digits: this.digits };
+			if (!this.lists) {
+				this.program ??= compile(expr, this.names);
+				return { state: 'value', si: this.figure(), list: null, ...shown };
+			}
+			const { values } = this.lists(new Inputs(figuresOf(this.inputs, []), 0));
+			const list = type.list ? Float64Array.from(values, (value) => value + 0) : null;
+			return { state: 'value', si: list ? 0 : values[0]! + 0, list, ...shown };
 		} catch (error) {
 			return { state: 'fault', faults: [asFault(error, this.field)] };
 		}
@@ -140,11 +172,23 @@ export class Formula {
 		};
 		if (!this.type || !this.inputs.every(known)) {
 			this.inferredFor = this.inputs.map(({ manner }) => manner!);
-			this.type = inferred(expr, (name) => this.manner(name).type);
+			this.type = this.inferred(expr);
+			const isList = (name: string) => this.manner(name).type.list;
+			this.lists = hasList(expr, isList) ? compileLists(expr, this.names, isList) : null;
 			if (!(this.type instanceof Refusal)) this.findManner(expr, this.type);
 		}
 		if (this.type instanceof Refusal) throw this.type;
 		return this.type;
+	}
+
+	private inferred(expr: Expr): ValueType | Refusal {
+		try {
+			const type = inferType(expr, (name) => this.manner(name).type);
+			return type.list && !this.takesLists ? notSingle(expr) : type;
+		} catch (error) {
+			if (error instanceof Refusal) return error;
+			throw error;
+		}
 	}
 
 	private manner(name: string): Manner {
@@ -193,14 +237,14 @@ function read(inputs: readonly Slot[]): Float64Array {
 	return figures;
 }
 
-function inferred(expr: Expr, typeOf: (name: string) => ValueType): ValueType | Refusal {
-	try {
-		return inferValue(expr, typeOf);
-	} catch (error) {
-		if (error instanceof Refusal) return error;
-		throw error;
-	}
-}
+const figuresOf = (inputs: readonly Slot[], shares: readonly (Float64Array | null)[]): Figures[] =>
+	inputs.map(({ si, list }, i) => ({ values: list ?? [si], shares: shares[i] ?? null }));
+
+const notSingle = (expr: Expr) =>
+	new Refusal('dimension', `${asText(expr)} is a list, where one value is wanted.`, {
+		remedy: PICK_ONE,
+		place: placeOf(expr)
+	});
 
 function asFault(error: unknown, field: string): Fault {
 	if (error instanceof Refusal) return error.in(field);

@@ -1,5 +1,6 @@
 /** The functions of ordinary mathematics that expressions may call. */
 import { erf, erfc } from '../numerics/erf';
+import { deviation, greatest, least, mean, total, type Gather } from './gather';
 
 /** How dimensions pass through: what goes in, what comes out. */
 export type DimensionRule =
@@ -10,19 +11,44 @@ export type DimensionRule =
 	/** All arguments alike; the same dimension comes out. */
 	| 'alike'
 	/** All arguments alike; a pure number comes out. */
-	| 'alike to pure';
+	| 'alike to pure'
+	/** All arguments alike and such that they can be added. */
+	| 'total'
+	/** All arguments alike; what lies between two of them comes out. */
+	| 'spread'
+	/** A value, then the list that it lies in, then the list from which the answer comes. */
+	| 'interpolation';
 
 export type FunctionDefinition = {
 	/** Fewest and most arguments. */
 	takes: [number, number];
 	rule: DimensionRule;
 	evaluate: (...args: number[]) => number;
+	/** The same over the values of lists and whatever stands beside them; else each value of a list goes in alone. */
+	gathers?: Gather;
 	/** Says where it is not defined, e.g. "the logarithm is defined for positive numbers only". */
 	domain?: { holds: (...args: number[]) => boolean; words: string };
 	description: string;
 	/** TeX of the name; the default is the name in upright letters. */
 	tex?: string;
+	/** Came when notes had used the name for quantities: it is a function only before a parenthesis. */
+	isLate?: true;
 };
+
+const MOST_ARGUMENTS = 50;
+
+const gathering = (
+	gathers: Gather,
+	description: string,
+	more: Partial<FunctionDefinition> = {}
+): FunctionDefinition => ({
+	takes: [1, MOST_ARGUMENTS],
+	rule: 'alike',
+	evaluate: (...args) => gathers(args),
+	gathers,
+	description,
+	...more
+});
 
 const positive = (what: string) => ({
 	holds: (x: number) => x > 0,
@@ -38,6 +64,13 @@ const pure = (
 	description: string,
 	more: Partial<FunctionDefinition> = {}
 ): FunctionDefinition => ({ takes: [1, 1], rule: 'pure', evaluate, description, ...more });
+
+/** On the line through two rows of a table. */
+function between(x: number, x0: number, x1: number, y0: number, y1: number): number {
+	const part = (x - x0) / (x1 - x0);
+	// From the nearer row, so that a row's own value comes out as it stands there.
+	return part < 0.5 ? y0 + part * (y1 - y0) : y1 - (1 - part) * (y1 - y0);
+}
 
 export const FUNCTIONS = {
 	sqrt: {
@@ -99,10 +132,31 @@ export const FUNCTIONS = {
 	floor: pure(Math.floor, 'Largest whole number not above'),
 	ceil: pure(Math.ceil, 'Smallest whole number not below'),
 	round: pure(Math.round, 'Nearest whole number'),
-	min: { takes: [1, 50], rule: 'alike', evaluate: Math.min, description: 'Least', tex: '\\min' },
-	max: { takes: [1, 50], rule: 'alike', evaluate: Math.max, description: 'Greatest', tex: '\\max' },
+	min: gathering(least, 'Least', { evaluate: Math.min, tex: '\\min' }),
+	max: gathering(greatest, 'Greatest', { evaluate: Math.max, tex: '\\max' }),
+	sum: gathering(total, 'Sum of values or of a list', { rule: 'total', isLate: true }),
+	mean: gathering(mean, 'Arithmetic mean of values or of a list', { isLate: true }),
+	std: gathering(deviation, 'Standard deviation (n − 1) of values or of a list', {
+		rule: 'spread',
+		isLate: true,
+		domain: {
+			holds: (...args) => args.length > 1,
+			words: 'a standard deviation takes at least two values'
+		}
+	}),
+	count: gathering(({ length }) => length, 'How many values', {
+		rule: 'alike to pure',
+		isLate: true
+	}),
+	interpolate: {
+		takes: [3, 3],
+		rule: 'interpolation',
+		evaluate: between,
+		description: 'Between the rows of a table: interpolate(x, list of x, list of y)',
+		isLate: true
+	},
 	hypot: {
-		takes: [2, 50],
+		takes: [2, MOST_ARGUMENTS],
 		rule: 'alike',
 		evaluate: Math.hypot,
 		description: 'Square root of the sum of squares'
@@ -112,4 +166,7 @@ export const FUNCTIONS = {
 export type FunctionName = keyof typeof FUNCTIONS;
 
 export const isFunction = (name: string): name is FunctionName => Object.hasOwn(FUNCTIONS, name);
+/** Whether no quantity may have the name. */
+export const isKept = (name: string) => isFunction(name) && !functionNamed(name).isLate;
+
 export const functionNamed = (name: FunctionName): FunctionDefinition => FUNCTIONS[name];

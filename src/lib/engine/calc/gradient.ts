@@ -6,7 +6,7 @@
  */
 import { functionNamed } from './functions';
 import { SLOPES } from './slopes';
-import { compileCondition } from './compile';
+import { compile, compileCondition } from './compile';
 import type { Expr } from './tree';
 
 /** Writes the slope by each name, in the order of the list given to `compileGradient`. */
@@ -59,7 +59,7 @@ function part(expr: Expr, names: readonly string[]): Part {
 				(args, value) => ARITHMETIC_SLOPES[expr.op](args[0]!, args[1]!, value)
 			);
 		case 'choose': {
-			const met = compileCondition(expr.condition, names);
+			const met = compileCondition(expr.condition, (side) => compile(side, names));
 			const [yes, no] = [part(expr.yes, names), part(expr.no, names)];
 			let taken = yes;
 			return {
@@ -111,7 +111,10 @@ const ARITHMETIC: Record<Operator, (a: number, b: number) => number> = {
 	'^': (a, b) => a ** b
 };
 
-const ARITHMETIC_SLOPES: Record<Operator, (a: number, b: number, value: number) => number[]> = {
+export const ARITHMETIC_SLOPES: Record<
+	Operator,
+	(a: number, b: number, value: number) => number[]
+> = {
 	'+': () => [1, 1],
 	'-': () => [1, -1],
 	'*': (a, b) => [b, a],

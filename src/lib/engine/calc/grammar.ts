@@ -25,6 +25,9 @@ export type Node = {
 	conditionals?: string[];
 	params?: Node[];
 	items?: Node[];
+	object?: Node;
+	index?: Node;
+	dimensions?: Node[];
 };
 
 /** A class of nodes that keep what they are made with under these names. */
@@ -47,7 +50,7 @@ export const parseStructure = createParse({
 	typed: byText,
 	numeric: (text: string) => Number(text),
 	config: { number: 'number', numberFallback: 'number' },
-	AccessorNode: plain('AccessorNode'),
+	AccessorNode: plain('AccessorNode', 'object', 'index'),
 	ArrayNode: plain('ArrayNode', 'items'),
 	AssignmentNode: plain('AssignmentNode'),
 	BlockNode: plain('BlockNode'),
@@ -55,7 +58,7 @@ export const parseStructure = createParse({
 	ConstantNode: plain('ConstantNode', 'value'),
 	FunctionAssignmentNode: plain('FunctionAssignmentNode'),
 	FunctionNode: plain('FunctionNode', 'fn', 'args'),
-	IndexNode: plain('IndexNode'),
+	IndexNode: plain('IndexNode', 'dimensions'),
 	ObjectNode: plain('ObjectNode'),
 	OperatorNode: plain('OperatorNode', 'op', 'fn', 'args'),
 	ParenthesisNode: plain('ParenthesisNode', 'content'),

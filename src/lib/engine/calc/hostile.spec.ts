@@ -133,6 +133,12 @@ describe('a text as long as allowed', () => {
 		['units', '1 ' + 'm '.repeat(1999)],
 		['divisions of units', '1 m' + '/m'.repeat(1900)],
 		['unit groups', '1 m' + '/(m'.repeat(1300)],
+		['calls in calls', 'max('.repeat(99) + '1' + ',1)'.repeat(99)],
+		['choices in choices', '(1>0?'.repeat(90) + '1' + ':1)'.repeat(90)],
+		['brackets', '['.repeat(4000)],
+		['lists', `[${'1,'.repeat(1990)}1]`],
+		['places', 'x' + '[1]'.repeat(1300)],
+		['sums of lists', 'sum([1,2]+'.repeat(90) + '1' + ')'.repeat(90)],
 		['commas', 'max(' + '1,'.repeat(1990) + '1)'],
 		['superscripts', '2' + '²'.repeat(3999)],
 		['spaces', ' '.repeat(4000)]

@@ -20,23 +20,29 @@ import { placeOf, type Expr } from './tree';
  */
 export type Scale = 'plain' | 'point' | 'difference';
 
-export type ValueType = { kind: 'value'; dimension: Dimension; scale: Scale };
+/** A list has many values, all of one dimension. */
+export type ValueType = { kind: 'value'; dimension: Dimension; scale: Scale; list: boolean };
 export type Type = ValueType | { kind: 'truth' };
 
 export type TypeOf = (name: string) => ValueType;
 
-const PURE_VALUE: ValueType = { kind: 'value', dimension: PURE, scale: 'plain' };
 const TRUTH: Type = { kind: 'truth' };
 
-export const valueType = (dimension: Dimension, scale: Scale = 'plain'): ValueType => ({
-	kind: 'value',
-	dimension,
-	scale
-});
+export const valueType = (
+	dimension: Dimension,
+	scale: Scale = 'plain',
+	list = false
+): ValueType => ({ kind: 'value', dimension, scale, list });
+
+/** What is known while one expression is looked through: each part is, once, however often it is asked for. */
+type Known = { typeOf: TypeOf; types: Map<Expr, Type> };
 
 /** @throws Refusal naming both dimensions where they do not fit. */
-export function inferValue(expr: Expr, typeOf: TypeOf): ValueType {
-	const type = infer(expr, typeOf);
+export const inferType = (expr: Expr, typeOf: TypeOf): ValueType =>
+	inferValue(expr, { typeOf, types: new Map() });
+
+function inferValue(expr: Expr, known: Known): ValueType {
+	const type = infer(expr, known);
 	if (type.kind === 'value') return type;
 	throw new Refusal('dimension', `${asText(expr)} is true or false, not a value.`, {
 		remedy: 'Use it as a condition: condition ? value : other value.',
@@ -44,79 +50,135 @@ export function inferValue(expr: Expr, typeOf: TypeOf): ValueType {
 	});
 }
 
-function infer(expr: Expr, typeOf: TypeOf): Type {
+function infer(expr: Expr, known: Known): Type {
+	const found = known.types.get(expr) ?? inferred(expr, known);
+	known.types.set(expr, found);
+	return found;
+}
+
+function inferred(expr: Expr, known: Known): Type {
 	switch (expr.kind) {
 		case 'number':
-			return PURE_VALUE;
+			return valueType(PURE);
 		case 'literal':
 			return valueType(expr.unit.dimension, expr.unit.offset === 0 ? 'plain' : 'point');
 		case 'constant':
 			return valueType(expr.constant.dimension);
 		case 'name':
-			return typeOf(expr.name);
+			return known.typeOf(expr.name);
 		case 'negate': {
-			const { dimension, scale } = inferValue(expr.of, typeOf);
-			return valueType(dimension, scale === 'difference' ? scale : 'plain');
+			const { dimension, scale, list } = inferValue(expr.of, known);
+			return valueType(dimension, scale === 'difference' ? scale : 'plain', list);
 		}
 		case 'binary':
-			return binary(expr, typeOf);
+			return binary(expr, known);
 		case 'compare':
-			alike(expr.left, expr.right, 'compared', typeOf);
+			alike(expr.left, expr.right, 'compared', known);
+			single(expr.left, known, 'A comparison');
+			single(expr.right, known, 'A comparison');
 			return TRUTH;
 		case 'logic':
-			condition(expr.left, typeOf);
-			condition(expr.right, typeOf);
+			condition(expr.left, known);
+			condition(expr.right, known);
 			return TRUTH;
 		case 'not':
-			condition(expr.of, typeOf);
+			condition(expr.of, known);
 			return TRUTH;
 		case 'choose':
-			condition(expr.condition, typeOf);
-			return alike(expr.yes, expr.no, 'taken for each other', typeOf);
+			condition(expr.condition, known);
+			return branches(expr, known);
 		case 'call':
-			return call(expr, typeOf);
+			return call(expr, known);
+		case 'list':
+			expr.items.forEach((item) => single(item, known, 'A place in a list'));
+			return { ...allAlike(expr.items, known), list: true };
+		case 'pick':
+			return pick(expr, known);
 	}
 }
 
-function condition(expr: Expr, typeOf: TypeOf): void {
-	if (infer(expr, typeOf).kind === 'truth') return;
+/** What to do with a list where one value is wanted. */
+export const PICK_ONE = 'Take one of its values, e.g. x[1], or its min, max, sum or mean.';
+
+/** @throws Refusal where a list stands in the place of one value. */
+function single(expr: Expr, known: Known, place: string): void {
+	if (!inferValue(expr, known).list) return;
+	throw new Refusal('dimension', `${place} takes one value; ${asText(expr)} is a list.`, {
+		remedy: PICK_ONE,
+		place: placeOf(expr)
+	});
+}
+
+function branches({ yes, no }: Expr & { kind: 'choose' }, known: Known): ValueType {
+	const type = alike(yes, no, 'taken for each other', known);
+	const [first, second] = [yes, no].map((branch) => inferValue(branch, known).list);
+	if (first === second) return type;
+	throw new Refusal(
+		'dimension',
+		`${asText(yes)} and ${asText(no)} cannot be taken for each other: one is a list, the other one value.`,
+		{ place: placeOf(no) ?? placeOf(yes) }
+	);
+}
+
+function pick({ of, index }: Expr & { kind: 'pick' }, known: Known): ValueType {
+	const type = inferValue(of, known);
+	if (!type.list) {
+		throw new Refusal('dimension', `${asText(of)} is one value: it has no others to pick from.`, {
+			place: placeOf(of)
+		});
+	}
+	single(index, known, 'The number of a value');
+	const { dimension } = inferValue(index, known);
+	if (isPure(dimension)) return { ...type, list: false };
+	throw new Refusal(
+		'dimension',
+		`The number of a value is a pure number; ${asText(index)} is ${inWords(dimension)}.`,
+		{ place: placeOf(index) }
+	);
+}
+
+function condition(expr: Expr, known: Known): void {
+	if (infer(expr, known).kind === 'truth') return;
 	throw new Refusal('dimension', `${asText(expr)} is a value, where a condition is wanted.`, {
 		remedy: 'Compare it with something, e.g. x > 0.',
 		place: placeOf(expr)
 	});
 }
 
-function binary(expr: Expr & { kind: 'binary' }, typeOf: TypeOf): ValueType {
-	if (expr.op === '+' || expr.op === '-') return sum(expr, typeOf);
-	const left = inferValue(expr.left, typeOf);
-	const right = inferValue(expr.right, typeOf);
-	if (expr.op === '*') return valueType(times(left.dimension, right.dimension));
-	if (expr.op === '/') return valueType(over(left.dimension, right.dimension));
+function binary(expr: Expr & { kind: 'binary' }, known: Known): ValueType {
+	if (expr.op === '+' || expr.op === '-') return sum(expr, known);
+	const left = inferValue(expr.left, known);
+	const right = inferValue(expr.right, known);
+	const list = left.list || right.list;
+	if (expr.op === '*') return valueType(times(left.dimension, right.dimension), 'plain', list);
+	if (expr.op === '/') return valueType(over(left.dimension, right.dimension), 'plain', list);
 	return power(expr, left, right);
 }
 
-function sum(expr: Expr & { kind: 'binary' }, typeOf: TypeOf): ValueType {
-	const left = inferValue(expr.left, typeOf);
-	const right = inferValue(expr.right, typeOf);
+function sum(expr: Expr & { kind: 'binary' }, known: Known): ValueType {
+	const left = inferValue(expr.left, known);
+	const right = inferValue(expr.right, known);
 	const added = expr.op === '+';
+	const list = left.list || right.list;
 	const fits = fit(expr.left, left, expr.right, right);
 	if (!fits) {
 		throw mismatch(expr.left, left, expr.right, right, added ? 'added' : 'subtracted');
 	}
 	if (left.scale === 'point' && right.scale === 'point') {
-		if (!added) return valueType(fits.dimension, 'difference');
+		if (!added) return valueType(fits.dimension, 'difference', list);
 		throw new Refusal(
 			'dimension',
 			`${asText(expr.right)} cannot be added: two temperatures on a scale with its own zero have no sum.`,
 			{ remedy: 'Write the difference in K.', place: placeOf(expr.right) }
 		);
 	}
-	if (!added && right.scale === 'point') return valueType(fits.dimension, 'difference');
+	if (!added && right.scale === 'point') return valueType(fits.dimension, 'difference', list);
 	const scales = [left.scale, right.scale];
-	if (scales.includes('point')) return valueType(fits.dimension, 'point');
+	if (scales.includes('point')) return valueType(fits.dimension, 'point', list);
 	return valueType(
 		fits.dimension,
-		scales.every((scale) => scale === 'difference') ? 'difference' : 'plain'
+		scales.every((scale) => scale === 'difference') ? 'difference' : 'plain',
+		list
 	);
 }
 
@@ -140,9 +202,9 @@ function mismatch(a: Expr, left: ValueType, b: Expr, right: ValueType, done: str
 	);
 }
 
-function alike(a: Expr, b: Expr, done: string, typeOf: TypeOf): ValueType {
-	const left = inferValue(a, typeOf);
-	const right = inferValue(b, typeOf);
+function alike(a: Expr, b: Expr, done: string, known: Known): ValueType {
+	const left = inferValue(a, known);
+	const right = inferValue(b, known);
 	const fits = fit(a, left, b, right);
 	if (!fits) throw mismatch(a, left, b, right, done);
 	if ([left.scale, right.scale].sort().join() === 'difference,point') {
@@ -152,7 +214,8 @@ function alike(a: Expr, b: Expr, done: string, typeOf: TypeOf): ValueType {
 			{ place: placeOf(b) }
 		);
 	}
-	return valueType(fits.dimension, left.scale === right.scale ? left.scale : 'plain');
+	const scale = left.scale === right.scale ? left.scale : 'plain';
+	return valueType(fits.dimension, scale, left.list || right.list);
 }
 
 function power(expr: Expr & { kind: 'binary' }, base: ValueType, exponent: ValueType): ValueType {
@@ -164,7 +227,8 @@ function power(expr: Expr & { kind: 'binary' }, base: ValueType, exponent: Value
 			{ place: placeOf(expr.right) }
 		);
 	}
-	if (isPure(base.dimension)) return PURE_VALUE;
+	const list = base.list || exponent.list;
+	if (isPure(base.dimension)) return valueType(PURE, 'plain', list);
 	const value = constantValue(expr.right);
 	if (value === null) {
 		throw new Refusal(
@@ -180,7 +244,7 @@ function power(expr: Expr & { kind: 'binary' }, base: ValueType, exponent: Value
 			{ place: placeOf(expr.left) }
 		);
 	}
-	return valueType(toPower(base.dimension, value));
+	return valueType(toPower(base.dimension, value), 'plain', list);
 }
 
 const rational = (value: number) =>
@@ -212,12 +276,14 @@ function constantValue(expr: Expr): number | null {
 	}
 }
 
-function call(expr: Expr & { kind: 'call' }, typeOf: TypeOf): ValueType {
-	const { rule } = functionNamed(expr.name);
-	const [first, ...others] = expr.args;
+function call(expr: Expr & { kind: 'call' }, known: Known): ValueType {
+	const { rule, gathers } = functionNamed(expr.name);
+	const [first] = expr.args;
 	if (rule === 'pure') {
+		let anyList = false;
 		for (const arg of expr.args) {
-			const { dimension } = inferValue(arg, typeOf);
+			const { dimension, list } = inferValue(arg, known);
+			anyList ||= list;
 			if (isPure(dimension)) continue;
 			throw new Refusal(
 				'dimension',
@@ -225,23 +291,59 @@ function call(expr: Expr & { kind: 'call' }, typeOf: TypeOf): ValueType {
 				{ place: placeOf(arg) }
 			);
 		}
-		return PURE_VALUE;
+		return valueType(PURE, 'plain', anyList);
 	}
 	if (typeof rule === 'object') {
-		const { dimension, scale } = inferValue(first!, typeOf);
+		const { dimension, scale, list } = inferValue(first!, known);
 		return valueType(
 			toPower(dimension, rule.power),
-			rule.power === 1 && scale === 'difference' ? scale : 'plain'
+			rule.power === 1 && scale === 'difference' ? scale : 'plain',
+			list
 		);
 	}
+	if (rule === 'interpolation') return interpolation(expr, known);
+	const found = allAlike(expr.args, known);
+	const type = gathers ? { ...found, list: false } : found;
+	if (rule === 'total' && type.scale === 'point') {
+		throw new Refusal(
+			'dimension',
+			`${asText(expr)} has no value: temperatures on a scale with its own zero have no sum.`,
+			{ remedy: 'Take their mean.', place: placeOf(expr) }
+		);
+	}
+	if (rule === 'spread' && type.scale === 'point') return { ...type, scale: 'difference' };
+	return rule === 'alike to pure' ? valueType(PURE, 'plain', type.list) : type;
+}
+
+/** Of values that must be alike; a list where one of them is. */
+function allAlike(exprs: readonly Expr[], known: Known): ValueType {
 	// A bare 0 takes the dimension beside it, so the others are held against one that has its own.
-	const measure = expr.args.find((arg) => !isZero(arg)) ?? first!;
-	const type = others.reduce(
-		(soFar, arg) => {
-			const { scale } = alike(measure, arg, 'set beside it', typeOf);
-			return valueType(soFar.dimension, scale === soFar.scale ? scale : 'plain');
-		},
-		inferValue(measure, typeOf)
-	);
-	return rule === 'alike' ? type : PURE_VALUE;
+	const measure = exprs.find((expr) => !isZero(expr)) ?? exprs[0]!;
+	return exprs
+		.filter((expr) => expr !== measure)
+		.reduce(
+			(soFar, expr) => {
+				const { scale, list } = alike(measure, expr, 'set beside it', known);
+				return valueType(
+					soFar.dimension,
+					scale === soFar.scale ? scale : 'plain',
+					soFar.list || list
+				);
+			},
+			inferValue(measure, known)
+		);
+}
+
+function interpolation(expr: Expr & { kind: 'call' }, known: Known): ValueType {
+	const [x, xs, ys] = expr.args as [Expr, Expr, Expr];
+	for (const column of [xs, ys]) {
+		if (inferValue(column, known).list) continue;
+		throw new Refusal(
+			'dimension',
+			`${expr.name} reads from two lists; ${asText(column)} is one value.`,
+			{ remedy: 'Write interpolate(x, list of x, list of y).', place: placeOf(column) }
+		);
+	}
+	alike(xs, x, 'looked up in it', known);
+	return { ...inferValue(ys, known), list: inferValue(x, known).list };
 }

@@ -4,7 +4,7 @@ import type { Entry, ResultLinks } from './entry';
 import { Formula } from './formula';
 import { valueType } from './infer';
 import type { LineModelItem } from './items';
-import { joined, type Linear } from './linear';
+import { joined, type Derived } from './linear';
 import {
 	evaluateLineModel,
 	fieldsRead,
@@ -60,8 +60,8 @@ export class ModelEntry implements Entry {
 	refresh = () => null;
 
 	/** Exact through the expressions of its inputs, by differences through the model. */
-	linear(isUncertain: (slot: Slot) => boolean): (Linear | null)[] {
-		const parts: Linear[] = [];
+	linear(isUncertain: (slot: Slot) => boolean): (Derived | null)[] {
+		const parts: Derived[] = [];
 		const slopes: (readonly number[])[] = [];
 		for (const field of fieldsRead(this.item)) {
 			const part = this.formulas[field].linear(isUncertain);

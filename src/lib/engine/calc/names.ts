@@ -1,7 +1,7 @@
 /** What may be a symbol, and what a name already means. */
 import { CONSTANTS } from '../quantities/constants';
 import { BODIES } from '../line/bodies';
-import { FUNCTIONS } from './functions';
+import { isKept } from './functions';
 
 /** Letters, digits and _; a dot is only written by line models. */
 export const NAME = /\p{L}[\p{L}\p{Nd}_]*(?:\.\p{L}[\p{L}\p{Nd}_]*)*/uy;
@@ -27,7 +27,7 @@ export function symbolTrouble(symbol: string): { message: string; remedy: string
 		};
 	}
 	if (CONSTANTS.has(symbol)) return taken(symbol, 'a constant');
-	if (Object.hasOwn(FUNCTIONS, symbol)) return taken(symbol, 'a function');
+	if (isKept(symbol)) return taken(symbol, 'a function');
 	if (Object.hasOwn(BODIES, symbol) || symbol === 'sun') return taken(symbol, 'a body');
 	if (KEPT_WORDS.includes(symbol)) return taken(symbol, 'a word of the expressions');
 	return null;

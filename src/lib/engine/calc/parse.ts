@@ -1,7 +1,7 @@
 /** From the typed text to the closed tree. mathjs parses; only what is listed here gets through. */
 import { CONSTANTS } from '../quantities/constants';
 import { Refusal, type Place } from './faults';
-import { functionNamed, isFunction } from './functions';
+import { functionNamed, isFunction, isKept } from './functions';
 import { parseStructure, type Node } from './grammar';
 import { DEEPEST, scan, type Leaf, type Scanned } from './scan';
 import type { Arithmetic, Comparison, Expr } from './tree';
@@ -62,6 +62,13 @@ function inOwnWords(text: string, message: string, from: number): Refusal {
 	if (piece === ')' && text.split(')').length > text.split('(').length) {
 		return new Refusal('syntax', 'A parenthesis is closed that was not opened.', { place });
 	}
+	const brackets = text.split('[').length - text.split(']').length;
+	if (brackets > 0 && /\] expected/.test(message)) {
+		return new Refusal('syntax', 'A closing bracket is missing.', { place });
+	}
+	if (brackets < 0 && piece === ']') {
+		return new Refusal('syntax', 'A bracket is closed that was not opened.', { place });
+	}
 	if (/Value expected/.test(message)) {
 		return new Refusal('syntax', `Something is missing before “${piece}”.`, { place });
 	}
@@ -70,7 +77,8 @@ function inOwnWords(text: string, message: string, from: number): Refusal {
 			remedy: 'Write condition ? value : other value.'
 		});
 	}
-	return new Refusal('syntax', `“${piece}” cannot stand here.`, { place });
+	const remedy = piece === '[' ? 'To multiply, write * before it.' : '';
+	return new Refusal('syntax', `“${piece}” cannot stand here.`, { remedy, place });
 }
 
 const tooDeep = () =>
@@ -134,6 +142,10 @@ class Builder {
 					yes: sub(node.trueExpr!),
 					no: sub(node.falseExpr!)
 				};
+			case 'ArrayNode':
+				return list(node, sub);
+			case 'AccessorNode':
+				return pick(node, sub);
 			default:
 				throw notAllowed();
 		}
@@ -157,7 +169,7 @@ class Builder {
 		const { name } = leaf;
 		const constant = CONSTANTS.get(name);
 		if (constant) return { kind: 'constant', name, constant, place };
-		if (isFunction(name)) {
+		if (isKept(name)) {
 			throw new Refusal('syntax', `${name} is a function and needs its argument.`, {
 				remedy: `Write ${name}(…).`,
 				place
@@ -215,6 +227,19 @@ function operation(node: Node, sub: (child: Node) => Expr): Expr {
 	throw notAllowed();
 }
 
+function list(node: Node, sub: (child: Node) => Expr): Expr {
+	if (node.items!.length > 0) return { kind: 'list', items: node.items!.map(sub) };
+	throw new Refusal('syntax', 'A list has at least one value.', { remedy: 'Write [1 km, 2 km].' });
+}
+
+function pick(node: Node, sub: (child: Node) => Expr): Expr {
+	const [index, ...more] = node.index!.dimensions!;
+	if (index && more.length === 0) return { kind: 'pick', of: sub(node.object!), index: sub(index) };
+	throw new Refusal('syntax', 'A value of a list is named by one number.', {
+		remedy: 'The first value of x is x[1].'
+	});
+}
+
 /** a < b < c is a < b and b < c. */
 function chain(node: Node, sub: (child: Node) => Expr): Expr {
 	const parts = node.params!.map(sub);
@@ -230,5 +255,6 @@ function chain(node: Node, sub: (child: Node) => Expr): Expr {
 
 const notAllowed = () =>
 	new Refusal('not-allowed', 'This is no expression of numbers, units, symbols and functions.', {
-		remedy: 'Use + − * / ^, parentheses, comparisons and the functions offered while typing.'
+		remedy:
+			'Use + − * / ^, parentheses, comparisons, lists [1, 2] and the functions offered while typing.'
 	});

@@ -19,6 +19,8 @@ type Notation = {
 	group(inner: string): string;
 	choose(condition: string, yes: string, no: string): string;
 	call(expr: Expr & { kind: 'call' }, args: string[]): string;
+	list(values: string[]): string;
+	pick(of: string, index: string): string;
 };
 
 /** How tightly each form binds; a looser one inside a tighter one is set in parentheses. */
@@ -49,7 +51,9 @@ const TEXT: Notation = {
 	not: 'not ',
 	group: (inner) => `(${inner})`,
 	choose: (condition, yes, no) => `${condition} ? ${yes} : ${no}`,
-	call: ({ name }, args) => `${name}(${args.join(', ')})`
+	call: ({ name }, args) => `${name}(${args.join(', ')})`,
+	list: (values) => `[${values.join(', ')}]`,
+	pick: (of, index) => `${of}[${index}]`
 };
 
 const OPERATOR_TEX = { '<': '<', '<=': '\\le', '>': '>', '>=': '\\ge', '==': '=', '!=': '\\ne' };
@@ -79,7 +83,9 @@ const TEX: Notation = {
 		if (expr.name === 'log' && args[1]) return `\\log_{${args[1]}}(${args[0]})`;
 		const name = functionNamed(expr.name).tex ?? `\\operatorname{${expr.name}}`;
 		return `${name}(${args.join(',\\,')})`;
-	}
+	},
+	list: (values) => `[${values.join(',\\;')}]`,
+	pick: (of, index) => `${of}[${index}]`
 };
 
 const LONGEST = 60;
@@ -140,6 +146,10 @@ function print(expr: Expr, notation: Notation): string {
 				expr,
 				expr.args.map((arg) => print(arg, notation))
 			);
+		case 'list':
+			return notation.list(expr.items.map((item) => print(item, notation)));
+		case 'pick':
+			return notation.pick(within(LEVEL.leaf, expr.of), print(expr.index, notation));
 	}
 }
 

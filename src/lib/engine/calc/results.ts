@@ -19,6 +19,25 @@ export type Quantity = {
 	digits: number;
 };
 
+/** Values of one dimension, in order. */
+export type Listed = {
+	/** The first of them in coherent SI units, all where there are no more than 1 000. */
+	si: number[];
+	dimension: Dimension;
+	/** Unit of everything below, as people type it. */
+	unit: string;
+	/** Significant digits to show. */
+	digits: number;
+	count: number;
+	/** The same first of them in `unit`, those to show. */
+	values: number[];
+	/** Standard uncertainty of each of these; null means exact or not known, here for all of them. */
+	uncertainties: (number | null)[] | null;
+	least: number;
+	greatest: number;
+	mean: number;
+};
+
 /** Where in the typed text a fault lies, as offsets [from, to). */
 export type Span = { field: string; from: number; to: number };
 
@@ -54,9 +73,10 @@ export type Fault = {
 	items: string[];
 };
 
-/** A quantity, or the reason why there is none. */
+/** A quantity, a list of values, or the reason why there is none. */
 export type Outcome =
 	| { state: 'value'; quantity: Quantity }
+	| { state: 'list'; list: Listed }
 	/** Nothing typed yet. */
 	| { state: 'blank' }
 	/** Something upstream has no value: the symbols waited for, nearest first, and where it starts. */

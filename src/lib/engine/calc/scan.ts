@@ -46,7 +46,10 @@ const SIGNS: Record<string, string> = {
 	'≠': '!='
 };
 const TWO = ['<=', '>=', '==', '!='];
-const ONE = '+-*/^()<>?:';
+const ONE = '+-*/^()[]<>?:';
+
+/** What an open parenthesis or bracket holds; commas part the last two. */
+type Opened = 'group' | 'arguments' | 'list';
 
 export function scan(text: string): Scanned {
 	if (text.length > LONGEST_TEXT) {
@@ -64,8 +67,7 @@ class Scanner implements Scanned {
 	leaves: Leaf[] = [];
 	origin: number[] = [];
 	private at = 0;
-	/** Open parentheses: whether each holds the arguments of a function. */
-	private open: boolean[] = [];
+	private open: Opened[] = [];
 	/** A bare number followed by "/" stands directly before. */
 	private ratio = '';
 
@@ -156,7 +158,7 @@ class Scanner implements Scanned {
 		const called = this.text[to] === '(';
 		this.leaf({ kind: 'name', name: canonical(found), called, from: this.at, to });
 		if (called) {
-			this.enter(true);
+			this.enter('(', 'arguments');
 		}
 		return true;
 	}
@@ -173,15 +175,20 @@ class Scanner implements Scanned {
 		const before = /\d+$/.exec(this.text.slice(0, this.at))?.[0];
 		const after = /^\d+/.exec(this.text.slice(this.at + 1))?.[0];
 		const place = { from: this.at, to: this.at + 1 };
-		if (this.open.at(-1)) return this.put(',', 1);
+		const parted = this.open.at(-1) ?? 'group';
+		if (parted !== 'group') return this.put(',', 1);
 		if (before && after) {
 			throw new Refusal(
 				'bad-number',
-				`“${before},${after}”: a comma only parts the arguments of a function.`,
+				`“${before},${after}”: a comma only parts the arguments of a function and the values of a list.`,
 				{ remedy: `Write ${before}.${after} or ${before}${after}, as it is meant.`, place }
 			);
 		}
-		throw new Refusal('syntax', 'A comma only parts the arguments of a function.', { place });
+		throw new Refusal(
+			'syntax',
+			'A comma only parts the arguments of a function and the values of a list.',
+			{ place }
+		);
 	}
 
 	private operator(sign: string) {
@@ -189,8 +196,9 @@ class Scanner implements Scanned {
 		if (TWO.includes(pair)) return this.put(pair, 2);
 		const written = SIGNS[sign] ?? sign;
 		if (written !== sign) return this.put(written, 1);
-		if (sign === '(') return this.enter(false);
-		if (sign === ')') this.open.pop();
+		if (sign === '(') return this.enter('(', 'group');
+		if (sign === '[') return this.enter('[', 'list');
+		if (sign === ')' || sign === ']') this.open.pop();
 		if (sign !== '/') this.ratio = '';
 		if (ONE.includes(sign)) return this.put(sign, 1);
 		const place = { from: this.at, to: this.at + 1 };
@@ -209,15 +217,19 @@ class Scanner implements Scanned {
 		throw new Refusal('not-allowed', `“${shown}” has no place in an expression.`, { place });
 	}
 
-	private enter(called: boolean) {
-		this.open.push(called);
+	private enter(sign: '(' | '[', opened: Opened) {
+		this.open.push(opened);
 		this.ratio = '';
 		if (this.open.length > DEEPEST) {
-			throw new Refusal('too-long', `Parentheses are nested more than ${DEEPEST} deep.`, {
-				remedy: 'Split it into several calculations.'
-			});
+			throw new Refusal(
+				'too-long',
+				`Parentheses and brackets are nested more than ${DEEPEST} deep.`,
+				{
+					remedy: 'Split it into several calculations.'
+				}
+			);
 		}
-		this.put('(', 1);
+		this.put(sign, 1);
 	}
 
 	private match(pattern: RegExp, from: number): string | null {

@@ -25,7 +25,12 @@ const EXPRESSIONS = [
 	'',
 	'oops +',
 	'aa + bb',
-	'exp(a)*c^2'
+	'exp(a)*c^2',
+	'[a, b]',
+	'[1, 2]*c',
+	'sum(a)',
+	'a[2] + sum([b, c])',
+	'mean(b) - b'
 ];
 
 const text = fc.constantFrom(...EXPRESSIONS);

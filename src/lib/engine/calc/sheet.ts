@@ -115,7 +115,7 @@ class LiveSheet implements Sheet {
 		const { order } = this.plans.whole(this.held.values());
 		const changed = propagate(order).filter(({ held, uncertainties }) => {
 			const before = held.read(this.links);
-			held.slots.forEach((slot, i) => (slot.uncertainty = uncertainties[i]!));
+			held.slots.forEach((slot, i) => slot.learn(uncertainties[i]!));
 			held.spoil('all');
 			return !same(held.read(this.links), before);
 		});

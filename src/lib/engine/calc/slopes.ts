@@ -65,5 +65,19 @@ export const SLOPES: Record<FunctionName, Slopes> = {
 	round: step,
 	min: shared,
 	max: shared,
+	sum: (args) => args.map(() => 1),
+	mean: (args) => args.map(() => 1 / args.length),
+	std: (args, value) => {
+		const mean = args.reduce((sum, arg) => sum + arg / args.length, 0);
+		// Where all are alike it depends on how they move: not known.
+		if (value === 0) return args.map(() => NaN);
+		return args.map((arg) => (arg - mean) / value / (args.length - 1));
+	},
+	count: (args) => args.map(() => 0),
+	interpolate: ([x, x0, x1, y0, y1]) => {
+		const [width, part] = [x1! - x0!, (x! - x0!) / (x1! - x0!)];
+		const slope = (y1! - y0!) / width;
+		return [slope, slope * (part - 1), -slope * part, 1 - part, part];
+	},
 	hypot: (args, value) => args.map((arg) => (value === 0 ? 1 : arg / value))
 };

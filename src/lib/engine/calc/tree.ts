@@ -19,7 +19,10 @@ export type Expr =
 	| { kind: 'logic'; op: 'and' | 'or'; left: Expr; right: Expr }
 	| { kind: 'not'; of: Expr }
 	| { kind: 'choose'; condition: Expr; yes: Expr; no: Expr }
-	| { kind: 'call'; name: FunctionName; args: Expr[]; place: Place };
+	| { kind: 'call'; name: FunctionName; args: Expr[]; place: Place }
+	| { kind: 'list'; items: Expr[] }
+	/** One value of a list, counted from 1. */
+	| { kind: 'pick'; of: Expr; index: Expr };
 
 export function children(expr: Expr): Expr[] {
 	switch (expr.kind) {
@@ -34,6 +37,10 @@ export function children(expr: Expr): Expr[] {
 			return [expr.condition, expr.yes, expr.no];
 		case 'call':
 			return expr.args;
+		case 'list':
+			return expr.items;
+		case 'pick':
+			return [expr.of, expr.index];
 		default:
 			return [];
 	}

@@ -9,15 +9,19 @@
  */
 import { LARGEST } from './compile';
 import type { Held } from './held';
-import type { Linear } from './linear';
+import type { Carried, Derived, Linear } from './linear';
 import { byId } from './links';
-import type { Slot } from './slot';
+import { Norm } from './norm';
+import type { Slot, Uncertainty } from './slot';
 
 /** Givens taken at once: rows stay short however many givens are uncertain. */
 const BLOCK = 64;
 
+/** Rows of all lists together; what goes beyond is not known. */
+const MOST_LISTED = 20_000;
+
 /** Of the slots of one item, in SI. */
-export type Found = { held: Held; uncertainties: (number | null)[] };
+export type Found = { held: Held; uncertainties: Uncertainty[] };
 
 /** The items where an uncertainty is another now than the slots have. `order` has all, suppliers first. */
 export function propagate(order: readonly Held[]): Found[] {
@@ -28,46 +32,79 @@ export function propagate(order: readonly Held[]): Found[] {
 	for (const { slots } of order.filter(isGiven).sort(byId)) rows.addGiven(slots[0]!);
 	const derived = order.filter((held) => !isGiven(held));
 	for (const { entry, slots } of derived) {
-		entry.linear(isUncertain).forEach((linear, i) => linear && rows.add(slots[i]!, linear));
+		entry.linear(isUncertain).forEach((from, i) => from && rows.add(slots[i]!, from));
 	}
 	const found = rows.uncertainties();
+	const of = (slot: Slot) => found.get(slot) ?? null;
 	return derived
-		.filter(({ slots }) => slots.some((slot) => slot.uncertainty !== (found.get(slot) ?? null)))
-		.map((held) => ({
-			held,
-			uncertainties: held.slots.map((slot) => found.get(slot) ?? null)
-		}));
+		.filter(({ slots }) => slots.some((slot) => !slot.knows(of(slot))))
+		.map((held) => ({ held, uncertainties: held.slots.map(of) }));
 }
 
+/** The rows of a slot: one, or one for each value of a list. */
+type Span = { from: number; count: number };
+
 class Rows {
-	private rows = new Map<Slot, number>();
+	private spans = new Map<Slot, Span>();
+	/** Lists too long to follow, and what comes of them. */
+	private lost = new Set<Slot>();
+	private listed = 0;
 	/** By row: the given's uncertainty, or 0 and what it follows from. */
 	private own: number[] = [];
 	private from: number[][] = [];
 	private slopes: number[][] = [];
+	/** By their first row. */
+	private carried = new Map<number, { carried: Carried; inputs: (Span | null)[] }>();
 
 	has(slot: Slot): boolean {
-		return this.rows.has(slot);
+		return this.spans.has(slot) || this.lost.has(slot);
 	}
 
 	addGiven(slot: Slot): void {
 		if (slot.manner && slot.uncertainty) this.addRow(slot, slot.uncertainty, [], []);
 	}
 
-	add(slot: Slot, { inputs, slopes }: Linear): void {
+	add(slot: Slot, derived: Derived): void {
+		if (this.isLost(derived)) this.lost.add(slot);
+		else if ('carry' in derived) this.addCarried(slot, derived);
+		else this.addLinear(slot, derived);
+	}
+
+	private isLost(derived: Derived): boolean {
+		if (this.lost.size === 0) return false;
+		return derived.inputs.some(
+			(input, i) => this.lost.has(input) && ('carry' in derived || derived.slopes[i] !== 0)
+		);
+	}
+
+	private addLinear(slot: Slot, { inputs, slopes }: Linear): void {
 		const from: number[] = [];
 		const by: number[] = [];
 		for (let i = 0; i < inputs.length; i += 1) {
-			const row = this.rows.get(inputs[i]!);
-			if (row === undefined || slopes[i] === 0) continue;
-			from.push(row);
+			const span = this.spans.get(inputs[i]!);
+			if (span === undefined || slopes[i] === 0) continue;
+			from.push(span.from);
 			by.push(slopes[i]!);
 		}
 		if (from.length > 0) this.addRow(slot, 0, from, by);
 	}
 
+	private addCarried(slot: Slot, carried: Carried): void {
+		const { count } = carried;
+		const inputs = carried.inputs.map((input) => this.spans.get(input) ?? null);
+		if (inputs.every((span) => !span)) return;
+		this.listed += count;
+		if (this.listed > MOST_LISTED) {
+			this.lost.add(slot);
+			return;
+		}
+		this.carried.set(this.own.length, { carried, inputs });
+		this.spans.set(slot, { from: this.own.length, count });
+		for (let i = 0; i < count; i += 1) this.pushRow(0, [], []);
+	}
+
 	/** In SI, of the slots that follow from an uncertain given. */
-	uncertainties(): Map<Slot, number> {
+	uncertainties(): Map<Slot, number | Float64Array> {
 		const size = this.own.length;
 		const givens = this.own.flatMap((own, row) => (own === 0 ? [] : [row]));
 		const norms = Array.from({ length: size }, () => new Norm());
@@ -79,8 +116,17 @@ class Rows {
 				for (let i = 0; i < block.length; i += 1) norms[row]!.add(table[at++]!);
 			}
 		}
-		const told = [...this.rows].map(([slot, row]): [Slot, number] => [slot, norms[row]!.value]);
-		return new Map(told.filter(([, value]) => value > 0 && value <= LARGEST));
+		const known = (row: number) => {
+			const { value } = norms[row]!;
+			return value <= LARGEST ? value : 0;
+		};
+		const told = new Map<Slot, number | Float64Array>();
+		for (const [slot, { from, count }] of this.spans) {
+			const values = Float64Array.from({ length: count }, (_, i) => known(from + i));
+			if (values.every((value) => value === 0)) continue;
+			told.set(slot, slot.list ? values : values[0]!);
+		}
+		return told;
 	}
 
 	private fill(table: Float64Array, block: readonly number[]): void {
@@ -89,6 +135,8 @@ class Rows {
 		block.forEach((row, i) => (table[row * width + i] = this.own[row]!));
 		for (let row = 0; row < this.own.length; row += 1) {
 			const start = row * width;
+			const carried = this.carried.get(row);
+			if (carried) table.set(this.carry(table, width, carried) ?? [], start);
 			const from = this.from[row]!;
 			for (let k = 0; k < from.length; k += 1) {
 				const slope = this.slopes[row]![k]!;
@@ -102,29 +150,25 @@ class Rows {
 		}
 	}
 
+	private carry(
+		table: Float64Array,
+		width: number,
+		{ carried, inputs }: { carried: Carried; inputs: (Span | null)[] }
+	): Float64Array | null {
+		const shares = inputs.map(
+			(span) => span && table.subarray(span.from * width, (span.from + span.count) * width)
+		);
+		return carried.carry(shares, width);
+	}
+
 	private addRow(slot: Slot, own: number, from: number[], slopes: number[]): void {
-		this.rows.set(slot, this.own.length);
+		this.spans.set(slot, { from: this.own.length, count: 1 });
+		this.pushRow(own, from, slopes);
+	}
+
+	private pushRow(own: number, from: number[], slopes: number[]): void {
 		this.own.push(own);
 		this.from.push(from);
 		this.slopes.push(slopes);
-	}
-}
-
-/** Root of a sum of squares, none of which may leave the range of numbers. */
-class Norm {
-	private scale = 0;
-	private sum = 0;
-
-	add(share: number): void {
-		if (share === 0) return;
-		const size = Math.abs(share);
-		if (size > this.scale) {
-			this.sum = 1 + this.sum * (this.scale / size) ** 2;
-			this.scale = size;
-		} else this.sum += (size / this.scale) ** 2;
-	}
-
-	get value(): number {
-		return this.scale * Math.sqrt(this.sum);
 	}
 }

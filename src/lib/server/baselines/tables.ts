@@ -4,7 +4,7 @@ import { outcomeWords } from '$lib/components/note/figures';
 import type { CsvCell } from '$lib/csv';
 import { causeWords } from '$lib/components/baseline/cause';
 import { numberItems } from '$lib/note/numbering';
-import { readingsOf } from '$lib/note/readings';
+import { readingsOf, type Reading } from '$lib/note/readings';
 import type { Baseline } from './read';
 import type { ComparedSides } from './sides';
 
@@ -15,6 +15,23 @@ function figureCells(outcome: Outcome): CsvCell[] {
 	if (outcome.state !== 'value') return [null, '', null, outcomeWords(outcome)];
 	const { value, unit, uncertainty } = outcome.quantity;
 	return [value, unit, uncertainty, ''];
+}
+
+/** The values of a list, each in a row of its own. */
+function valueRows(number: string, { symbol, outcome }: Reading): CsvCell[][] {
+	if (outcome.state !== 'list') return [];
+	const { values, unit, uncertainties } = outcome.list;
+	return values.map((value, i) => [
+		number,
+		`${symbol}[${i + 1}]`,
+		'',
+		value,
+		unit,
+		uncertainties?.[i] ?? null,
+		'',
+		null,
+		''
+	]);
 }
 
 export function quantityTable({ content, results, head, digest }: Baseline): CsvCell[][] {
@@ -34,13 +51,16 @@ export function quantityTable({ content, results, head, digest }: Baseline): Csv
 			'state'
 		],
 		...content.items.flatMap((item) =>
-			readingsOf(item, byId.get(item.id)).map((reading) => [
-				numbers.get(item.id) ?? '',
-				reading.symbol,
-				reading.description,
-				...figureCells(reading.outcome),
-				reading.check?.margin?.value ?? null,
-				reading.check?.state ?? ''
+			readingsOf(item, byId.get(item.id)).flatMap((reading) => [
+				[
+					numbers.get(item.id) ?? '',
+					reading.symbol,
+					reading.description,
+					...figureCells(reading.outcome),
+					reading.check?.margin?.value ?? null,
+					reading.check?.state ?? ''
+				],
+				...valueRows(numbers.get(item.id) ?? '', reading)
 			])
 		)
 	];

@@ -50,9 +50,16 @@ function plural(kind: ItemKind) {
 const SAME_UNCERTAINTY = 1e-8;
 
 function uncertaintyMoved(a: Reading, b: Reading): boolean {
-	const of = (outcome: Outcome) =>
-		outcome.state === 'value' ? outcome.quantity.uncertainty : null;
-	const [then, now] = [of(a.outcome), of(b.outcome)];
+	const [then, now] = [uncertainties(a.outcome), uncertainties(b.outcome)];
+	return then.length !== now.length || then.some((u, i) => apart(u, now[i]!));
+}
+
+function uncertainties(outcome: Outcome): (number | null)[] {
+	if (outcome.state === 'list') return outcome.list.uncertainties ?? [];
+	return outcome.state === 'value' ? [outcome.quantity.uncertainty] : [];
+}
+
+function apart(then: number | null, now: number | null): boolean {
 	if (then === null || now === null) return then !== now;
 	return Math.abs(then - now) > SAME_UNCERTAINTY * Math.max(then, now);
 }
