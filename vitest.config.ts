@@ -1,9 +1,11 @@
 import { defineConfig, mergeConfig } from 'vitest/config';
 import viteConfig from './vite.config.ts';
 
+const properties = 'tests/setup/properties.ts';
+
 const database = {
 	globalSetup: ['tests/setup/postgres.ts'],
-	setupFiles: ['tests/server/setup.ts'],
+	setupFiles: [properties, 'tests/server/setup.ts'],
 	testTimeout: 20_000,
 	hookTimeout: 30_000
 };
@@ -15,7 +17,11 @@ export default mergeConfig(
 			projects: [
 				{
 					extends: true,
-					test: { name: 'unit', include: ['src/**/*.spec.ts', 'server/**/*.spec.ts'] }
+					test: {
+						name: 'unit',
+						include: ['src/**/*.spec.ts', 'server/**/*.spec.ts'],
+						setupFiles: [properties]
+					}
 				},
 				{
 					extends: true,
