@@ -20,12 +20,16 @@ const specs = files.filter(
 
 for (let round = 1; round <= Number(rounds); round += 1) {
 	const seed = randomInt(1, 2 ** 31);
-	const { status, stdout } = spawnSync('npx', ['vitest', 'run', '--project', 'unit', ...specs], {
-		env: { ...process.env, PROPERTY_SEED: String(seed) },
-		encoding: 'utf8'
-	});
+	const { status, stdout, stderr } = spawnSync(
+		'npx',
+		['vitest', 'run', '--project', 'unit', ...specs],
+		{
+			env: { ...process.env, PROPERTY_SEED: String(seed) },
+			encoding: 'utf8'
+		}
+	);
 	if (status !== 0) {
-		console.log(stdout);
+		console.log(stdout, stderr);
 		console.log(`PROPERTY_SEED=${seed} fails.`);
 		process.exit(1);
 	}

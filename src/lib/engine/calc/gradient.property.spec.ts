@@ -58,7 +58,8 @@ describe('the slopes of any expression', () => {
 			fc.property(text, figures, (written, hundredths) => {
 				const { expr } = parse(written);
 				const run = compile(expr, NAMES);
-				const at = hundredths.map((figure) => figure / 100 + 0.003);
+				// No two alike: where a condition turns over at the very point, differences see the jump on both sides.
+				const at = hundredths.map((figure, i) => figure / 100 + [0.003, 0.0051, 0.0079][i]!);
 				const [coarse, fine] = [2e-4, 1e-4].map((step) => differences(run, at, step));
 				fc.pre(Boolean(coarse && fine));
 				const slopes = new Float64Array(3);
