@@ -1,7 +1,7 @@
 /** Stretches of a line over which the section is smooth, with the integrals that statics needs in closed form. */
 import { gauss16 } from '../numerics/gauss';
 import type { Field } from './field';
-import { spread } from './taper';
+import { spreadOver } from './spread';
 
 /** A stretch [from, to] over which the section is smooth. */
 export type Piece = {
@@ -55,7 +55,7 @@ export function taperPiece(
 	to: number
 ): Piece {
 	const area = (r: number) => peakArea * Math.exp(-k * field.depth(r));
-	const volumeFrom = (near: number, far: number) => area(near) * spread(field, k, near, far);
+	const volumeFrom = (near: number, far: number) => area(near) * spreadOver(field, near, far)(k);
 	return {
 		from,
 		to,

@@ -124,8 +124,7 @@ export const site = variant({
 	}
 });
 
-/** Read only: a site that differs is another object. */
-export type Site = Readonly<ValueOf<typeof site>>;
+export type Site = ValueOf<typeof site>;
 
 export const ofBody = (body: Body, withJ2: boolean): Field => bodyField(spheroid(body, withJ2));
 
@@ -136,19 +135,8 @@ const spheroid = ({ gm, radius, rate, j2 }: Body, withJ2: boolean): Spheroid => 
 	j2: withJ2 && j2 ? j2.value : 0
 });
 
-/** A study asks for the field of one and the same site again and again. */
-const fields = new WeakMap<Site, Field>();
-
 /** @throws Refused where no line can stand. */
 export function fieldOf(place: Site): Field {
-	const known = fields.get(place);
-	if (known) return known;
-	const field = fieldAt(place);
-	fields.set(place, field);
-	return field;
-}
-
-function fieldAt(place: Site): Field {
 	const field = place.kind === 'moon' ? moonLine(place) : bodyField(spheroidOf(place));
 	if (field.balance > field.base * (1 + 1e-9)) return field;
 	throw new Refused('The balance radius lies inside the body: nothing holds a line up.', {

@@ -69,9 +69,16 @@ export type Sizing = ValuesOf<typeof sizingInputs>;
 export function sizingOf(input: Sizing): { field: Field; taper: TaperInput } {
 	const field = fieldOf(input.site);
 	refuseTop(field, 'top', input.top);
-	const { base, density, reserve, top } = input;
-	return { field, taper: { density, designStress: designStressOf(input), base, reserve, top } };
+	return { field, taper: taperInputOf(input) };
 }
+
+export const taperInputOf = (input: Sizing): TaperInput => ({
+	density: input.density,
+	designStress: designStressOf(input),
+	base: input.base,
+	reserve: input.reserve,
+	top: input.top
+});
 
 /** @throws Refused where no line can end at this radius. */
 export function refuseTop(field: Field, path: string, top: number): void {

@@ -1,6 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import { bodyField, moonField } from './field';
-import { spread } from './taper';
+import { spreadOver } from './spread';
+import type { Field } from './field';
+
+const spread = (field: Field, k: number, near: number, far: number) =>
+	spreadOver(field, near, far)(k);
 
 const earth = bodyField({ gm: 3.986004418e14, radius: 6_378_137, rate: 7.292115e-5, j2: 0 });
 

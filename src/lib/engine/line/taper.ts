@@ -6,10 +6,10 @@
  * Everything is reckoned in logarithms from the section at r_s, so that a taper of 1e400 is told by its
  * exponent and a taper of 1e33 loses no digits.
  */
-import { gauss16 } from '../numerics/gauss';
 import { lnSum, told } from '../numerics/logarithm';
 import type { Told } from '../methods/parameter';
 import type { Field } from './field';
+import { spreadOver } from './spread';
 import { freeStandingRadius, uniformPeakStress } from './uniform';
 
 export type TaperInput = {
@@ -25,62 +25,116 @@ export type TaperInput = {
 	top: number;
 };
 
-export type TaperResult = {
-	designStress: number;
-	taper: Told;
-	baseArea: number;
-	synchronousArea: Told;
-	topArea: Told;
-	greatestTension: Told;
-	mass: Told;
-	massBelow: Told;
-	massAbove: Told;
-	counterweight: Told;
-	total: Told;
-	lift: number;
-	/** m, anchor to top */
-	length: number;
-	synchronousRadius: number;
-	uniformPeak: number;
-	/** Height above the surface, m. */
-	freeStandingHeight: number;
-};
-
 export function isAboveSynchronous(field: Field, top: number): boolean {
 	return top > field.balance * (1 + 1e-9);
 }
 
-export function sizeTaper(field: Field, input: TaperInput): TaperResult {
-	const { density, designStress, reserve, top, base } = input;
-	const baseArea = baseSection(field, input);
-	const { lnTaper, lnArea, lnMass, lnCounterweight } = taperShape(field, density, designStress);
-	const lnPeak = Math.log(baseArea) + lnTaper;
-	const below = lnPeak + lnMass(field.balance, field.base);
-	const above = lnPeak + lnMass(field.balance, top);
-	const line = lnSum(below, above);
-	const counterweight = lnPeak + lnCounterweight(top);
-
-	return {
-		designStress,
-		taper: told(lnTaper),
-		baseArea,
-		synchronousArea: told(lnPeak),
-		topArea: told(lnPeak + lnArea(top)),
-		greatestTension: told(lnPeak + Math.log(designStress)),
-		mass: told(line),
-		massBelow: told(below),
-		massAbove: told(above),
-		counterweight: told(counterweight),
-		total: told(lnSum(line, counterweight)),
-		lift:
-			'lift' in base
-				? base.lift
-				: (designStress * baseArea) / (field.g(field.base) * (1 + reserve)),
-		length: top - field.base,
-		synchronousRadius: field.balance,
-		uniformPeak: uniformPeakStress(field, density),
-		freeStandingHeight: freeStandingRadius(field) - field.base
+/** Sizes lines to one top; what depends on the place and the top alone is kept from line to line. */
+export function taperSizer(
+	field: Field,
+	top: number
+): (input: Omit<TaperInput, 'top'>) => TaperResult {
+	const spreads = {
+		below: spreadOver(field, field.balance, field.base),
+		above: spreadOver(field, field.balance, top)
 	};
+	const depths = { base: field.depth(field.base), top: field.depth(top) };
+	return (input) => new TaperResult(field, { ...input, top }, spreads, depths);
+}
+
+export const sizeTaper = (field: Field, input: TaperInput): TaperResult =>
+	taperSizer(field, input.top)(input);
+
+type Spreads = Record<'below' | 'above', (k: number) => number>;
+
+/** A sized line. Its figures are found when they are read: a study of many lines reads only some. */
+export class TaperResult {
+	/** Section at the anchor, m². */
+	readonly baseArea: number;
+	private readonly k: number;
+	private readonly lnPeak: number;
+	private lnBelow = NaN;
+	private lnAbove = NaN;
+
+	constructor(
+		private field: Field,
+		private input: TaperInput,
+		private spreads: Spreads,
+		private depths: { base: number; top: number }
+	) {
+		this.k = input.density / input.designStress;
+		this.baseArea = baseSection(field, input);
+		this.lnPeak = Math.log(this.baseArea) + this.k * depths.base;
+	}
+
+	get designStress(): number {
+		return this.input.designStress;
+	}
+	get taper(): Told {
+		return told(this.k * this.depths.base);
+	}
+	get synchronousArea(): Told {
+		return told(this.lnPeak);
+	}
+	get topArea(): Told {
+		return told(this.lnPeak - this.k * this.depths.top);
+	}
+	get greatestTension(): Told {
+		return told(this.lnPeak + Math.log(this.designStress));
+	}
+	get mass(): Told {
+		return told(this.lnMass);
+	}
+	get massBelow(): Told {
+		return told(this.lnMassBelow);
+	}
+	get massAbove(): Told {
+		return told(this.lnMassAbove);
+	}
+	get counterweight(): Told {
+		return told(this.lnCounterweight);
+	}
+	get total(): Told {
+		return told(lnSum(this.lnMass, this.lnCounterweight));
+	}
+	get lift(): number {
+		const { base, designStress, reserve } = this.input;
+		if ('lift' in base) return base.lift;
+		return (designStress * this.baseArea) / (this.field.g(this.field.base) * (1 + reserve));
+	}
+	/** m, anchor to top */
+	get length(): number {
+		return this.input.top - this.field.base;
+	}
+	get synchronousRadius(): number {
+		return this.field.balance;
+	}
+	get uniformPeak(): number {
+		return uniformPeakStress(this.field, this.input.density);
+	}
+	/** Height above the surface, m. */
+	get freeStandingHeight(): number {
+		return freeStandingRadius(this.field) - this.field.base;
+	}
+
+	private get lnMassBelow(): number {
+		if (Number.isNaN(this.lnBelow)) this.lnBelow = this.lnOver('below');
+		return this.lnBelow;
+	}
+	private get lnMassAbove(): number {
+		if (Number.isNaN(this.lnAbove)) this.lnAbove = this.lnOver('above');
+		return this.lnAbove;
+	}
+	private lnOver(side: 'below' | 'above'): number {
+		return this.lnPeak + Math.log(this.input.density) + Math.log(this.spreads[side](this.k));
+	}
+	private get lnMass(): number {
+		return lnSum(this.lnMassBelow, this.lnMassAbove);
+	}
+	private get lnCounterweight(): number {
+		const { designStress, top } = this.input;
+		return this.lnPeak - this.k * this.depths.top + Math.log(designStress / -this.field.g(top));
+	}
 }
 
 /** Section at the anchor, m². */
@@ -110,53 +164,11 @@ export function taperShape(field: Field, density: number, designStress: number):
 		k,
 		lnTaper: k * field.depth(field.base),
 		lnArea,
-		lnMass: (near, far) => Math.log(density) + lnArea(near) + Math.log(spread(field, k, near, far)),
+		lnMass: (near, far) =>
+			Math.log(density) + lnArea(near) + Math.log(spreadOver(field, near, far)(k)),
 		lnCounterweight: (top) => lnArea(top) + Math.log(designStress / -field.g(top))
 	};
 }
-
-const STEEPEST = 16;
-/** Beyond a fall to e⁻⁶⁰ the line has no weight. */
-const NO_WEIGHT = 60;
-/** A peak narrower than this share of its radius has no radii to be summed over. */
-const NARROWEST = 1e-12;
-
-/**
- * ∫ A(r)/A(near) dr, m, of a constant-stress taper between two radii on one side of r_s. The
- * section falls from `near`, the end nearer to r_s, to `far`, so that nothing overflows.
- *
- * Gauss–Legendre on panels chosen beforehand instead of an adaptive rule, so that sizing a line takes some
- * fifty exponentials: a study does it a hundred thousand times. A panel is halved until it is no longer
- * than three times its distance from where U has a pole, and the exponent changes by 16 at the most over
- * it; sixteen nodes then leave less than 1e-11.
- */
-export function spread(field: Field, k: number, near: number, far: number): number {
-	const { balance, limit, depth, rise } = field;
-	const fall = near === balance ? depth : (r: number) => rise(r, near);
-	const shape = (r: number) => Math.exp(-k * fall(r));
-
-	function over(from: number, to: number, fallen: number, falls: number): number {
-		if (!(fallen <= NO_WEIGHT)) return 0;
-		const clear = Math.min(from, to, limit - Math.max(from, to));
-		if (falls - fallen <= STEEPEST && Math.abs(to - from) <= 3 * clear)
-			return Math.abs(gauss16(shape, from, to));
-		if (Math.abs(to - from) <= NARROWEST * near) return widthOfPeak(field, k, near);
-		const middle = from + (to - from) / 2;
-		if (middle === from || middle === to) return Math.abs(gauss16(shape, from, to));
-		const between = k * fall(middle);
-		return over(from, middle, fallen, between) + over(middle, to, between, falls);
-	}
-
-	const sum = over(near, far, 0, k * fall(far));
-	// From the double nearest to r_s to r_s itself, for an end a hair away.
-	return near === balance && far !== near ? (sum * field.beyond(far)) / (far - near) : sum;
-}
-
-/** The same of a peak too narrow for radii to be told apart in it: half a Gaussian at r_s, else an exponential. */
-const widthOfPeak = (field: Field, k: number, near: number) =>
-	near === field.balance
-		? Math.sqrt(Math.PI / (-2 * k * field.along(near)))
-		: 1 / (k * Math.abs(field.g(near)));
 
 export type Profile = {
 	height: number[];

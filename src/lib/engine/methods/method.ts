@@ -35,10 +35,19 @@ export type Method<I extends Parameters = Parameters, O extends Parameters = Par
 	 * @throws Refused
 	 */
 	run(input: ValuesOf<I>): { outputs: ValuesOf<O>; warnings?: string[] };
+	/**
+	 * The outputs of `run` for many inputs that are as this one but for what `varies`, which tells of each
+	 * input by its name: what does not hang on those is found once and kept. Null where nothing can be kept.
+	 */
+	prepare?(
+		input: ValuesOf<I>,
+		varies: (name: string) => boolean
+	): ((input: ValuesOf<I>) => ValuesOf<O>) | null;
 };
 
 export type AnyMethod = Description & {
 	run(input: never): { outputs: object; warnings?: string[] };
+	prepare?(input: never, varies: (name: string) => boolean): ((input: never) => object) | null;
 };
 
 export type Answer<O = Record<string, unknown>> =
@@ -67,7 +76,12 @@ export function answer<M extends AnyMethod>(
 	try {
 		const found = method.run(checked.values as never);
 		// Plain figures, also of outputs that are computed when they are read.
-		const outputs = { ...found.outputs };
+		const read = found.outputs as Record<string, unknown>;
+		const outputs = Object.fromEntries(
+			Object.keys(method.outputs).flatMap((name) =>
+				read[name] === undefined ? [] : [[name, read[name]]]
+			)
+		);
 		const { warnings = [] } = found;
 		const lost = notFinite(outputs);
 		if (lost !== null)
@@ -77,7 +91,7 @@ export function answer<M extends AnyMethod>(
 				remedy: 'Look at the inputs for values far out of the ordinary.',
 				faults: []
 			});
-		return { ok: true, ...about, outputs, warnings };
+		return { ok: true, ...about, outputs: outputs as typeof found.outputs, warnings };
 	} catch (error) {
 		if (error instanceof Refused) return refuse(error.refusal);
 		throw error;

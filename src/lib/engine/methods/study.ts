@@ -1,7 +1,7 @@
 /** What all studies of a method share: which method, its input, and the figures that are looked at. */
 import type { Model } from '../studies/model';
 import { nearest } from '../calc/near';
-import { checkInputs, outOfRange } from './check';
+import { checkInputs, fits, outOfRange } from './check';
 import type { AnyMethod } from './method';
 import { list, open, text } from './parameter';
 import { Refused, refuseInput } from './refused';
@@ -9,7 +9,7 @@ import {
 	inputPath,
 	outputAt,
 	outputPath,
-	withValue,
+	withPlaces,
 	type InputPath,
 	type OutputPath
 } from './value-path';
@@ -68,28 +68,47 @@ export const inputsNamed = ({ method, values }: Subject, paths: readonly string[
 export const outputsNamed = ({ method }: Subject, paths: readonly string[], at: string) =>
 	paths.map((path, i) => outputPath(method.outputs, path, `${at}.${i}`));
 
-/** What the method answers with some inputs replaced. @throws Refused also where one is out of its range. */
+/**
+ * What the method answers with some inputs replaced. Outputs are to be read before the next are asked for: the
+ * input is one object, written anew each time.
+ * @throws Refused also where an input is out of its range.
+ */
 export function outputsWith(
 	{ method, values }: Subject,
-	inputs: readonly InputPath[],
-	x: ArrayLike<number>
-): object {
-	let replaced = values;
-	inputs.forEach(({ path, keys, range, whole }, i) => {
-		const value = x[i]!;
-		const wanted =
-			outOfRange(range, value) ?? (whole && !Number.isSafeInteger(value) ? 'a whole number' : null);
-		if (wanted !== null) refuseInput(path, `${path} must be ${wanted}; it is ${value}.`);
-		replaced = withValue(replaced, keys, value);
-	});
-	return method.run(replaced as never).outputs;
+	inputs: readonly InputPath[]
+): (x: ArrayLike<number>) => object {
+	const { input, places } = withPlaces(values, inputs);
+	const varying = new Set(inputs.map(({ keys }) => keys[0]!));
+	const prepared = method.prepare?.(input as never, (name) => varying.has(name));
+	const run = prepared ?? ((input: never) => method.run(input).outputs);
+	return (x) => {
+		for (let i = 0; i < inputs.length; i += 1) {
+			const value = x[i]!;
+			const { range, whole } = inputs[i]!;
+			if (!fits(range, value) || (whole && !Number.isSafeInteger(value))) refuse(inputs[i]!, value);
+			const { holder, key } = places[i]!;
+			holder[key] = value;
+		}
+		return run(input as never);
+	};
+}
+
+function refuse({ path, range }: InputPath, value: number): never {
+	refuseInput(
+		path,
+		`${path} must be ${outOfRange(range, value) ?? 'a whole number'}; it is ${value}.`
+	);
 }
 
 /** The method as a model of a study. A figure above 1e300 is refused, for there are no statistics of it. */
-export const modelOf =
-	(subject: Subject, inputs: readonly InputPath[], outputs: readonly OutputPath[]): Model =>
-	(x, y) => {
-		const found = outputsWith(subject, inputs, x);
+export function modelOf(
+	subject: Subject,
+	inputs: readonly InputPath[],
+	outputs: readonly OutputPath[]
+): Model {
+	const outputsAt = outputsWith(subject, inputs);
+	return (x, y) => {
+		const found = outputsAt(x);
 		for (let k = 0; k < outputs.length; k += 1) {
 			const figure = outputAt(found, outputs[k]!);
 			if (typeof figure !== 'number')
@@ -97,3 +116,4 @@ export const modelOf =
 			y[k] = figure;
 		}
 	};
+}

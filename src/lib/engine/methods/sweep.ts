@@ -94,9 +94,10 @@ export const sweep = (methods: Studied) =>
 			const [first = [], second] = along.map((range, i) => spaced(range, `along.${i}`));
 			const grid = second ? first.flatMap((a) => second.map((b) => [a, b])) : first.map((a) => [a]);
 			const outputs = outputsNamed(subject, paths, 'outputs');
+			const outputsAt = outputsWith(subject, inputs);
 			const results = (at: number[]): { outputs: Told[]; refusal: string | undefined } => {
 				try {
-					const found = outputsWith(subject, inputs, at);
+					const found = outputsAt(at);
 					return { outputs: outputs.map((path) => outputAt(found, path)), refusal: undefined };
 				} catch (error) {
 					if (!(error instanceof Refused)) throw error;

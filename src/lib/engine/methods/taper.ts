@@ -8,8 +8,10 @@ import {
 	toldForce,
 	toldMass
 } from '../line/parameters';
-import { sizingInputs, sizingOf, sizingWarnings, refuseTop } from '../line/sizing';
-import { sizeTaper, taperShape } from '../line/taper';
+import type { Field } from '../line/field';
+import { refuseTop, sizingInputs, sizingWarnings, taperInputOf, type Sizing } from '../line/sizing';
+import { fieldOf } from '../line/site';
+import { taperShape, taperSizer, type TaperResult } from '../line/taper';
 import { topWithin, tradeCurve } from '../line/trade';
 import { lnOf, told as toldOf } from '../numerics/logarithm';
 import { AREA, PURE } from '../quantities/dimension';
@@ -116,49 +118,112 @@ export const taper = defineMethod({
 	],
 	caution:
 		'Sizing is no release for use: factors of safety and allowables follow the governing standard, and a line that carries people or passes over them is for local codes and licensed practice to judge.',
+	prepare(input, varies) {
+		if (varies('site')) return null;
+		const field = fieldOf(input.site);
+		const size = varies('top') ? null : taperSizer(field, input.top);
+		return (now) => outputsOf(field, size, now);
+	},
 	run(input) {
-		const { field, taper } = sizingOf(input);
-		const rangeTop = input.rangeTop ?? input.top;
-		refuseTop(field, 'rangeTop', rangeTop);
-		const rangeFrom = input.rangeFrom ?? field.balance + 0.1 * (rangeTop - field.balance);
-		if (input.rangeFrom !== undefined) refuseTop(field, 'rangeFrom', rangeFrom);
-		if (rangeFrom >= rangeTop)
-			refuseInput('rangeFrom', 'The trade curve’s lowest top is not below its highest.');
-		const sized = sizeTaper(field, taper);
-		const { density, designStress } = taper;
-		const shape = taperShape(field, density, designStress);
-		const lnPeak = Math.log(sized.baseArea) + shape.lnTaper;
-		const step = (rangeTop - rangeFrom) / (input.rangePoints - 1);
-		const tops = Array.from({ length: input.rangePoints }, (_, i) => rangeFrom + i * step);
-		tops[tops.length - 1] = rangeTop;
+		const field = fieldOf(input.site);
+		const outputs = outputsOf(field, null, input);
 		return {
-			outputs: {
-				designStress,
-				taper: sized.taper,
-				baseArea: sized.baseArea,
-				balanceArea: sized.synchronousArea,
-				topArea: sized.topArea,
-				greatestTension: sized.greatestTension,
-				lineMass: sized.mass,
-				massBelow: sized.massBelow,
-				massAbove: sized.massAbove,
-				counterweight: sized.counterweight,
-				total: sized.total,
-				lift: sized.lift,
-				totalPerLift: toldOf(lnOf(sized.total) - Math.log(sized.lift)),
-				length: sized.length,
-				balanceRadius: field.balance,
-				// Computed where they are read: a study of the masses sizes many lines and reads neither.
-				get topWithin() {
-					return topWithin(field, shape, { designStress, rangeTop, share: input.within });
-				},
-				get trade() {
-					return tradeCurve(field, shape, lnPeak, tops);
-				}
-			},
+			outputs,
 			get warnings() {
-				return sizingWarnings(input, field, sized.synchronousArea);
+				return sizingWarnings(input, field, outputs.balanceArea);
 			}
 		};
 	}
 });
+
+type Input = Sizing & {
+	rangeFrom?: number | undefined;
+	rangeTop?: number | undefined;
+	rangePoints: number;
+	within: number;
+};
+
+/** @throws Refused where no line can end at one of the tops. */
+function outputsOf(field: Field, size: ReturnType<typeof taperSizer> | null, input: Input) {
+	refuseTop(field, 'top', input.top);
+	const rangeTop = input.rangeTop ?? input.top;
+	refuseTop(field, 'rangeTop', rangeTop);
+	const rangeFrom = input.rangeFrom ?? field.balance + 0.1 * (rangeTop - field.balance);
+	if (input.rangeFrom !== undefined) refuseTop(field, 'rangeFrom', rangeFrom);
+	if (rangeFrom >= rangeTop)
+		refuseInput('rangeFrom', 'The trade curve’s lowest top is not below its highest.');
+	const sized = (size ?? taperSizer(field, input.top))(taperInputOf(input));
+	return new TaperOutputs(field, sized, { ...input, rangeFrom, rangeTop });
+}
+
+/** Found when they are read: a study of the masses sizes many lines and needs no trade curve. */
+class TaperOutputs {
+	constructor(
+		private field: Field,
+		private sized: TaperResult,
+		private input: Input & { rangeFrom: number; rangeTop: number }
+	) {}
+
+	get designStress() {
+		return this.sized.designStress;
+	}
+	get taper() {
+		return this.sized.taper;
+	}
+	get baseArea() {
+		return this.sized.baseArea;
+	}
+	get balanceArea() {
+		return this.sized.synchronousArea;
+	}
+	get topArea() {
+		return this.sized.topArea;
+	}
+	get greatestTension() {
+		return this.sized.greatestTension;
+	}
+	get lineMass() {
+		return this.sized.mass;
+	}
+	get massBelow() {
+		return this.sized.massBelow;
+	}
+	get massAbove() {
+		return this.sized.massAbove;
+	}
+	get counterweight() {
+		return this.sized.counterweight;
+	}
+	get total() {
+		return this.sized.total;
+	}
+	get lift() {
+		return this.sized.lift;
+	}
+	get totalPerLift() {
+		return toldOf(lnOf(this.total) - Math.log(this.lift));
+	}
+	get length() {
+		return this.sized.length;
+	}
+	get balanceRadius() {
+		return this.field.balance;
+	}
+	get topWithin() {
+		const { designStress } = this;
+		const { rangeTop, within: share } = this.input;
+		return topWithin(this.field, this.shape, { designStress, rangeTop, share });
+	}
+	get trade() {
+		const { rangeFrom, rangeTop, rangePoints } = this.input;
+		const step = (rangeTop - rangeFrom) / (rangePoints - 1);
+		const tops = Array.from({ length: rangePoints }, (_, i) => rangeFrom + i * step);
+		tops[tops.length - 1] = rangeTop;
+		const lnPeak = Math.log(this.baseArea) + this.shape.lnTaper;
+		return tradeCurve(this.field, this.shape, lnPeak, tops);
+	}
+
+	private get shape() {
+		return taperShape(this.field, this.input.density, this.designStress);
+	}
+}

@@ -54,21 +54,27 @@ function fieldOf(fields: Parameters, key: string, name: string, at: string): Par
 	refuseInput(at, `${name} is not there.${near === undefined ? '' : ` Is it ${near}?`}`);
 }
 
-/** The same values with one replaced; what lies on the way to it is copied, the rest is shared. */
-export function withValue(values: Values, keys: readonly string[], value: number): Values {
-	return replaced(values, keys, 0, value) as Values;
+/** Where in an input a number stands: in this group or list, under this name. */
+export type Place = { holder: Record<string, unknown>; key: string };
+
+/** A copy of the values in which these numbers can be written; what is left out on the way to one is made. */
+export function withPlaces(
+	values: Values,
+	inputs: readonly InputPath[]
+): { input: Values; places: Place[] } {
+	const input = copied(values) as Record<string, unknown>;
+	const places = inputs.map(({ keys }) => {
+		let holder = input;
+		for (const key of keys.slice(0, -1)) holder = (holder[key] ??= {}) as Record<string, unknown>;
+		return { holder, key: keys.at(-1)! };
+	});
+	return { input, places };
 }
 
-function replaced(part: unknown, keys: readonly string[], depth: number, value: number): unknown {
-	if (depth === keys.length) return value;
-	const key = keys[depth]!;
-	if (Array.isArray(part)) {
-		const copy = [...part];
-		copy[Number(key)] = replaced(copy[Number(key)], keys, depth + 1, value);
-		return copy;
-	}
-	const record = (part ?? {}) as Values;
-	return { ...record, [key]: replaced(record[key], keys, depth + 1, value) };
+function copied(part: unknown): unknown {
+	if (Array.isArray(part)) return part.map(copied);
+	if (!isRecord(part)) return part;
+	return Object.fromEntries(Object.entries(part).map(([key, value]) => [key, copied(value)]));
 }
 
 export type OutputPath = { path: string; keys: readonly string[] };
