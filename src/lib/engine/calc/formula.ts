@@ -173,9 +173,11 @@ export class Formula {
 		if (!this.type || !this.inputs.every(known)) {
 			this.inferredFor = this.inputs.map(({ manner }) => manner!);
 			this.type = this.inferred(expr);
-			const isList = (name: string) => this.manner(name).type.list;
-			this.lists = hasList(expr, isList) ? compileLists(expr, this.names, isList) : null;
-			if (!(this.type instanceof Refusal)) this.findManner(expr, this.type);
+			if (!(this.type instanceof Refusal)) {
+				const isList = (name: string) => this.manner(name).type.list;
+				this.lists = hasList(expr, isList) ? compileLists(expr, this.names, isList) : null;
+				this.findManner(expr, this.type);
+			}
 		}
 		if (this.type instanceof Refusal) throw this.type;
 		return this.type;

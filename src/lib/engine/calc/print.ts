@@ -35,7 +35,7 @@ const LEVEL = {
 	leaf: 7
 };
 
-const OPERATOR_WORDS = { '<': '<', '<=': '≤', '>': '>', '>=': '≥', '==': '=', '!=': '≠' };
+const OPERATOR_WORDS = { '<': '<', '<=': '≤', '>': '>', '>=': '≥', '==': '==', '!=': '≠' };
 
 const TEXT: Notation = {
 	number: (value) => String(value).replace('-', '−'),
@@ -119,10 +119,10 @@ function print(expr: Expr, notation: Notation): string {
 			return notation.name(expr.name);
 		case 'constant':
 			return notation.constant(expr);
-		case 'negate':
-			return (
-				notation.minus + within(expr.of.kind === 'negate' ? LEVEL.call : LEVEL.product, expr.of)
-			);
+		case 'negate': {
+			const of = within(LEVEL.product, expr.of);
+			return notation.minus + (of.startsWith(notation.minus) ? notation.group(of) : of);
+		}
 		case 'binary':
 			return binary(expr, notation, within);
 		case 'compare':
@@ -149,7 +149,10 @@ function print(expr: Expr, notation: Notation): string {
 		case 'list':
 			return notation.list(expr.items.map((item) => print(item, notation)));
 		case 'pick':
-			return notation.pick(within(LEVEL.leaf, expr.of), print(expr.index, notation));
+			return notation.pick(
+				within(expr.of.kind === 'number' ? Infinity : LEVEL.leaf, expr.of),
+				print(expr.index, notation)
+			);
 	}
 }
 
@@ -171,8 +174,12 @@ function binary(
 			return `${within(LEVEL.sum, left)} ${notation.minus} ${unsigned(LEVEL.product, right)}`;
 		case '*':
 			return within(LEVEL.product, left) + notation.times(left, right) + within(LEVEL.call, right);
-		case '/':
-			return `${within(LEVEL.product, left)}/${within(LEVEL.call, right)}`;
+		case '/': {
+			const over = within(LEVEL.product, left);
+			// 1/2 km can be read in two ways, and is not read at all.
+			const clear = right.kind === 'literal' && /\d$/.test(over) ? LEVEL.leaf : LEVEL.call;
+			return `${over}/${within(clear, right)}`;
+		}
 		case '^': {
 			// In TeX the exponent is set small and raised, which is parenthesis enough.
 			const exponent = notation === TEX ? print(right, notation) : within(LEVEL.leaf, right);

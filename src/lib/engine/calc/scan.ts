@@ -77,9 +77,13 @@ class Scanner implements Scanned {
 		while (this.at < this.text.length) {
 			const sign = this.text[this.at]!;
 			if (SPACE.test(sign)) this.put(' ', 1);
-			else if (this.number() || this.name() || this.raised()) continue;
-			else if (sign === ',') this.comma();
-			else this.operator(sign);
+			else if (this.number()) continue;
+			else {
+				if (sign !== '/') this.ratio = '';
+				if (this.name() || this.raised()) continue;
+				if (sign === ',') this.comma();
+				else this.operator(sign);
+			}
 		}
 	}
 
@@ -129,6 +133,7 @@ class Scanner implements Scanned {
 			});
 		}
 		const digits = significant(plain);
+		this.ratio = '';
 		this.leaf({ kind: 'literal', number, digits, unit, si: toSi(number, unit), ...place });
 		return true;
 	}
@@ -138,7 +143,9 @@ class Scanner implements Scanned {
 		const scanned = scanUnit(this.text, from, { tight: true });
 		if (!scanned) return null;
 		const after = scanned.to + this.match(GAP, scanned.to)!.length;
-		if (scanned.unit.text.endsWith('%') && /[\p{L}\d(]/u.test(this.text[after] ?? '')) {
+		const word = this.match(NAME, after) ?? '';
+		const goesOn = /[\p{L}\d(]/u.test(this.text[after] ?? '') && !OPERATOR_WORDS.includes(word);
+		if (scanned.unit.text.endsWith('%') && goesOn) {
 			throw new Refusal('syntax', '“%” is the percent sign and stands behind its number.', {
 				remedy: 'Write “*” after it to multiply.',
 				place: { from: from, to: scanned.to }
@@ -199,7 +206,6 @@ class Scanner implements Scanned {
 		if (sign === '(') return this.enter('(', 'group');
 		if (sign === '[') return this.enter('[', 'list');
 		if (sign === ')' || sign === ']') this.open.pop();
-		if (sign !== '/') this.ratio = '';
 		if (ONE.includes(sign)) return this.put(sign, 1);
 		const place = { from: this.at, to: this.at + 1 };
 		if (sign === '=') {
@@ -219,7 +225,6 @@ class Scanner implements Scanned {
 
 	private enter(sign: '(' | '[', opened: Opened) {
 		this.open.push(opened);
-		this.ratio = '';
 		if (this.open.length > DEEPEST) {
 			throw new Refusal(
 				'too-long',
