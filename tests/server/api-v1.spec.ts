@@ -1,6 +1,7 @@
 /** The API for programs: tokens, methods, notes in interchange. */
 import { beforeAll, afterAll, expect, test } from 'vitest';
 import { eq } from 'drizzle-orm';
+import { z } from 'zod';
 import './setup';
 import { cookieOf, makePerson } from './fixtures';
 
@@ -8,12 +9,14 @@ const { db } = await import('$lib/server/db');
 const { apiToken } = await import('$lib/server/db/schema');
 const { makeApiToken, apiTokensOf, revokeApiToken } = await import('$lib/server/auth/api-tokens');
 const { signOutEverywhere } = await import('$lib/server/people/accounts');
+const { openApi } = await import('$lib/server/engine/openapi');
 const { closeEngine } = await import('$lib/server/engine/evaluate');
 const { handle, handleError } = await import('../../src/hooks.server');
 const routes = {
 	'/api/v1/methods': await import('../../src/routes/api/v1/methods/+server'),
 	'/api/v1/methods/[name]': await import('../../src/routes/api/v1/methods/[name]/+server'),
 	'/api/v1/evaluate': await import('../../src/routes/api/v1/evaluate/+server'),
+	'/api/v1/openapi.json': await import('../../src/routes/api/v1/openapi.json/+server'),
 	'/api/v1/schemas/note': await import('../../src/routes/api/v1/schemas/note/+server')
 };
 
@@ -48,11 +51,14 @@ async function ask(id: keyof typeof routes, asked: Asked = {}): Promise<Response
 	const call = (routes[id] as Record<string, (event: never) => Promise<Response>>)[method]!;
 	return handle({
 		event,
-		resolve: async () =>
-			call(event).catch(async (error: unknown) => {
+		resolve: async () => {
+			try {
+				return await call(event);
+			} catch (error) {
 				await handleError({ error, event, status: 500, message: 'Internal Error' });
 				return new Response(null, { status: 500 });
-			})
+			}
+		}
 	}) as Promise<Response>;
 }
 
@@ -123,15 +129,16 @@ test('a method that does not exist is answered with names like it', async () => 
 	expect(await answer.json()).toMatchObject({ near: ['uniform-line'] });
 });
 
+const given = { kind: 'given', source: '', description: '', uncertainty: '1.9' };
+const calculation = { kind: 'calculation', description: '', digits: '', unit: 'GPa' };
+
 test('a note in interchange comes back with the result of each item, faults as well', async () => {
-	const given = { source: '', description: '', uncertainty: '1.9' };
-	const calculation = { kind: 'calculation', description: '', digits: '', unit: 'GPa' };
 	const note = {
 		format: 'holdfast-note',
 		version: 1,
 		thinLimit: '0.10',
 		items: [
-			{ id: 'a', kind: 'given', symbol: 'σ_al', value: '110', unit: 'GPa', ...given },
+			{ id: 'a', symbol: 'σ_al', value: '110', unit: 'GPa', ...given },
 			{ id: 'b', symbol: 'σ_d', expression: 'σ_al/1.75', ...calculation },
 			{ id: 'c', symbol: 'x', expression: 'σ_al + 1 m', ...calculation }
 		]
@@ -153,6 +160,70 @@ test('what is no note is refused with the places that are wrong', async () => {
 	const { errors } = await answer.json();
 	expect(errors[0].field).toBe('items.0.kind');
 	expect((await ask('/api/v1/evaluate', { token: evaluating, body: 'no JSON' })).status).toBe(400);
+});
+
+test('a note of a version to come is told which is known and where it is described', async () => {
+	const body = { format: 'holdfast-note', version: 2, thinLimit: '', items: [] };
+	const answer = await ask('/api/v1/evaluate', { token: evaluating, body });
+	expect(answer.status).toBe(422);
+	const { errors } = await answer.json();
+	expect(errors).toEqual([
+		{ field: 'version', message: expect.stringMatching(/known here is 1;.*docs\/interchange\.md/) }
+	]);
+});
+
+test('the description is open to anybody and has every address', async () => {
+	const answer = await ask('/api/v1/openapi.json');
+	const { paths } = await answer.json();
+	const known = Object.keys(paths).map((path) =>
+		path.replace(/^(\/api\/v1\/methods)\/.+$/, '$1/[name]')
+	);
+	expect([...new Set(known)].sort()).toEqual(
+		Object.keys(routes)
+			.filter((id) => !id.endsWith('openapi.json'))
+			.sort()
+	);
+});
+
+test('answers are such as the description says', async () => {
+	const { components, paths } = openApi();
+	const moved = (schema: unknown) =>
+		JSON.parse(JSON.stringify(schema).replaceAll('#/components/schemas/', '#/$defs/'));
+	const of = (path: string, verb: string) => {
+		const { responses } = paths[path]![verb] as never as {
+			responses: { 200: { content: Record<string, { schema: object }> } };
+		};
+		const [{ schema }] = Object.values(responses[200].content) as [{ schema: object }];
+		return z.fromJSONSchema(moved({ ...schema, $defs: components.schemas }));
+	};
+	const note = {
+		format: 'holdfast-note',
+		version: 1,
+		thinLimit: '',
+		items: [
+			{ ...given, id: 'a', symbol: 'a', value: '2', unit: 'km', uncertainty: '1' },
+			{ ...calculation, id: 'b', symbol: 'b', expression: '[a, 2*a]', unit: '' },
+			{ ...calculation, id: 'c', symbol: 'c', expression: 'a + nothing', unit: '' },
+			{ ...calculation, id: 'd', symbol: 'd', expression: 'c', unit: '' },
+			{ ...calculation, id: 'e', symbol: 'e', expression: '', unit: '' },
+			{
+				...{ id: 'f', kind: 'check', description: '', left: 'a', relation: 'le', right: '1 km' },
+				...{ tolerance: '', required: '' }
+			}
+		]
+	};
+	const asked = [
+		['/api/v1/methods', '/api/v1/methods', undefined],
+		['/api/v1/methods/uniform-line', '/api/v1/methods/[name]', undefined],
+		['/api/v1/methods/uniform-line', '/api/v1/methods/[name]', steel],
+		['/api/v1/evaluate', '/api/v1/evaluate', note]
+	] as const;
+	for (const [path, id, body] of asked) {
+		const answer = await ask(id, { token: evaluating, name: 'uniform-line', body });
+		const schema = of(path, body === undefined ? 'get' : 'post');
+		expect(answer.status, path).toBe(200);
+		expect(schema.safeParse(await answer.json()).error, path).toBeUndefined();
+	}
 });
 
 test('the schema of the interchange format is served', async () => {
@@ -198,6 +269,20 @@ test('missing, unknown, expired and revoked tokens, and a session, are answered 
 	expect(answers[0]!.headers.get('www-authenticate')).toBe('Bearer');
 });
 
+test('a token that has expired leaves its place to another', async () => {
+	const owner = await makePerson();
+	const make = () => makeApiToken(owner.id, { name: 'nightly', scope: 'read', days: 1 });
+	for (let n = 0; n < 20; n += 1) await make();
+	await expect(make()).rejects.toMatchObject({ status: 409 });
+	const [first] = await apiTokensOf(owner.id);
+	await db
+		.update(apiToken)
+		.set({ expiresAt: new Date(0) })
+		.where(eq(apiToken.id, first!.id));
+	await make();
+	await expect(make()).rejects.toMatchObject({ status: 409 });
+});
+
 test('of a token only its digest and its first letters are stored', async () => {
 	const [row] = await db.select().from(apiToken).where(eq(apiToken.userId, person.id));
 	expect(JSON.stringify(row)).not.toContain(evaluating.slice(14));
@@ -221,9 +306,12 @@ test('ending every session revokes every token as well', async () => {
 });
 
 test('one person has two methods computed at a time', async () => {
-	const body = steel;
-	const run = () =>
-		ask('/api/v1/methods/[name]', { token: evaluating, name: 'uniform-line', body });
+	// Long enough that four of them meet.
+	const body = {
+		...{ method: 'uniform-line', input: steel, outputs: ['peakStress'], samples: 40_000 },
+		uncertain: [{ path: 'density', distribution: { kind: 'normal', mean: 7900, u: 79 } }]
+	};
+	const run = () => ask('/api/v1/methods/[name]', { token: evaluating, name: 'monte-carlo', body });
 	const statuses = (await Promise.all([run(), run(), run(), run()])).map(({ status }) => status);
 	expect(statuses.filter((status) => status === 429).length).toBeGreaterThan(0);
 	expect((await run()).status).toBe(200);

@@ -74,6 +74,7 @@ const EXPECTED: Record<string, string> = {
 	'POST /api/v1/methods/[name]': TOKEN,
 	'POST /api/v1/evaluate': TOKEN,
 	'GET /api/v1/schemas/note': TOKEN,
+	'GET /api/v1/openapi.json': PUBLIC,
 
 	'load /administration': SITE,
 	'?/create /administration': SITE,
