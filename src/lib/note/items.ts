@@ -126,8 +126,11 @@ export type ItemKind = Item['kind'];
 export type ItemOf<K extends ItemKind> = Extract<Item, { kind: K }>;
 
 export const noteContentSchema = z.object({
-	format: z.literal('holdfast-note'),
-	version: z.literal(1),
+	format: z.literal('holdfast-note', 'A note in interchange has the format “holdfast-note”.'),
+	version: z.literal(
+		1,
+		'The version of the format known here is 1; it is described in docs/interchange.md and by GET /api/v1/schemas/note.'
+	),
 	/** Margin below which a check that holds is called thin, as typed. */
 	thinLimit: typed,
 	items: z.array(itemSchema)

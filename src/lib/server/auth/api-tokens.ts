@@ -33,7 +33,8 @@ export async function makeApiToken(
 	userId: string,
 	{ name, scope, days }: z.infer<typeof newApiTokenSchema>
 ): Promise<string> {
-	if ((await db.$count(apiToken, eq(apiToken.userId, userId))) >= MOST)
+	const held = await db.$count(apiToken, and(eq(apiToken.userId, userId), holds()));
+	if (held >= MOST)
 		throw new Problem(409, `You have ${MOST} tokens; revoke one that is no longer used.`);
 	const token = MARK + newToken().token;
 	await db.insert(apiToken).values({
@@ -99,17 +100,14 @@ export async function requireToken(
 	return { userId: found.userId };
 }
 
+const holds = () => or(isNull(apiToken.expiresAt), gt(apiToken.expiresAt, new Date()));
+
 async function tokenBehind(token: string) {
 	const [found] = await db
 		.select({ id: apiToken.id, userId: apiToken.userId, scope: apiToken.scope })
 		.from(apiToken)
 		.innerJoin(user, eq(user.id, apiToken.userId))
-		.where(
-			and(
-				eq(apiToken.tokenHash, digestOf(token)),
-				or(isNull(apiToken.expiresAt), gt(apiToken.expiresAt, new Date()))
-			)
-		);
+		.where(and(eq(apiToken.tokenHash, digestOf(token)), holds()));
 	return found ?? null;
 }
 
