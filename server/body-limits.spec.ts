@@ -30,3 +30,17 @@ test('evidence of 100 MB passes and one byte more does not', () => {
 	expect(refused('POST', url, { 'content-length': `${100 * MB + 1}` })).toBe(true);
 	expect(refused('POST', '/api/notes/1/evidence/../..', { 'content-length': `${MB}` })).toBe(true);
 });
+
+test('a program sends JSON and nothing else', () => {
+	const url = '/api/v1/evaluate';
+	const length = { 'content-length': '2' };
+	for (const kind of [
+		'application/json',
+		'application/JSON; charset=utf-8',
+		'application/x.y+json'
+	])
+		expect(refused('POST', url, { ...length, 'content-type': kind }), kind).toBe(false);
+	for (const kind of ['application/x-www-form-urlencoded', 'text/plain', 'multipart/form-data'])
+		expect(refused('POST', url, { ...length, 'content-type': kind }), kind).toBe(true);
+	expect(refused('POST', url, length)).toBe(false);
+});

@@ -39,11 +39,11 @@ export const handle: Handle = async ({ event, resolve }) => {
 	event.locals.person = found?.person ?? null;
 	event.locals.sessionId = found?.sessionId ?? null;
 
-	const isApi = event.url.pathname.startsWith('/api/');
+	const asksApi = isApi(event);
 	// Programs ask with a token, which each route reads; a cookie counts for nothing there.
 	if (event.url.pathname.startsWith('/api/v1/')) {
 		event.locals.person = event.locals.sessionId = null;
-	} else if (isApi) {
+	} else if (asksApi) {
 		const problem = forgedElsewhere(event) ?? (found ? null : notSignedIn);
 		if (problem) return problemResponse(problem);
 	} else if (!found && event.route.id?.startsWith('/(app)')) {
@@ -51,15 +51,22 @@ export const handle: Handle = async ({ event, resolve }) => {
 		redirect(303, to === '/' ? '/sign-in' : `/sign-in?to=${encodeURIComponent(to)}`);
 	}
 
-	const response = told(await resolve(event), event.locals.problem, isApi);
+	const response = told(await resolve(event), event.locals.problem, asksApi);
 	// Links with a secret in their path are told to no other site, and no file is run as another kind.
 	response.headers.set('referrer-policy', 'same-origin');
 	response.headers.set('x-content-type-options', 'nosniff');
 	return response;
 };
 
+const isApi = ({ url }: { url: URL }) => url.pathname.startsWith('/api/');
+
 /** SvelteKit knows no status for a Problem and answers 500. */
 function told(response: Response, problem: Problem | undefined, isApi: boolean): Response {
+	// SvelteKit answers this one itself, in plain words.
+	if (isApi && !problem && response.status === 405) {
+		const allow = response.headers.get('allow') ?? '';
+		return problemResponse(new Problem(405, `This address is asked by ${allow}.`, {}, { allow }));
+	}
 	if (!problem) return response;
 	if (isApi) return problemResponse(problem);
 	const { body, status, headers } = response;
@@ -84,10 +91,18 @@ export const handleError: HandleServerError = ({ error, event, status, message }
 		event.locals.problem = error;
 		return { message: error.message, status: error.status };
 	}
-	if (status === 404) return { message: 'There is no page at this address.', status };
-	if (status < 500) return { message, status };
+	if (status < 500) {
+		const isMissing = status === 404;
+		if (isApi(event))
+			event.locals.problem = isMissing
+				? new Problem(404, 'There is nothing at this address.')
+				: new Problem(400, 'The request cannot be read.');
+		return { message: isMissing ? 'There is no page at this address.' : message, status };
+	}
 	const reference = randomBytes(4).toString('hex');
 	// The route and not the path, which may hold the secret of a link.
 	log.error({ error, reference, route: event.route.id }, 'A request failed');
-	return { message: 'Something went wrong here.', status, reference };
+	const words = 'Something went wrong here.';
+	if (isApi(event)) event.locals.problem = new Problem(500, words, { reference });
+	return { message: words, status, reference };
 };

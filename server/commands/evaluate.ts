@@ -2,6 +2,7 @@
 import * as z from 'zod/mini';
 import { ENGINE_VERSION } from '../../src/lib/engine/version';
 import { noteTask, run } from '../../src/lib/engine-task';
+import { inSentences, misfitsOf } from '../../src/lib/json/refusals';
 import { noteContentSchema } from '../../src/lib/note/items';
 import { CommandRefused, answerOnStdout, readJson } from './read-json';
 
@@ -11,12 +12,8 @@ z.config(z.locales.en());
 answerOnStdout(() => {
 	const read = noteContentSchema.safeParse(readJson(process.argv[2]));
 	if (!read.success) {
-		const errors = read.error.issues.map(({ path, message }) => ({
-			field: path.join('.'),
-			message
-		}));
-		const places = errors.map(({ field, message }) => `${field || 'the whole'}: ${message}`);
-		throw new CommandRefused(`This is no note in interchange. ${places.join('; ')}.`, { errors });
+		const errors = misfitsOf(read.error);
+		throw new CommandRefused(`This is no note in interchange. ${inSentences(errors)}`, { errors });
 	}
 	return { engine: ENGINE_VERSION, results: run(noteTask(read.data)) };
 });

@@ -1,5 +1,6 @@
 /** Reads the JSON that a command is given, and tells in one way why a command has no answer. */
 import { readFileSync } from 'node:fs';
+import { DEEPEST, isTooDeep } from '../../src/lib/json/refusals';
 
 /** Ends a command with 2: words for the person, the problem for a program. */
 export class CommandRefused extends Error {
@@ -20,11 +21,16 @@ export function readJson(file: string | undefined): unknown {
 	} catch (error) {
 		throw new CommandRefused(`${file} cannot be read: ${(error as Error).message}.`);
 	}
+	const what = file === '-' ? 'What was piped in' : file;
+	let json: unknown;
 	try {
-		return JSON.parse(text.replace(/^\uFEFF/, ''));
+		json = JSON.parse(text.replace(/^\uFEFF/, ''));
 	} catch {
-		throw new CommandRefused(`${file === '-' ? 'What was piped in' : file} is not JSON.`);
+		throw new CommandRefused(`${what} is not JSON.`);
 	}
+	if (isTooDeep(json))
+		throw new CommandRefused(`${what} is nested more than ${DEEPEST} levels deep.`);
+	return json;
 }
 
 /** Prints the answer as JSON and ends with 0; a refusal in words on the error output, ending with 2. */

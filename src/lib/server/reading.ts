@@ -1,5 +1,6 @@
 /** What a request says, in the shape that a route takes; what is wrong with it is said field by field. */
 import { core } from 'zod';
+import { DEEPEST, inSentences, isTooDeep, misfitsOf } from '$lib/json/refusals';
 import { Problem } from './problems';
 
 export async function readJson<T extends core.$ZodType>(
@@ -12,6 +13,8 @@ export async function readJson<T extends core.$ZodType>(
 	} catch {
 		throw new Problem(400, 'The body of the request is not JSON.');
 	}
+	if (isTooDeep(body))
+		throw new Problem(422, `The body is nested more than ${DEEPEST} levels deep.`);
 	return parsed(body, schema);
 }
 
@@ -22,9 +25,6 @@ export function readQuery<T extends core.$ZodType>(url: URL, schema: T): core.ou
 function parsed<T extends core.$ZodType>(value: unknown, schema: T): core.output<T> {
 	const found = core.safeParse(schema, value);
 	if (found.success) return found.data;
-	const errors = found.error.issues.map(({ path, message }) => ({
-		field: path.join('.'),
-		message
-	}));
-	throw new Problem(422, errors.map(({ message }) => message).join(' '), { errors });
+	const errors = misfitsOf(found.error);
+	throw new Problem(422, inSentences(errors), { errors });
 }
