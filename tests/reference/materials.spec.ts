@@ -129,9 +129,9 @@ describe('a basis value', () => {
 	});
 
 	it.each([
-		[{ values: [1, 1, 1] }, 'no spread'],
-		[{ values: [1, 2] }, '3 to'],
-		[{ values: [1, 2, 3], batches: ['a'] }, 'name the batch of each']
+		[{ values: [1, 1, 1, 1] }, 'no spread'],
+		[{ values: [1, 2] }, '4 to'],
+		[{ values: [1, 2, 3, 4], batches: ['a'] }, 'name the batch of each']
 	])('is refused in words: %j', (input, words) => {
 		const found = answer(allowable, input);
 		expect(found).toMatchObject({ ok: false });

@@ -8,7 +8,7 @@ import type { Distribution } from '$lib/engine/studies/distribution';
 import type { Model } from '$lib/engine/studies/model';
 import { momentsOf } from '$lib/engine/studies/moments';
 import { startMonteCarlo } from '$lib/engine/studies/monte-carlo';
-import { propagate } from '$lib/engine/studies/propagation';
+import { outputCorrelation, propagate } from '$lib/engine/studies/propagation';
 import { secondOrderTerms } from '$lib/engine/studies/second-order';
 import { slopesOf } from '$lib/engine/studies/slopes';
 
@@ -45,6 +45,68 @@ describe('JCGM 100 (GUM), H.1: the length of an end gauge', () => {
 	it('has 34 nm with the terms of second order', () => {
 		const { variance } = secondOrderTerms(gauge, givens, slopes, 1);
 		expect(Math.round(Math.sqrt(first.u ** 2 + variance[0]!))).toBe(34);
+	});
+});
+
+describe('JCGM 100 (GUM), H.2: resistance and reactance measured together', () => {
+	// The five sets of table H.2: V, mA, rad.
+	const sets = {
+		V: [5.007, 4.994, 5.005, 4.99, 4.999],
+		I: [19.663e-3, 19.639e-3, 19.64e-3, 19.685e-3, 19.678e-3],
+		φ: [1.0456, 1.0438, 1.0468, 1.0428, 1.0433]
+	};
+	const figures = Object.values(sets);
+	const means = figures.map((set) => set.reduce((sum, x) => sum + x, 0) / 5);
+	/** Covariance of two means, JCGM 100 5.2.3. */
+	const covariance = (i: number, j: number) =>
+		figures[i]!.reduce((sum, x, n) => sum + (x - means[i]!) * (figures[j]![n]! - means[j]!), 0) /
+		20;
+	const u = Float64Array.from(figures, (_, i) => Math.sqrt(covariance(i, i)));
+	const givens = Object.keys(sets).map((name, i) => ({ name, value: means[i]!, u: u[i]! }));
+	const pairs = [
+		[0, 1],
+		[0, 2],
+		[1, 2]
+	] as const;
+	const r = correlationMatrix(
+		Object.keys(sets),
+		pairs.map(([first, second]) => ({
+			first,
+			second,
+			r: covariance(first, second) / (u[first]! * u[second]!)
+		}))
+	);
+	const impedance: Model = ([v, i, phi], y) => {
+		y[0] = (v! / i!) * Math.cos(phi!);
+		y[1] = (v! / i!) * Math.sin(phi!);
+		y[2] = v! / i!;
+	};
+	const slopes = slopesOf(impedance, givens, 3);
+	const found = [0, 1, 2].map((k) =>
+		propagate(
+			slopes.map((row) => row[k]!),
+			u,
+			r
+		)
+	);
+
+	it('has the values and standard uncertainties of table H.3', () => {
+		const y = new Float64Array(3);
+		impedance(
+			Float64Array.from(givens, ({ value }) => value),
+			y
+		);
+		[127.732, 219.847, 254.26].forEach((value, k) => expect(y[k]).toBeCloseTo(value, 2));
+		[0.071, 0.295, 0.236].forEach((value, k) =>
+			expect(Math.abs(found[k]!.u - value)).toBeLessThanOrEqual(0.001)
+		);
+	});
+
+	it('has its correlations', () => {
+		const between = (i: number, k: number) => outputCorrelation(found[i]!, found[k]!, r);
+		expect(Math.abs(between(0, 1) + 0.588)).toBeLessThanOrEqual(0.001);
+		expect(Math.abs(between(0, 2) + 0.485)).toBeLessThanOrEqual(0.001);
+		expect(Math.abs(between(1, 2) - 0.993)).toBeLessThanOrEqual(0.001);
 	});
 });
 

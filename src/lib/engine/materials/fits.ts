@@ -17,6 +17,9 @@ export type Fit = {
 	parameters: [number, number];
 };
 
+/** The small-sample form 1 + 4/n − 25/n² is below zero for three. */
+export const FEWEST_FITTED = 4;
+
 /** F(x) and 1 − F(x), each with its digits. */
 type Both = (x: number) => [below: number, above: number];
 

@@ -8,7 +8,7 @@ import {
 	weibullBasis
 } from '../materials/basis';
 import { basisInputs, CAUTION, couponValues, requireSpread } from '../materials/coupons';
-import { fitLognormal, fitNormal, testWeibull } from '../materials/fits';
+import { FEWEST_FITTED, fitLognormal, fitNormal, testWeibull } from '../materials/fits';
 import { outliers, summarise } from '../materials/sample';
 import { PRESSURE, PURE } from '../quantities/dimension';
 import { defineMethod } from './method';
@@ -36,7 +36,7 @@ export const allowable = defineMethod({
 		'Basis values of coupon results for normal, lognormal and Weibull populations and whatever the distribution, the batches and outliers looked at, and which of them the tests of fit speak for.',
 	subject: 'materials',
 	inputs: {
-		values: { ...couponValues, fewest: 3 },
+		values: { ...couponValues, fewest: FEWEST_FITTED },
 		batches: list({
 			label: 'batch of each result, in the same order',
 			fewest: 0,
@@ -89,7 +89,7 @@ export const allowable = defineMethod({
 	],
 	validity: 'Independent specimens of one population, or of batches that may be pooled.',
 	leftOut: ['variance between batches as a part of its own', 'censored results', 'environment'],
-	refuses: ['fewer than three results', 'results without spread', 'batches not as many as results'],
+	refuses: ['fewer than four results', 'results without spread', 'batches not as many as results'],
 	caution: CAUTION,
 	run({ values, batches, poolingReason, share, confidence }) {
 		requireSpread(values);

@@ -1,6 +1,6 @@
 /** Coupon results: their statistics, outliers, and how well the usual distributions fit. */
 import { CAUTION, couponValues, requireSpread } from '../materials/coupons';
-import { fitLognormal, fitNormal, testWeibull, type Fit } from '../materials/fits';
+import { FEWEST_FITTED, fitLognormal, fitNormal, testWeibull, type Fit } from '../materials/fits';
 import { outliers, summarise } from '../materials/sample';
 import { normalQuantile } from '../numerics/normal';
 import { PRESSURE, PURE } from '../quantities/dimension';
@@ -42,8 +42,8 @@ export const couponStatistics = defineMethod({
 			})
 		}),
 		fits: list({
-			label: 'fits',
-			fewest: 1,
+			label: 'fits, for four results or more',
+			fewest: 0,
 			most: 3,
 			of: group({
 				label: 'distribution',
@@ -88,12 +88,15 @@ export const couponStatistics = defineMethod({
 			refuseInput('values', 'The results differ in rounding only.');
 		const far = outliers(values);
 		const positive = values.every((x) => x > 0);
-		const fits = [
-			told('normal', fitNormal(values)),
-			...(positive
-				? [told('lognormal', fitLognormal(values)), told('Weibull', testWeibull(values))]
-				: [])
-		];
+		const fits =
+			n < FEWEST_FITTED
+				? []
+				: [
+						told('normal', fitNormal(values)),
+						...(positive
+							? [told('lognormal', fitLognormal(values)), told('Weibull', testWeibull(values))]
+							: [])
+					];
 		return {
 			outputs: {
 				specimens: n,
@@ -124,7 +127,11 @@ export const couponStatistics = defineMethod({
 				...(positive
 					? []
 					: ['Results of 0 and below: lognormal and Weibull distributions have no such values.']),
-				...(n < 8 ? ['Fewer than 8 specimens: the tests of fit tell little.'] : [])
+				...(n < FEWEST_FITTED
+					? ['Three specimens: no distribution can be tested on them.']
+					: n < 8
+						? ['Fewer than 8 specimens: the tests of fit tell little.']
+						: [])
 			]
 		};
 	}
