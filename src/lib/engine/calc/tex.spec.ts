@@ -16,6 +16,7 @@ describe('a symbol in TeX', () => {
 		['rho', '\\mathit{rho}'],
 		['Λ', '\\Lambda'],
 		['Δr', '{\\Delta r}'],
+		['ℬ_ℂ', '\\text{B}_\\mathrm{\\text{C}}'],
 		['x', 'x']
 	])('%s is %s', (symbol, tex) => {
 		expect(symbolTex(symbol)).toBe(tex);

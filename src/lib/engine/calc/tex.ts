@@ -35,10 +35,14 @@ export function symbolTex(symbol: string): string {
 
 function baseTex(base: string): string {
 	const letters = [...base];
-	if (letters.length === 1) return GREEK[base] ?? (isLatin(base) ? base : `\\text{${base}}`);
+	if (letters.length === 1) return GREEK[base] ?? (isLatin(base) ? base : textTex(base));
 	if (letters.every((letter) => isLatin(letter))) return `\\mathit{${base}}`;
-	return `{${letters.map((letter) => GREEK[letter] ?? (isLatin(letter) ? letter : `\\text{${letter}}`)).join(' ')}}`;
+	return `{${letters.map((letter) => GREEK[letter] ?? (isLatin(letter) ? letter : textTex(letter))).join(' ')}}`;
 }
+
+/** Script and double-struck letters are commands to KaTeX, which it does not know inside \\text: there they are plain. */
+const textTex = (letter: string) =>
+	`\\text{${letter.replace(/[\u2100-\u214f\u{1d6a4}]/gu, (sign) => sign.normalize('NFKC'))}}`;
 
 const isLatin = (letter: string) => /^[A-Za-z0-9]$/.test(letter);
 
@@ -48,7 +52,7 @@ const upright = (text: string) =>
 		.map((letter) => {
 			if (GREEK[letter]) return `${GREEK[letter]} `;
 			if (letter === '_') return '\\,';
-			return /[\dA-Za-z,]/.test(letter) ? letter : `\\text{${letter}}`;
+			return /[\dA-Za-z,]/.test(letter) ? letter : textTex(letter);
 		})
 		.join('');
 
