@@ -128,6 +128,7 @@ export const periods = defineMethod({
 	sources: [
 		'small motions about a straight line in the co-rotating frame, by Gauss–Lobatto elements of high order',
 		'inertia of L D Lᵀ (Sylvester) to count modes, Rayleigh-quotient iteration to settle them',
+		'a line that only Coriolis terms would hold counts as unstable: theorem of Thomson, Tait and Chetaev on gyroscopic stability under damping',
 		'tidal constituents: the usual periods, common practice'
 	],
 	validity:
@@ -170,7 +171,7 @@ export const periods = defineMethod({
 		return {
 			outputs: { ...alone, coupled, separations: pairs },
 			warnings: [
-				...unstable.map((name) => `Unstable ${name}: a small displacement grows without bound.`),
+				...unstable.map((name) => `Unstable ${name}: ${GROWS[name]}`),
 				...pairs
 					.filter(({ clear }) => !clear)
 					.map(({ mode, forcing }) => `${mode} lies within the separation limit of ${forcing}.`),
@@ -181,6 +182,18 @@ export const periods = defineMethod({
 });
 
 const NAMES = { inPlane: 'in plane', outOfPlane: 'out of plane', along: 'along' } as const;
+
+/**
+ * Coriolis terms may hold a line that is unstable at rest, but only one without any damping: with it such a
+ * line is unstable again (Thomson, Tait and Chetaev). So it is told as unstable, and no coupled periods of it.
+ */
+const ONLY_UNDAMPED =
+	'a small displacement grows. Coriolis terms could hold it only without any damping, which no line is.';
+const GROWS: Record<(typeof NAMES)[keyof typeof NAMES], string> = {
+	'in plane': ONLY_UNDAMPED,
+	along: ONLY_UNDAMPED,
+	'out of plane': 'a small displacement grows without bound.'
+};
 
 const numbered = (name: string, found: readonly Mode[]): Named[] =>
 	found.flatMap(({ period }, i) =>

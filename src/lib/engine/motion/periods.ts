@@ -47,7 +47,10 @@ export function uncoupledModes(
 	});
 }
 
-/** In plane with along, where both are stable alone: on that the count of the coupled modes stands. */
+/**
+ * In plane with along, where both are stable alone: on that the count of the coupled modes stands. A line that only
+ * the Coriolis terms would hold is none: with any damping it is unstable (Thomson, Tait and Chetaev).
+ */
 export function coupledModes(
 	line: Line,
 	hanging: Hanging,
