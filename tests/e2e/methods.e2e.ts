@@ -23,6 +23,39 @@ test('a method is found, tried with a wrong figure, and gives its result', async
 	await expect(page.getByRole('row', { name: /breaking length/ })).toContainText('64.53');
 });
 
+test('figures are typed with units, results of earlier inputs say so, and the address opens the same computation', async ({
+	as
+}) => {
+	const page = await as('lindqvist');
+	await page.goto('/methods/uniform-line');
+	const form = page.getByRole('form');
+	await form.getByLabel('density').fill('7.9 g/cm³');
+	await form.getByLabel('stress of the material').fill('5 kg');
+	await form.getByRole('button', { name: 'Compute' }).click();
+	await expect(form).toContainText('kg is a unit of a mass');
+	await expect(form.getByLabel('stress of the material')).toBeFocused();
+	await form.getByLabel('stress of the material').fill('5000 MPa');
+	await form.getByRole('button', { name: 'Compute' }).click();
+	const greatest = page.getByRole('row', { name: /greatest stress/ });
+	await expect(greatest).toContainText('382.5');
+	await expect(page.getByRole('slider', { name: /over radius, km/ })).toBeVisible();
+
+	const download = page.waitForEvent('download');
+	await page.getByRole('button', { name: 'Results as CSV' }).click();
+	expect((await download).suggestedFilename()).toBe('uniform-line.csv');
+
+	const colleague = await as('haddad');
+	await colleague.goto(page.url());
+	await expect(colleague.getByRole('form').getByLabel('density')).toHaveValue('7.9 g/cm³');
+	await expect(colleague.getByRole('row', { name: /greatest stress/ })).toContainText('382.5');
+
+	await form.getByLabel('density').fill('1300');
+	await expect(page.getByText('belong to the inputs as they were')).toBeVisible();
+	await form.getByRole('button', { name: 'Compute' }).click();
+	await expect(greatest).not.toContainText('382.5');
+	await expect(page.getByText('belong to the inputs as they were')).toHaveCount(0);
+});
+
 test('a token is made, asks the API, and opens nothing once it is revoked', async ({
 	as,
 	site

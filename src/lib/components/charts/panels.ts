@@ -2,7 +2,7 @@
 import type { LineProfile } from '$lib/engine/calc/results';
 
 export type Panel = {
-	key: 'area' | 'stress' | 'tension';
+	key: string;
 	title: string;
 	symbol: string;
 	unit: string;
@@ -21,7 +21,7 @@ export function panelsOf(profile: LineProfile): Panel[] {
 }
 
 const panel = (
-	key: Panel['key'],
+	key: string,
 	title: string,
 	symbol: string,
 	{ unit, values }: { unit: string; values: number[] },

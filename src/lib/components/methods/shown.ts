@@ -5,9 +5,11 @@ import type {
 	Parameter,
 	Parameters
 } from '$lib/engine/methods/parameter';
+import type { CsvCell } from '$lib/csv';
 import { formatFigure, unitText } from '$lib/engine/quantities/format';
 import { significant } from '$lib/engine/quantities/number';
 import { fromSi, parseUnit } from '$lib/engine/quantities/units';
+import { seriesOf, type Series } from './series';
 
 const DIGITS = 6;
 
@@ -55,7 +57,7 @@ export const unitOf = (parameter: Parameter, value?: unknown): string => {
 	return beyond ? 'in SI units' : unitText(parameter.unit);
 };
 
-export type Line = { label: string; symbol: string; value: string; unit: string };
+export type Line = { label: string; symbol: string; value: string; unit: string; full: CsvCell };
 
 /** Single figures, those of groups included. */
 export function linesOf(fields: Parameters, values: Record<string, unknown>, before = ''): Line[] {
@@ -75,13 +77,23 @@ export function linesOf(fields: Parameters, values: Record<string, unknown>, bef
 				label,
 				symbol: parameter.symbol ?? '',
 				value: cellOf(parameter, value),
+				full: csvCell(parameter, value),
 				unit: value === undefined || value === null ? '' : unitOf(parameter, value)
 			}
 		];
 	});
 }
 
-export type Table = { label: string; heads: string[]; rows: string[][]; left: number };
+export type Table = {
+	label: string;
+	heads: string[];
+	/** The first rows, as text. */
+	rows: string[][];
+	left: number;
+	/** All rows under their heads, in full precision. */
+	csv: () => CsvCell[][];
+	series: Series | null;
+};
 
 const MOST_ROWS = 200;
 
@@ -92,25 +104,74 @@ export function tablesOf(fields: Parameters, values: Record<string, unknown>): T
 		if (parameter.kind === 'group' && rows)
 			return tablesOf(parameter.fields, rows as Record<string, unknown>);
 		if (parameter.kind !== 'list' || !Array.isArray(rows)) return [];
-		const columns: [string, Parameter][] =
-			parameter.of.kind === 'group'
-				? Object.entries(parameter.of.fields).filter(([, column]) => isPlain(column))
-				: [['', parameter.of]];
+		const columns = columnsOf(parameter.of, rows);
+		const heads = columns.map(({ label, parameter: column }) =>
+			[label, unitOf(column)].filter((words) => words !== '').join(', ')
+		);
 		return [
 			{
 				label: parameter.label,
-				heads: columns.map(([, column]) =>
-					[column.label, unitOf(column)].filter((words) => words !== '').join(', ')
-				),
+				heads,
 				rows: rows
 					.slice(0, MOST_ROWS)
-					.map((row) =>
-						columns.map(([key, column]) => cellOf(column, key === '' ? row : row[key]))
-					),
-				left: Math.max(0, rows.length - MOST_ROWS)
+					.map((row) => columns.map(({ parameter: one, of }) => cellOf(one, of(row)))),
+				left: Math.max(0, rows.length - MOST_ROWS),
+				csv: () => [
+					heads,
+					...rows.map((row) => columns.map(({ parameter: one, of }) => csvCell(one, of(row))))
+				],
+				series: seriesOf(parameter, rows)
 			}
 		];
 	});
 }
 
-const isPlain = ({ kind }: Parameter) => !['list', 'group', 'variant'].includes(kind);
+type Column = { label: string; parameter: Parameter; of: (row: unknown) => unknown };
+
+const partOf = (row: unknown, key: string | number) =>
+	(row as Record<string | number, unknown> | null | undefined)?.[key];
+
+/** The parts of a row side by side: those of groups, and the values of short lists, one column each. */
+function columnsOf(parameter: Parameter, rows: readonly unknown[]): Column[] {
+	const below = (key: string | number, part: Parameter): Column[] =>
+		columnsOf(
+			part,
+			rows.map((row) => partOf(row, key))
+		).map((column) => ({
+			...column,
+			label: part.kind === 'group' ? `${part.label}: ${column.label}` : column.label,
+			of: (row) => column.of(partOf(row, key))
+		}));
+	if (parameter.kind === 'group')
+		return Object.entries(parameter.fields).flatMap(([key, part]) => below(key, part));
+	if (parameter.kind === 'list') {
+		const longest = rows.reduce<number>(
+			(most, row) => Math.max(most, Array.isArray(row) ? row.length : 0),
+			0
+		);
+		if (longest > MOST_VALUES) return [];
+		return Array.from({ length: longest }, (_, i) =>
+			below(i, parameter.of).map((column) => ({ ...column, label: `${column.label} ${i + 1}` }))
+		).flat();
+	}
+	return parameter.kind === 'variant'
+		? []
+		: [{ label: parameter.label, parameter, of: (row) => row }];
+}
+
+/** Longer lists in a row would be a table of their own. */
+const MOST_VALUES = 20;
+
+/** A figure in the unit of its column, in full precision. */
+function csvCell(parameter: Parameter, value: unknown): CsvCell {
+	if (value === undefined || value === null) return null;
+	if (typeof value !== 'number') return cellOf(parameter, value);
+	const unit = parseUnit('unit' in parameter ? parameter.unit : '');
+	return Number((unit.ok ? fromSi(value, unit.unit) : value).toPrecision(12));
+}
+
+/** Single figures in full precision. */
+export const linesCsv = (lines: readonly Line[]): CsvCell[][] => [
+	['result', 'symbol', 'value', 'unit'],
+	...lines.map(({ label, symbol, full, unit }) => [label, symbol, full, unit])
+];

@@ -1,6 +1,6 @@
 /**
  * A method's inputs as people type them into its form, and the way from there to SI. Quantities are typed
- * in the unit that the method names and converted once.
+ * in the unit that the method names, or with one of their own, and converted once.
  */
 import type {
 	ListParameter,
@@ -11,7 +11,8 @@ import type {
 import { fits } from '$lib/engine/methods/check';
 import type { InputFault } from '$lib/engine/methods/refused';
 import { parseNumber } from '$lib/engine/quantities/number';
-import { fromSi, parseUnit, toSi } from '$lib/engine/quantities/units';
+import { fromSi, parseUnit } from '$lib/engine/quantities/units';
+import { readQuantity, type ReadQuantity } from './quantity';
 import { rangeWords } from './shown';
 
 /** What stands in one field: a text, a mark, named parts, or rows. */
@@ -128,16 +129,21 @@ function readNumber(
 	path: string
 ): number | undefined {
 	if (typed.trim() === '') return undefined;
-	const number = parseNumber(typed);
+	const number = parameter.kind === 'number' ? readQuantity(typed, parameter) : readFigure(typed);
 	if (!number.ok) {
-		faults.push({ path, message: `${number.message} ${number.remedy}`.trim() });
+		faults.push({ path, message: number.message });
 		return undefined;
 	}
-	const unit = parameter.kind === 'number' ? parseUnit(parameter.unit) : null;
-	const si = unit?.ok ? toSi(number.value, unit.unit) : number.value;
-	if (!fits(parameter.range, si))
+	if (!fits(parameter.range, number.si))
 		faults.push({ path, message: `Must be ${rangeWords(parameter).join(' and ')}.` });
-	return si;
+	return number.si;
+}
+
+function readFigure(typed: string): ReadQuantity {
+	const number = parseNumber(typed);
+	return number.ok
+		? { ok: true, si: number.value }
+		: { ok: false, message: `${number.message} ${number.remedy}`.trim() };
 }
 
 /** Rows of figures parted by tabs or semicolons; a comma may be meant as a decimal sign. */
