@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { evaluated, faultOf, given } from './items.fixture';
+import { calculation, evaluated, faultOf, given, quantityOf } from './items.fixture';
 
 describe('an expression', () => {
 	it.each([
@@ -79,8 +79,64 @@ describe('temperatures', () => {
 		);
 	});
 
-	it('multiply as kelvins', () => {
-		expect(evaluated('2 * (20 degC)', [], 'K')).toBe('586.3 K');
+	// 20 °C = 293.15 K and a kelvin is as long as a degree Celsius: SI Brochure, 2.3.1; 68 °F = 20 °C: NIST SP 811, B.8.
+	const T1 = given('T_1', '20', 'degC');
+	const T2 = given('T_2', '86', 'degF');
+	const T3 = given('T_3', '300', 'K');
+
+	it('have differences, and differences have multiples', () => {
+		expect(evaluated('T_2 - T_1', [T1, T2])).toBe('10 K');
+		expect(evaluated('2*(T_2 - T_1)', [T1, T2])).toBe('20 K');
+		expect(evaluated('T_1 + (T_2 - T_1)/2', [T1, T2])).toBe('25 degC');
+		expect(evaluated('mean(T_1, T_2)', [T1, T2])).toBe('25 degC');
+		expect(evaluated('T_3 - T_1', [T1, T3])).toBe('6.85 K');
+	});
+
+	it('may lie below the zero of their scale', () => {
+		expect(evaluated('-20 degC')).toBe('-20 degC');
+		expect(evaluated('5 degC - -20 degC')).toBe('25 K');
+	});
+
+	it('are shown on any scale', () => {
+		expect(evaluated('T_1', [T1], 'K')).toBe('293.15 K');
+		expect(evaluated('T_1', [T1], 'degF')).toBe('68 degF');
+		expect(evaluated('T_1 + 5 K', [T1], 'degF')).toBe('77 degF');
+	});
+
+	it('stand for their kelvins in a product that is no temperature', () => {
+		expect(evaluated('T_1/T_3', [T1, T3])).toBe('0.977166666667');
+		// σ T⁴ at 20 °C: 5.670374e-8 × 293.15⁴ = 418.77 W/m², by hand.
+		const radiated = calculation('M', '5.670374e-8 W/(m^2 K^4) * T_1^4', 'W/m^2');
+		expect(quantityOf([T1, radiated], 'M').outcome).toMatchObject({
+			quantity: { value: expect.closeTo(418.77, 1) }
+		});
+		expect(evaluated('2 * 293.15 K')).toBe('586.3 K');
+	});
+
+	it.each(['2*T_1', 'T_1*2', 'T_1/2', '-T_1', '2*(20 degC)', '5 % * T_1'])(
+		'on a scale with its own zero have no multiples: %s',
+		(expression) => {
+			const { message, remedy } = faultOf(expression, [T1]);
+			expect(message).toContain('has no multiples');
+			expect(remedy).toContain('Give the temperature in K');
+		}
+	);
+
+	it.each([
+		['(T_2 - T_1) - T_1', 'it is a temperature; T_2 − T_1 before it is a difference'],
+		['hypot(T_1, T_2)', 'have no sum'],
+		['T_1 > 0 ? 1 : 2', 'may be that of any scale'],
+		['max(0, T_1)', 'may be that of any scale'],
+		['T_1 > T_2 - T_1 ? 1 : 2', 'difference of temperatures']
+	])('are not taken for differences: %s', (expression, words) => {
+		expect(faultOf(expression, [T1, T2]).message).toContain(words);
+	});
+
+	it('carry the uncertainty of their degrees in kelvins', () => {
+		const rise = calculation('rise', 'T - 10 degC');
+		const { outcome } = quantityOf([given('T', '68', 'degF', '1.8'), rise], 'rise');
+		// 1.8 °F = 1 K.
+		expect(outcome).toMatchObject({ quantity: { unit: 'K', uncertainty: expect.closeTo(1, 12) } });
 	});
 });
 

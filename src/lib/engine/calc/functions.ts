@@ -157,7 +157,7 @@ export const FUNCTIONS = {
 	},
 	hypot: {
 		takes: [2, MOST_ARGUMENTS],
-		rule: 'alike',
+		rule: 'total',
 		evaluate: Math.hypot,
 		description: 'Square root of the sum of squares'
 	}

@@ -68,7 +68,8 @@ function inferred(expr: Expr, known: Known): Type {
 			return known.typeOf(expr.name);
 		case 'negate': {
 			const { dimension, scale, list } = inferValue(expr.of, known);
-			return valueType(dimension, scale === 'difference' ? scale : 'plain', list);
+			if (scale === 'point') throw noMultiple(expr);
+			return valueType(dimension, scale, list);
 		}
 		case 'binary':
 			return binary(expr, known);
@@ -150,10 +151,32 @@ function binary(expr: Expr & { kind: 'binary' }, known: Known): ValueType {
 	const left = inferValue(expr.left, known);
 	const right = inferValue(expr.right, known);
 	const list = left.list || right.list;
+	if (expr.op === '*' || expr.op === '/') refuseScaled(expr, left, right);
 	if (expr.op === '*') return valueType(times(left.dimension, right.dimension), 'plain', list);
 	if (expr.op === '/') return valueType(over(left.dimension, right.dimension), 'plain', list);
 	return power(expr, left, right);
 }
+
+/**
+ * @throws Refusal where a temperature on a scale with its own zero is multiplied by a number. In a product
+ * that is no temperature any more, as in k T or T₁/T₂, it stands for its kelvins.
+ */
+function refuseScaled(expr: Expr & { kind: 'binary' }, left: ValueType, right: ValueType): void {
+	const isScaled =
+		(left.scale === 'point' && isPure(right.dimension)) ||
+		(right.scale === 'point' && isPure(left.dimension) && expr.op === '*');
+	if (isScaled) throw noMultiple(expr);
+}
+
+const noMultiple = (expr: Expr) =>
+	new Refusal(
+		'dimension',
+		`${asText(expr)} has no meaning: a temperature on a scale with its own zero has no multiples.`,
+		{
+			remedy: 'Give the temperature in K, or multiply a difference of two.',
+			place: placeOf(expr)
+		}
+	);
 
 function sum(expr: Expr & { kind: 'binary' }, known: Known): ValueType {
 	const left = inferValue(expr.left, known);
@@ -170,6 +193,13 @@ function sum(expr: Expr & { kind: 'binary' }, known: Known): ValueType {
 			'dimension',
 			`${asText(expr.right)} cannot be added: two temperatures on a scale with its own zero have no sum.`,
 			{ remedy: 'Write the difference in K.', place: placeOf(expr.right) }
+		);
+	}
+	if (!added && right.scale === 'point' && left.scale === 'difference') {
+		throw new Refusal(
+			'dimension',
+			`${asText(expr.right)} cannot be subtracted: it is a temperature; ${asText(expr.left)} before it is a difference of temperatures.`,
+			{ place: placeOf(expr.right) }
 		);
 	}
 	if (!added && right.scale === 'point') return valueType(fits.dimension, 'difference', list);
@@ -207,6 +237,13 @@ function alike(a: Expr, b: Expr, done: string, known: Known): ValueType {
 	const right = inferValue(b, known);
 	const fits = fit(a, left, b, right);
 	if (!fits) throw mismatch(a, left, b, right, done);
+	const zero = isZero(a) ? a : b;
+	if (isZero(zero) && (left.scale === 'point' || right.scale === 'point')) {
+		throw new Refusal('dimension', '0 beside a temperature may be that of any scale.', {
+			remedy: 'Write 0 degC or 0 K.',
+			place: placeOf(zero)
+		});
+	}
 	if ([left.scale, right.scale].sort().join() === 'difference,point') {
 		throw new Refusal(
 			'dimension',

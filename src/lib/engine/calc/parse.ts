@@ -1,5 +1,6 @@
 /** From the typed text to the closed tree. mathjs parses; only what is listed here gets through. */
 import { CONSTANTS } from '../quantities/constants';
+import { toSi } from '../quantities/units';
 import { Refusal, type Place } from './faults';
 import { functionNamed, isFunction, isKept } from './functions';
 import { parseStructure, type Node } from './grammar';
@@ -209,10 +210,16 @@ class Builder {
 	}
 }
 
+/** The sign of a temperature on a scale with its own zero belongs to the figure: -20 °C lies below 0 °C. */
+function negative(of: Expr): Expr {
+	if (of.kind !== 'literal' || of.unit.offset === 0) return { kind: 'negate', of };
+	return { ...of, number: -of.number, si: toSi(-of.number, of.unit) };
+}
+
 function operation(node: Node, sub: (child: Node) => Expr): Expr {
 	const fn = String(node.fn);
 	const [first, second] = node.args!;
-	if (fn === 'unaryMinus') return { kind: 'negate', of: sub(first!) };
+	if (fn === 'unaryMinus') return negative(sub(first!));
 	if (fn === 'unaryPlus') return sub(first!);
 	if (fn === 'not') return { kind: 'not', of: sub(first!) };
 	if (Object.hasOwn(ARITHMETIC, fn)) {

@@ -16,6 +16,9 @@ describe('a symbol in TeX', () => {
 		['rho', '\\mathit{rho}'],
 		['Λ', '\\Lambda'],
 		['Δr', '{\\Delta r}'],
+		['Δv', '{\\Delta v}'],
+		['ρ_0', '\\rho_0'],
+		['ΔT_1', '{\\Delta T}_1'],
 		['ℬ_ℂ', '\\text{B}_\\mathrm{\\text{C}}'],
 		['x', 'x']
 	])('%s is %s', (symbol, tex) => {
