@@ -9,7 +9,7 @@ import { apiTables } from '../setup/api-page';
 const PAGE = 'docs/api.md';
 /** Below it the page follows from the descriptions; `-u` writes it anew. */
 const MARK =
-	'<!-- What follows is made from the descriptions; tests/process/api-page.spec.ts -->\n';
+	'<!-- What follows is made from the descriptions: npx vitest run tests/process/api-page.spec.ts -u -->\n';
 
 test('the page has every operation, problem, method, input and output as they are', async () => {
 	const page = readFileSync(PAGE, 'utf8');
