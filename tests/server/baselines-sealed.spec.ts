@@ -260,7 +260,7 @@ test('a baseline of the first engine, which told no uncertainty of what follows,
 	// 20/1520², at twelve significant digits.
 	expect(row.results).toContain('"uncertainty":0.00000865650969529');
 	const older = {
-		head: row.head.replace('"engineVersion":"2"', '"engineVersion":"1"'),
+		head: row.head.replace(/"engineVersion":"\d+"/, '"engineVersion":"1"'),
 		content: row.content,
 		results: row.results.replace('0.00000865650969529', 'null'),
 		evidence: '[]',
