@@ -27,8 +27,10 @@ export function seriesOf({ of }: ListParameter, rows: readonly unknown[]): Serie
 		...[string, Parameter][]
 	];
 	if (!isLength(axis)) return null;
-	const step = Math.ceil(rows.length / MOST_POINTS);
-	const kept = rows.filter((_, i) => i % step === 0 || i === rows.length - 1) as Row[];
+	const hasEnds = 'to' in of.fields;
+	const points = hasEnds ? bothEnds(rows as Row[], key) : (rows as Row[]);
+	const step = Math.ceil(points.length / MOST_POINTS);
+	const kept = points.filter((_, i) => i % step === 0 || i === points.length - 1);
 	const at = inUnit(axis, kept, key);
 	if (!at || at.some((value, i) => i > 0 && value < at[i - 1]!)) return null;
 	const panels = others.flatMap(([name, parameter]): Panel[] => {
@@ -41,8 +43,13 @@ export function seriesOf({ of }: ListParameter, rows: readonly unknown[]): Serie
 			? [{ key: name, title, symbol, unit: unitText(parameter.unit), values, symmetric }]
 			: [];
 	});
-	return panels.length > 0 ? { axis: `${axis.label}, ${unitText(axis.unit)}`, at, panels } : null;
+	const along = hasEnds ? 'radius' : axis.label;
+	return panels.length > 0 ? { axis: `${along}, ${unitText(axis.unit)}`, at, panels } : null;
 }
+
+/** What holds from one radius to another stands at both, so that it is drawn as a step. */
+const bothEnds = (rows: readonly Row[], from: string): Row[] =>
+	rows.flatMap((row) => [row, { ...row, [from]: row.to }]);
 
 type Figure = Extract<Parameter, { kind: 'number' | 'told' }>;
 

@@ -28,6 +28,18 @@ describe('a list that comes out', () => {
 		expect(series.panels[0]!.values.at(-1)).toBeCloseTo(4.999, 12);
 	});
 
+	it('of sections has a step where one ends and the next begins', () => {
+		const sections = [0, 1, 2].map((n) => ({
+			from: n * 1000,
+			to: (n + 1) * 1000,
+			stress: (n + 1) * 1e9
+		}));
+		const fields = { from: radius, to: radius, stress };
+		const { series } = tablesOf({ rows: rows(fields) }, { rows: sections })[0]!;
+		expect(series!.at).toEqual([0, 1, 1, 2, 2, 3]);
+		expect(series!.panels.map(({ values }) => values)).toEqual([[1, 1, 2, 2, 3, 3]]);
+	});
+
 	it('is no series where it does not rise', () => {
 		const up = [3, 2, 1].map((r) => ({ radius: r, stress: 1 }));
 		const [table] = tablesOf({ rows: rows({ radius, stress }) }, { rows: up });
