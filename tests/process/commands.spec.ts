@@ -42,6 +42,21 @@ test.each([
 	expect(said).toContain(wanted);
 });
 
+test.each([
+	['method', '['.repeat(100_000) + ']'.repeat(100_000), 'nested more than 200 levels deep'],
+	['method', '{"density": NaN}', 'is not JSON'],
+	['method', '{"density": "NaN", "colour": 1}', 'density must be a number'],
+	['evaluate', '{"format":"holdfast-note","version":2}', 'known here is 1'],
+	['evaluate', '[]', 'The whole: ']
+])('%s on hostile input is told in words, with a problem for a program', (name, input, wanted) => {
+	const words = name === 'method' ? [name, '--', 'uniform-line', '-'] : [name, '--', '-'];
+	const { code, out, said } = command(words, input);
+	expect(code).toBe(2);
+	expect(said).toContain(wanted);
+	expect(said).not.toMatch(/\n\s+at /);
+	expect(JSON.parse(out)).toMatchObject({ type: 'about:blank', status: 422 });
+});
+
 test('a note in interchange is evaluated without a database', () => {
 	const note = {
 		format: 'holdfast-note',
