@@ -12,6 +12,7 @@ import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import * as Y from 'yjs';
 import {
 	addItem,
+	completeFields,
 	dropFile,
 	itemsMap,
 	moveItem,
@@ -140,6 +141,23 @@ function damaged(): string[] {
 	return state(doc);
 }
 
+/** A line model written before lines stood on other places: its new fields come with the first who opens it. */
+function otherPlaces(): string[] {
+	const { items, ...note } = contentOf('other-places');
+	const doc = documentFrom({ ...note, items: [items[0]] });
+	const [second] = items.slice(1);
+	addItem(doc, { id: second.id, kind: 'lineModel', symbol: second.symbol }, { after: 'own' });
+	const item = itemsMap(doc).get(second.id)!;
+	for (const field of ['j2', 'gm', 'radius', 'period', 'oblateness', 'primaryGm', 'distance'])
+		item.delete(field);
+	completeFields(doc, second.id);
+	setChoice(doc, second.id, 'body', second.body);
+	setChoice(doc, second.id, 'j2', second.j2);
+	textField(doc, second.id, 'distance')!.insert(0, ' km');
+	textField(doc, second.id, 'distance')!.insert(0, '384 400');
+	return state(doc);
+}
+
 function contentOf(name: string) {
 	return JSON.parse(readFileSync(new URL(`${name}.json`, folder), 'utf8')).content;
 }
@@ -149,7 +167,8 @@ for (const [name, write] of Object.entries({
 	'every-kind': everyKind,
 	'many-hands': manyHands,
 	'editor-prose': editorProse,
-	damaged
+	damaged,
+	'other-places': otherPlaces
 })) {
 	const file = new URL(`${name}.json`, folder);
 	if (!existsSync(file)) throw new Error(`${name}.json is to say by hand what it must read as.`);

@@ -136,6 +136,44 @@ test('a list goes value by value through a formula, and whoever reads the note o
 	await expect(value(laine, 'cl3-energy')).toHaveText('219.0');
 });
 
+test('a line stands on a body of one’s own, whose figures are checked where they are typed', async ({
+	as
+}) => {
+	const quispe = await as('quispe');
+	const haddad = await as('haddad');
+	for (const page of [quispe, haddad]) await openNote(page, 'CL-DN-004');
+	const model = row(quispe, 'cl4-line');
+	const density = await field(quispe, 'cl4-line', 'Density');
+	const written = await density.inputValue();
+	await density.fill('1300 kg/m^3');
+	await model.getByLabel('Allowable stress of the material').fill('40 GPa');
+	await model.getByLabel('Factor of safety').fill('2');
+	await model.getByLabel('Lift', { exact: true }).fill('5 t');
+	await model.getByLabel('Height of the top').fill('60 000 km');
+	await model.getByLabel('Body').selectOption('own');
+	await model.getByLabel('Gravitational parameter').fill('4.2828375e13 m^3/s^2');
+	await model.getByLabel('Equatorial radius').fill('3396.19 s');
+	await model.getByLabel('Period of rotation').fill('88642.66 s');
+	await expect(model).toContainText(
+		'The equatorial radius must be a length, L; this is a time, T.'
+	);
+	await model.getByLabel('Equatorial radius').fill('3396.19 km');
+	// Areostationary orbit: 20 428 km from the centre, common practice.
+	const seen = row(haddad, 'cl4-line');
+	await expect(seen).toContainText(/20.428/);
+	await expect(seen).toContainText('a body of one’s own');
+
+	await model.getByLabel('Body').selectOption('moonFar');
+	await model.getByLabel('Gravitational parameter of the moon').fill('');
+	await model.getByLabel('Radius of the moon').fill('');
+	await model.getByLabel('Height of the top').fill('100 000 km');
+	// L2 of the Moon at 384 400 km: 64 515 km from its centre.
+	await expect(seen).toContainText(/64.515/);
+	await model.getByLabel('Radius of the moon').press('Escape');
+	await expect(seen).toContainText('Earth');
+	expect(await (await field(quispe, 'cl4-line', 'Density')).inputValue()).toBe(written);
+});
+
 test('a symbol is completed with Tab, and Esc leaves a row as it was', async ({ as }) => {
 	const abara = await as('abara');
 	await openNote(abara, 'CL-DN-003');

@@ -5,6 +5,7 @@
 import { describe, expect, it } from 'vitest';
 import type { GivenItem, SheetItem } from '$lib/engine/calc/items';
 import type { ItemResult, Quantity } from '$lib/engine/calc/results';
+import { lineModel } from '$lib/engine/calc/items.fixture';
 import { createSheet } from '$lib/engine/calc/sheet';
 import { lines, notes } from './data/uncertainty.json';
 
@@ -134,20 +135,10 @@ describe('line models against mpmath at 30 digits', () => {
 			const units = ['kg/m^3', 'Pa', 'm', 'kg', ''];
 			const found = quantitiesOf([
 				...names.map((name, i) => given(name, inputs[i]!, units[i], uncertainties[i]!)),
-				{
-					id: 'line',
-					kind: 'lineModel',
-					symbol: 'line',
-					body: 'earth',
-					density: 'ρ',
-					allowable: 'σ',
-					factorOfSafety: '2',
-					baseMode: 'lift',
-					lift: 'm_lift',
-					reserve: 'R',
-					area: '',
-					top: 'h'
-				}
+				lineModel({
+					...{ density: 'ρ', allowable: 'σ', factorOfSafety: '2' },
+					...{ lift: 'm_lift', reserve: 'R', top: 'h' }
+				})
 			]);
 			for (const [name, uncertainty] of Object.entries(expected)) {
 				const { uncertainty: inUnit, si, value } = found.get(name)!;

@@ -129,6 +129,21 @@ export function dropFile(doc: Y.Doc, id: string, fileId: string, origin: unknown
 	if (files instanceof Y.Map) doc.transact(() => files.delete(fileId), origin);
 }
 
+/** Gives an item written by an earlier version the fields that it lacks, blank, so that they can be typed in. */
+export function completeFields(doc: Y.Doc, id: string): void {
+	const item = heldItem(doc, id);
+	const kind = kindOf(item);
+	if (!item || !kind) return;
+	const blank = BLANK[kind] as Record<string, unknown>;
+	const missing = (Object.entries(FIELDS[kind]) as [string, FieldForm][]).filter(
+		([field]) => !item.has(field)
+	);
+	if (missing.length === 0) return;
+	doc.transact(() => {
+		for (const [field, form] of missing) item.set(field, held(form, blank[field]));
+	});
+}
+
 export function textField(doc: Y.Doc, id: string, field: string): Y.Text | null {
 	const text = heldItem(doc, id)?.get(field);
 	return text instanceof Y.Text ? text : null;

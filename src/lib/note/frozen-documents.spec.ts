@@ -22,7 +22,9 @@ it('There are frozen documents', () => {
 });
 
 describe.each(names)('The frozen document %s', (name) => {
-	const { updates, content } = read(name);
+	const { updates, content: written } = read(name);
+	// Fields that came since are blank.
+	const content = parseContent(written);
 
 	it('reads as it was written', () => {
 		expect(projectNote(opened(updates))).toEqual(content);
@@ -35,6 +37,6 @@ describe.each(names)('The frozen document %s', (name) => {
 	});
 
 	it('has a content that can still be taken in', () => {
-		expect(projectNote(documentFrom(parseContent(content)))).toEqual(content);
+		expect(projectNote(documentFrom(parseContent(written)))).toEqual(content);
 	});
 });

@@ -13,6 +13,8 @@ import { proseSchema } from './prose';
 export const LONGEST_TYPED = 4000;
 
 const typed = z.string().check(z.maxLength(LONGEST_TYPED));
+/** A field that earlier versions did not have: blank where it is missing. */
+const added = z._default(typed, '');
 export const itemIdSchema = z.string().check(z.minLength(1), z.maxLength(64));
 const base = { id: itemIdSchema };
 
@@ -60,7 +62,9 @@ export const checkSchema = z.object({
 	required: typed
 });
 
-export const bodySchema = z.enum(['earth', 'mars', 'moon', 'ceres']);
+/** A body known here, one of one's own, or a moon with its primary: the line towards it or away from it. */
+export const bodySchema = z.enum(['earth', 'mars', 'moon', 'ceres', 'own', 'moonNear', 'moonFar']);
+export const oblatenessSchema = z.enum(['without', 'with']);
 export const baseModeSchema = z.enum(['lift', 'area']);
 
 export const lineModelSchema = z.object({
@@ -70,6 +74,15 @@ export const lineModelSchema = z.object({
 	symbol: typed,
 	description: typed,
 	body: bodySchema,
+	/** Whether J2 of a known body counts. */
+	j2: z._default(oblatenessSchema, 'without'),
+	/** Of a body of one's own, and of a moon, whose blanks stand for the Moon and the Earth. */
+	gm: added,
+	radius: added,
+	period: added,
+	oblateness: added,
+	primaryGm: added,
+	distance: added,
 	density: typed,
 	allowable: typed,
 	factorOfSafety: typed,
@@ -174,6 +187,13 @@ export const FIELDS: { [K in ItemKind]: FieldsOf<K> } = {
 		symbol: 'typed',
 		description: 'typed',
 		body: 'choice',
+		j2: 'choice',
+		gm: 'typed',
+		radius: 'typed',
+		period: 'typed',
+		oblateness: 'typed',
+		primaryGm: 'typed',
+		distance: 'typed',
 		density: 'typed',
 		allowable: 'typed',
 		factorOfSafety: 'typed',
@@ -221,6 +241,13 @@ export const BLANK: { [K in ItemKind]: Omit<ItemOf<K>, 'id'> } = {
 		symbol: '',
 		description: '',
 		body: 'earth',
+		j2: 'without',
+		gm: '',
+		radius: '',
+		period: '',
+		oblateness: '',
+		primaryGm: '',
+		distance: '',
 		density: '',
 		allowable: '',
 		factorOfSafety: '',

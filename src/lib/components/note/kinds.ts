@@ -5,7 +5,10 @@ export const BODY_NAMES: Record<ItemOf<'lineModel'>['body'], string> = {
 	earth: 'Earth',
 	mars: 'Mars',
 	moon: 'Moon',
-	ceres: 'Ceres'
+	ceres: 'Ceres',
+	moonNear: 'a moon, towards its primary (L1)',
+	moonFar: 'a moon, away from its primary (L2)',
+	own: 'a body of one’s own'
 };
 
 /** An item in a few words, for names that are read aloud and lists. */

@@ -4,7 +4,7 @@
  */
 import { tick } from 'svelte';
 import { copyItems, duplicateItem, pasteItems } from '$lib/note/clipboard';
-import { addItem, moveItem, removeItem } from '$lib/note/document';
+import { addItem, completeFields, moveItem, removeItem } from '$lib/note/document';
 import { KIND_NAMES, type Item, type ItemKind } from '$lib/note/items';
 import type { NoteSession } from '$lib/sync/note-session.svelte';
 import { AsItWas } from './as-it-was';
@@ -94,6 +94,7 @@ export class NoteWork {
 	edit(id: string): void {
 		if (!this.mayEdit || this.open === id || !this.sheet.item(id)) return;
 		this.#was?.forget();
+		completeFields(this.session.doc, id);
 		this.#was = new AsItWas(this.session.doc, id, this.session.origin);
 		this.current = id;
 		this.open = id;

@@ -34,7 +34,14 @@ export type LineModelItem = {
 	id: string;
 	kind: 'lineModel';
 	symbol: string;
-	body: 'earth' | 'mars' | 'moon' | 'ceres';
+	body: 'earth' | 'mars' | 'moon' | 'ceres' | 'own' | 'moonNear' | 'moonFar';
+	j2: 'without' | 'with';
+	gm: string;
+	radius: string;
+	period: string;
+	oblateness: string;
+	primaryGm: string;
+	distance: string;
 	density: string;
 	allowable: string;
 	factorOfSafety: string;

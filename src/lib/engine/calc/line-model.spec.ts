@@ -93,7 +93,7 @@ describe('a line model', () => {
 	});
 
 	it('warns that a climber above synchronous height is not covered', () => {
-		expect(modelOf([lineModel()]).warnings.join(' ')).toContain('below synchronous height only');
+		expect(modelOf([lineModel()]).warnings.join(' ')).toContain('below the balance point only');
 	});
 
 	it('is no quantity itself', () => {

@@ -1,22 +1,25 @@
-/** A line model in its first form: the constant-stress taper on one body, with its refusals in words. */
+/** A line model in its first form: the constant-stress taper, with its refusals in words. */
 import { equal, inWords, type Dimension } from '../quantities/dimension';
-import { formatFigure, kilometres } from '../quantities/format';
-import { BODIES } from '../line/bodies';
-import type { Field } from '../line/field';
-import { ofBody } from '../line/site';
+import { formatFigure } from '../quantities/format';
 import { profileTaper, sizeTaper, type TaperInput } from '../line/taper';
-import { fits } from '../methods/check';
+import { outOfRange } from '../methods/check';
 import type { Told } from '../methods/parameter';
 import { fault } from './faults';
 import type { Formula, FormulaOutcome } from './formula';
 import { valueType } from './infer';
 import type { LineModelItem } from './items';
-import { MODEL_FIELDS, MODEL_INPUTS, type ModelField } from './model-inputs';
+import {
+	MODEL_FIELDS,
+	MODEL_INPUTS,
+	PLACE_FIELDS,
+	type ModelField,
+	type ModelValues
+} from './model-inputs';
 import { OUTPUTS } from './model-outputs';
+import { fieldAt, placeFields, placeWarnings, siteOf, topRefusal } from './model-place';
 import { DEFAULT_DIGITS, shown } from './quantity';
 import type { Fault, LineModelResult, ModelOutput, Outcome } from './results';
 import type { Scope } from './scope';
-import { warnings } from './model-warnings';
 
 export type ModelFormulas = Record<ModelField, Formula>;
 
@@ -24,7 +27,13 @@ type Body = Omit<LineModelResult, 'id' | 'kind' | 'uses' | 'usedIn' | 'symbol'>;
 
 /** The fields that the chosen way of sizing reads. */
 export const fieldsRead = (item: LineModelItem): ModelField[] =>
-	MODEL_FIELDS.filter((field) => field !== (item.baseMode === 'lift' ? 'area' : 'lift'));
+	MODEL_FIELDS.filter((field) =>
+		PLACE_ONLY.has(field)
+			? placeFields(item).includes(field)
+			: field !== (item.baseMode === 'lift' ? 'area' : 'lift')
+	);
+
+const PLACE_ONLY: ReadonlySet<string> = new Set(Object.values(PLACE_FIELDS).flat());
 
 export function evaluateLineModel(
 	item: LineModelItem,
@@ -64,15 +73,15 @@ export function evaluateLineModel(
 	const values = Object.fromEntries(
 		found.map(({ field, outcome }) => [field, outcome.state === 'value' ? outcome.si : null])
 	) as ModelValues;
-	const input = taperInput(values, BODIES[item.body].radius.value);
-	if (!input) return without({ state: 'blank' });
-
-	const field = ofBody(BODIES[item.body], false);
-	const refusal = topRefusal(field, input.top);
-	if (refusal) {
-		const reason = { field: '', fault: refusal };
-		return without({ state: 'waits', for: [], rootIds: [item.id] }, { faults: [reason] });
-	}
+	const site = siteOf(item, values);
+	if (!site || !taperInput(values, 0)) return without({ state: 'blank' });
+	const refused = (fault: Fault) =>
+		without({ state: 'waits', for: [], rootIds: [item.id] }, { faults: [{ field: '', fault }] });
+	const field = fieldAt(site);
+	if ('code' in field) return refused(field);
+	const input = taperInput(values, field.base)!;
+	const refusal = topRefusal(site, field, input.top);
+	if (refusal) return refused(refusal);
 	const result = sizeTaper(field, input);
 	return {
 		faults,
@@ -82,7 +91,10 @@ export function evaluateLineModel(
 			describe(output, outcomeOf(output.value(result), output.dimension, output.description))
 		),
 		profile: profileTaper(field, input),
-		warnings: warnings(item.body, field, values.factorOfSafety!)
+		warnings: [
+			...placeWarnings(site, field, input.top),
+			...strengthWarnings(values.factorOfSafety!)
+		]
 	};
 }
 
@@ -125,19 +137,17 @@ function inputFaults(field: ModelField, outcome: FormulaOutcome): Fault[] {
 			)
 		];
 	}
-	if (fits(range, outcome.si)) return [];
-	const wanted = 'least' in range ? '0 or more' : 'above 0';
-	return [fault('refused', `The ${label} must be ${wanted}.`)];
+	const wanted = outOfRange(range, outcome.si);
+	return wanted === null ? [] : [fault('refused', `The ${label} must be ${wanted}.`)];
 }
-
-/** In SI, null for what is blank. */
-export type ModelValues = Partial<Record<ModelField, number | null>>;
 
 /** The figures of the outputs, null for one beyond any build; null where the model refuses these values. */
 export function outputsAt(item: LineModelItem, values: ModelValues): (number | null)[] | null {
-	const input = taperInput(values, BODIES[item.body].radius.value);
-	const field = ofBody(BODIES[item.body], false);
-	if (!input || topRefusal(field, input.top)) return null;
+	const site = siteOf(item, values);
+	const field = site && fieldAt(site);
+	if (!field || 'code' in field) return null;
+	const input = taperInput(values, field.base);
+	if (!input || topRefusal(site, field, input.top)) return null;
 	const result = sizeTaper(field, input);
 	return OUTPUTS.map(({ value }) => {
 		const told = value(result);
@@ -159,20 +169,11 @@ function taperInput(values: ModelValues, radius: number): TaperInput | null {
 	};
 }
 
-/** Why a line cannot end at this radius; null when it can. */
-function topRefusal(field: Field, top: number): Fault | null {
-	const synchronous = field.balance - field.base;
-	if (top <= field.balance * (1 + 1e-9)) {
-		return fault(
-			'refused',
-			`The top is ${kilometres(top - field.base)} up, not above synchronous height at ${kilometres(synchronous)}: ` +
-				'nothing there pulls outwards to hold the line up.',
-			{ remedy: `Set the top above ${kilometres(synchronous)}.` }
-		);
-	}
-	if (top <= field.balance * 1000) return null;
-	return fault(
-		'refused',
-		`The top is ${kilometres(top - field.base)} up, more than a thousand synchronous radii: one body alone says nothing there.`
-	);
+function strengthWarnings(factorOfSafety: number): string[] {
+	return [
+		...(factorOfSafety < 1
+			? ['The factor of safety is below 1: the design stress is above the allowable.']
+			: []),
+		'Sized for a climber below the balance point only: one above it adds its outward pull to everything below.'
+	];
 }

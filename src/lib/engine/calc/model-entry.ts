@@ -5,14 +5,8 @@ import { Formula } from './formula';
 import { valueType } from './infer';
 import type { LineModelItem } from './items';
 import { joined, type Derived } from './linear';
-import {
-	evaluateLineModel,
-	fieldsRead,
-	outputsAt,
-	type ModelFormulas,
-	type ModelValues
-} from './line-model';
-import { MODEL_FIELDS, type ModelField } from './model-inputs';
+import { evaluateLineModel, fieldsRead, outputsAt, type ModelFormulas } from './line-model';
+import { MODEL_FIELDS, type ModelField, type ModelValues } from './model-inputs';
 import { OUTPUTS } from './model-outputs';
 import { withUncertainty } from './quantity';
 import type { Fault, LineModelResult } from './results';

@@ -21,25 +21,19 @@ const output = (
 
 export const OUTPUTS: readonly OutputDefinition[] = [
 	output('design_stress', '\\sigma_\\mathrm{d}', 'design stress', PRESSURE, (r) => r.designStress),
-	output('taper', '\\tau', 'taper ratio, anchor to synchronous height', PURE, (r) => r.taper),
+	output('taper', '\\tau', 'taper ratio, anchor to balance point', PURE, (r) => r.taper),
 	output('A0', 'A_0', 'section at the anchor', AREA, (r) => r.baseArea),
-	output('As', 'A_\\mathrm{s}', 'section at synchronous height', AREA, (r) => r.synchronousArea),
+	output('As', 'A_\\mathrm{s}', 'section at the balance point', AREA, (r) => r.synchronousArea),
 	output('At', 'A_\\mathrm{t}', 'section at the top', AREA, (r) => r.topArea),
 	output(
 		'T_max',
 		'T_\\mathrm{s}',
-		'greatest tension, at synchronous height',
+		'greatest tension, at the balance point',
 		FORCE,
 		(r) => r.greatestTension
 	),
 	output('mass', 'm_\\mathrm{L}', 'mass of the line', MASS, (r) => r.mass),
-	output(
-		'mass_below',
-		'm_\\mathrm{L,b}',
-		'line below synchronous height',
-		MASS,
-		(r) => r.massBelow
-	),
+	output('mass_below', 'm_\\mathrm{L,b}', 'line below the balance point', MASS, (r) => r.massBelow),
 	output('mass_above', 'm_\\mathrm{L,a}', 'line above it', MASS, (r) => r.massAbove),
 	output('counterweight', 'm_\\mathrm{cw}', 'counterweight', MASS, (r) => r.counterweight),
 	output('total', 'm_\\mathrm{tot}', 'line and counterweight', MASS, (r) => r.total),
@@ -48,7 +42,7 @@ export const OUTPUTS: readonly OutputDefinition[] = [
 	output(
 		'r_s',
 		'r_\\mathrm{s}',
-		'synchronous radius, from the centre',
+		'balance radius, from the centre',
 		LENGTH,
 		(r) => r.synchronousRadius
 	),

@@ -1,5 +1,5 @@
 /** How the fields of each kind stand in an open row. */
-import { MODEL_INPUTS, type ModelField } from '$lib/engine/calc/model-inputs';
+import { MODEL_INPUTS, PLACE_FIELDS, type ModelField } from '$lib/engine/calc/model-inputs';
 import type { NumberParameter } from '$lib/engine/methods/parameter';
 import type { Item, ItemKind } from '$lib/note/items';
 
@@ -36,6 +36,39 @@ function input(field: ModelField, span: number): FieldPlan {
 	return expression(field, label[0]!.toUpperCase() + label.slice(1), span, help);
 }
 
+const isMoon = ({ body }: Extract<Item, { kind: 'lineModel' }>) =>
+	body === 'moonNear' || body === 'moonFar';
+
+/** Whether the place is a body whose J2 is known. */
+export const hasOblateness = ({ body }: Extract<Item, { kind: 'lineModel' }>) =>
+	['earth', 'mars', 'moon'].includes(body);
+
+/** What says where a line stands that stands on no body known here. */
+function placed(
+	place: keyof typeof PLACE_FIELDS,
+	named: Partial<Record<ModelField, string>>
+): FieldPlan[] {
+	return PLACE_FIELDS[place].map((field) => {
+		const plan = input(field, 3);
+		return {
+			...plan,
+			label: named[field] ?? plan.label,
+			hint:
+				place === 'moon'
+					? BLANK_STANDS_FOR[field as keyof typeof BLANK_STANDS_FOR]
+					: (plan.hint ?? ''),
+			shown: model((m) => (place === 'moon' ? isMoon(m) : m.body === 'own'))
+		};
+	});
+}
+
+const BLANK_STANDS_FOR = {
+	gm: 'empty is the Moon’s',
+	radius: 'empty is the Moon’s',
+	primaryGm: 'empty is the Earth’s',
+	distance: 'between the centres; empty is 384 400 km'
+};
+
 const model = (test: (item: Extract<Item, { kind: 'lineModel' }>) => boolean) => (item: Item) =>
 	item.kind === 'lineModel' && test(item);
 
@@ -69,7 +102,9 @@ export const PLANS: Record<Exclude<ItemKind, 'text'>, FieldPlan[]> = {
 	],
 	lineModel: [
 		name('symbol', 'Name', 2, 'outputs are name.taper …'),
-		words('description', 'What it is', 7),
+		words('description', 'What it is', 6),
+		...placed('own', { gm: 'Gravitational parameter', radius: 'Equatorial radius' }),
+		...placed('moon', { gm: 'Gravitational parameter of the moon', radius: 'Radius of the moon' }),
 		input('density', 4),
 		input('allowable', 4),
 		input('factorOfSafety', 4),
@@ -85,6 +120,11 @@ export const RELATIONS = [
 	{ value: 'le', label: '≤  at most' },
 	{ value: 'ge', label: '≥  at least' },
 	{ value: 'within', label: 'within ±' }
+];
+
+export const OBLATENESS = [
+	{ value: 'without', label: 'left out' },
+	{ value: 'with', label: 'with it' }
 ];
 
 export const BASE_MODES = [
