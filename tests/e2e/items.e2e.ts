@@ -110,6 +110,19 @@ test('a line model shows the figures that an independent integration gives, and 
 	await expect(saved(quispe)).toContainText('Saved');
 });
 
+test('a sized line is looked at further by a method that opens with it filled in', async ({
+	as
+}) => {
+	const quispe = await as('quispe');
+	await openNote(quispe, 'CL-DN-004');
+	const model = row(quispe, 'cl4-line');
+	await model.getByRole('link', { name: 'as built' }).click();
+	await expect(quispe.getByRole('heading', { name: 'As-built analysis' })).toBeVisible();
+	// 14 t at the anchor, GM/R² − ω²R = 9.7641 m/s² by hand: 136.7 kN.
+	await expect(quispe.getByText('tension at the anchor').first()).toBeVisible();
+	await expect(quispe.getByText(/136[.,]7/).first()).toBeVisible();
+});
+
 test('a list goes value by value through a formula, and whoever reads the note opens its values', async ({
 	as
 }) => {
