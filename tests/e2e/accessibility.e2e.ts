@@ -9,6 +9,7 @@ const PAGES = [
 	'/programmes/CL/people',
 	'/programmes/CL/gates',
 	'/programmes/CL/baselines',
+	'/programmes/CL/parameters',
 	'/programmes/CL/notes/CL-DN-002/freeze',
 	'/programmes/CL/notes/CL-DN-002/compare?from=A&to=now',
 	'/methods',

@@ -70,6 +70,7 @@ test('a note page loads at most 300 kB of script, gzipped; any other at most 120
 		'/programmes/CL/people',
 		'/programmes/CL/gates',
 		'/programmes/CL/baselines',
+		'/programmes/CL/parameters',
 		baseline!,
 		'/programmes/CL/notes/CL-DN-004/compare?from=A&to=now',
 		'/methods',

@@ -2,6 +2,7 @@ import { afterAll, beforeAll, expect, test } from 'vitest';
 import { addItem, removeItem, textField } from '$lib/note/document';
 import { changesBefore } from '$lib/server/baselines/before';
 import { freeze } from '$lib/server/baselines/freeze';
+import { parametersOf } from '$lib/server/baselines/parameters';
 import { findBaseline, latestBaseline, opened } from '$lib/server/baselines/read';
 import { compareSides } from '$lib/server/baselines/sides';
 import { db } from '$lib/server/db';
@@ -9,6 +10,7 @@ import { noteItem } from '$lib/server/db/schema';
 import { closeEngine } from '$lib/server/engine/evaluate';
 import { GET as compareRoute } from '../../src/routes/api/notes/[note]/compare/+server';
 import { GET as latestRoute } from '../../src/routes/api/notes/[note]/baselines/latest/+server';
+import { GET as parametersRoute } from '../../src/routes/api/programmes/[programme]/parameters.csv/+server';
 import { GET as quantitiesRoute } from '../../src/routes/api/baselines/[baseline]/quantities/+server';
 import { makeGate, makePerson, makeProgramme } from './fixtures';
 import { call, edit, writtenNote } from './written-note';
@@ -111,6 +113,26 @@ test('a frozen sheet says what changed since the baseline before it; the first h
 	expect(await changesBefore(note.id, first!.frozenAt, opened(first!))).toBeNull();
 	const before = await changesBefore(note.id, second!.frozenAt, opened(second!));
 	expect(before).toMatchObject({ revision: 'A', changes: { changed: 3, added: 0, removed: [] } });
+});
+
+test('the parameters of a programme are the quantities of the latest baselines, and no later ones', async () => {
+	const parameters = await parametersOf(team.programme.id);
+	expect(
+		parameters.map(({ symbol, revision, baselineId, noteNumber, outcome }) => [
+			...[symbol, revision, baselineId, noteNumber],
+			outcome.state === 'value' && outcome.quantity.si
+		])
+	).toEqual([
+		['m', 'B', ids[1], note.number, 25_000],
+		['x', 'B', ids[1], note.number, 1],
+		['w', 'B', ids[1], note.number, 50_000],
+		['v', 'B', ids[1], note.number, 50_000]
+	]);
+	const other = await makeProgramme();
+	expect(await parametersOf(other.programme.id)).toEqual([]);
+	const params = { programme: team.programme.code };
+	const lines = (await (await call(parametersRoute, team.observer, params)).text()).split('\r\n');
+	expect(lines[2]).toBe(`m,'=climber,25,t,,,${note.number},B,0.1`);
 });
 
 test('a comparison is taken away as CSV that no spreadsheet runs', async () => {

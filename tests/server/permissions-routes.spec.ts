@@ -96,8 +96,10 @@ const EXPECTED: Record<string, string> = {
 	[`?/head ${PROGRAMME}/gates`]: LEAD,
 	[`load ${PROGRAMME}/baselines`]: READ,
 	[`load ${PROGRAMME}/baselines/[baseline]`]: READ,
+	[`load ${PROGRAMME}/parameters`]: READ,
 	'GET /api/programmes/[programme]/notes': API_READ,
 	'GET /api/programmes/[programme]/notes.csv': API_READ,
+	'GET /api/programmes/[programme]/parameters.csv': API_READ,
 
 	[`load ${NOTE}`]: READ,
 	[`?/titleBlock ${NOTE}`]: WRITE,

@@ -8,10 +8,10 @@ import { readingsOf, type Reading } from '$lib/note/readings';
 import type { Baseline } from './read';
 import type { ComparedSides } from './sides';
 
-const CAUTION = 'Preliminary design data. Not for construction or operation.';
+export const CAUTION = 'Preliminary design data. Not for construction or operation.';
 
 /** Value, unit, standard uncertainty and, where there is no value, why. */
-function figureCells(outcome: Outcome): CsvCell[] {
+export function figureCells(outcome: Outcome): CsvCell[] {
 	if (outcome.state !== 'value') return [null, '', null, outcomeWords(outcome)];
 	const { value, unit, uncertainty } = outcome.quantity;
 	return [value, unit, uncertainty, ''];
