@@ -85,7 +85,10 @@ function upperFraction(a: number, x: number): number {
 export function betaI(x: number, a: number, b: number): number {
 	if (x <= 0) return 0;
 	if (x >= 1) return 1;
-	if (x > (a + 1) / (a + b + 2)) return 1 - betaI(1 - x, b, a);
+	return x > (a + 1) / (a + b + 2) ? 1 - betaFraction(1 - x, b, a) : betaFraction(x, a, b);
+}
+
+function betaFraction(x: number, a: number, b: number): number {
 	const lnFront = a * Math.log(x) + b * Math.log1p(-x) - (lnGamma(a) + lnGamma(b) - lnGamma(a + b));
 	const tiny = 1e-300;
 	const nonZero = (value: number) => (Math.abs(value) < tiny ? tiny : value);
@@ -106,6 +109,10 @@ export function betaI(x: number, a: number, b: number): number {
 	return (Math.exp(lnFront) * h) / a;
 }
 
-/** P(T > t) of Student's t with ν degrees of freedom, t ≥ 0. */
-export const studentUpper = (t: number, nu: number): number =>
-	betaI(nu / (nu + t * t), nu / 2, 0.5) / 2;
+/** P(T > t) of Student's t with ν degrees of freedom, t ≥ 0; from the middle where t is small beside it. */
+export function studentUpper(t: number, nu: number): number {
+	const square = t * t;
+	return square < nu
+		? (1 - betaI(square / (nu + square), 0.5, nu / 2)) / 2
+		: betaI(nu / (nu + square), nu / 2, 0.5) / 2;
+}
