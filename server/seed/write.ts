@@ -19,7 +19,12 @@ export const given = (
 	unit: string,
 	uncertainty: string,
 	source: string
-): Item => ({ id, kind: 'given', symbol, description, value, unit, uncertainty, source });
+): Item => ({
+	id,
+	kind: 'given',
+	...{ symbol, description, value, unit, uncertainty, source },
+	taken: ''
+});
 
 export const calculation = (
 	id: string,

@@ -22,7 +22,8 @@ import {
 	setChoice,
 	setThinLimit,
 	settingsMap,
-	textField
+	textField,
+	writeFields
 } from '../../src/lib/note/document';
 import { documentFrom } from '../../src/lib/note/interchange';
 import { createUndo } from '../../src/lib/note/undo';
@@ -158,6 +159,17 @@ function otherPlaces(): string[] {
 	return state(doc);
 }
 
+/** Typed, then filled whole from a baseline. */
+function takenGiven(): string[] {
+	const [given] = contentOf('taken-given').items;
+	const { id, symbol, description, value, unit, uncertainty, source, taken } = given;
+	const doc = new Y.Doc();
+	setThinLimit(doc, '0.10');
+	addItem(doc, { id, kind: 'given', symbol, description, value: '95', unit: 'ksi' }, { after: null });
+	writeFields(doc, id, { value, unit, uncertainty, source }, { taken });
+	return state(doc);
+}
+
 function contentOf(name: string) {
 	return JSON.parse(readFileSync(new URL(`${name}.json`, folder), 'utf8')).content;
 }
@@ -168,7 +180,8 @@ for (const [name, write] of Object.entries({
 	'many-hands': manyHands,
 	'editor-prose': editorProse,
 	damaged,
-	'other-places': otherPlaces
+	'other-places': otherPlaces,
+	'taken-given': takenGiven
 })) {
 	const file = new URL(`${name}.json`, folder);
 	if (!existsSync(file)) throw new Error(`${name}.json is to say by hand what it must read as.`);

@@ -1,6 +1,6 @@
 import { spawnSync } from 'node:child_process';
 import { expect, test } from './harness';
-import { field, openNote, row, saved } from './note-page';
+import { field, openNote, row, saved, value } from './note-page';
 
 const NOTE = '/programmes/CL/notes/CL-DN-004';
 const WAIVER = 'The joints are thickened before CDR; none is made before then.';
@@ -107,4 +107,50 @@ test('two leads who freeze at once get one baseline and one clear refusal', asyn
 			return { frozen, refused };
 		})
 		.toEqual({ frozen: 1, refused: 1 });
+});
+
+test('a given is taken from the baseline of another note, and flagged when a newer one changes it', async ({
+	as
+}) => {
+	test.setTimeout(120_000);
+	const solvang = await as('solvang');
+	const abara = await as('abara');
+	const laine = await as('laine');
+	for (const page of [abara, laine]) await openNote(page, 'CL-DN-006');
+	const taken = row(abara, 'cl6-flux');
+	await field(abara, 'cl6-flux', 'Value');
+	await taken.getByRole('searchbox').fill('greatest speed tape');
+	await taken.getByRole('button', { name: /Greatest speed on the tape/ }).click();
+	await expect(taken.getByLabel('Value', { exact: true })).toHaveValue('200');
+	await expect(taken.getByLabel('Unit')).toHaveValue('km/h');
+	await expect(taken.getByLabel('Source')).toHaveValue('CL-DN-003 baseline A, 2.4');
+	await taken.getByLabel('Source').press('Enter');
+	await expect(row(laine, 'cl6-flux')).toContainText('CL-DN-003 baseline A, 2.4');
+	await expect(saved(abara)).toContainText('Saved');
+
+	// The other note goes on, and its next baseline says otherwise.
+	await openNote(solvang, 'CL-DN-003');
+	const speed = await field(solvang, 'cl3-vmax', 'Value');
+	await speed.fill('190');
+	await speed.press('Enter');
+	await expect(saved(solvang)).toContainText('Saved');
+	await solvang.goto('/programmes/CL/notes/CL-DN-003/freeze');
+	await solvang.getByRole('button', { name: 'Freeze baseline B' }).click();
+	await solvang.waitForURL(/\/baselines\//);
+	await solvang.goto('/programmes/CL/parameters');
+	await solvang.getByRole('searchbox').fill('greatest speed tape');
+	await expect(solvang.getByRole('row', { name: /Greatest speed on the tape/ })).toContainText(
+		'190'
+	);
+
+	for (const page of [abara, laine]) {
+		await page.reload();
+		await expect(row(page, 'cl6-flux')).toContainText(/baseline B has 190.*km\/h here/);
+	}
+	// Who only reads is told and has nothing to press.
+	await expect(row(laine, 'cl6-flux').getByRole('button', { name: 'Take' })).toHaveCount(0);
+	await row(abara, 'cl6-flux').getByRole('button', { name: 'Take the new value' }).click();
+	await expect(value(abara, 'cl6-flux')).toHaveText('190');
+	await expect(row(abara, 'cl6-flux')).toContainText('CL-DN-003 baseline B, 2.4');
+	await expect(row(laine, 'cl6-flux')).not.toContainText('is frozen anew');
 });

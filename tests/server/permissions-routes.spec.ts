@@ -114,6 +114,7 @@ const EXPECTED: Record<string, string> = {
 	[`POST ${API_NOTE}/baselines`]: API_LEAD,
 	[`GET ${API_NOTE}/baselines/latest`]: API_READ,
 	[`GET ${API_NOTE}/compare`]: API_READ,
+	[`GET ${API_NOTE}/parameters`]: API_READ,
 	[`POST ${API_NOTE}/evidence`]: API_WRITE,
 
 	'POST /api/remarks/[remark]/replies': API_REVIEW,

@@ -38,6 +38,7 @@ export const FIELD_WORDS: Record<string, string> = {
 	unit: 'unit',
 	uncertainty: 'uncertainty',
 	source: 'source',
+	taken: 'where it is taken from',
 	expression: 'formula',
 	digits: 'digits',
 	left: 'left side',

@@ -114,6 +114,27 @@ export function setChoice(
 	if (item) doc.transact(() => item.set(field, value), origin);
 }
 
+/** Writes texts of an item whole, and choices with them, as one edit. */
+export function writeFields(
+	doc: Y.Doc,
+	id: string,
+	texts: Readonly<Record<string, string>>,
+	choices: Readonly<Record<string, string>>,
+	origin: unknown = null
+): void {
+	const item = heldItem(doc, id);
+	if (!item) return;
+	doc.transact(() => {
+		for (const [field, text] of Object.entries(texts)) {
+			const held = item.get(field);
+			if (!(held instanceof Y.Text) || held.toString() === text) continue;
+			held.delete(0, held.length);
+			held.insert(0, text);
+		}
+		for (const [field, choice] of Object.entries(choices)) item.set(field, choice);
+	}, origin);
+}
+
 export function setThinLimit(doc: Y.Doc, typed: string, origin: unknown = null): void {
 	doc.transact(() => settingsMap(doc).set('thinLimit', typed), origin);
 }

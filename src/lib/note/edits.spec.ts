@@ -77,7 +77,8 @@ const content: NoteContent = {
 			value: '1520',
 			unit: 'kg/m^3',
 			uncertainty: '12',
-			source: 'own coupons'
+			source: 'own coupons',
+			taken: ''
 		},
 		{ id: 'e', kind: 'evidence', description: 'Coupons', files: [file('f1'), file('f2')] }
 	]

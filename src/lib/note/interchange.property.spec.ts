@@ -20,7 +20,8 @@ const shape = fc.oneof(
 	fc.record({ kind: fc.constant('section' as const), title: typed }),
 	fc.record({
 		kind: fc.constant('given' as const),
-		...{ symbol, description: typed, value: typed, unit: typed, uncertainty: typed, source: typed }
+		...{ symbol, description: typed, value: typed, unit: typed, uncertainty: typed, source: typed },
+		taken: fc.constantFrom('', '["n","i","","A"]')
 	}),
 	fc.record({
 		kind: fc.constant('calculation' as const),

@@ -32,7 +32,9 @@ export const givenSchema = z.object({
 	unit: typed,
 	/** Standard uncertainty in the unit of the value; empty means exact. */
 	uncertainty: typed,
-	source: typed
+	source: typed,
+	/** The quantity of a baseline that it is taken from, see `taken.ts`; empty where it is typed. */
+	taken: z._default(z.string().check(z.maxLength(300)), '')
 });
 
 export const calculationSchema = z.object({
@@ -166,7 +168,8 @@ export const FIELDS: { [K in ItemKind]: FieldsOf<K> } = {
 		value: 'typed',
 		unit: 'typed',
 		uncertainty: 'typed',
-		source: 'typed'
+		source: 'typed',
+		taken: 'choice'
 	},
 	calculation: {
 		symbol: 'typed',
@@ -217,7 +220,8 @@ export const BLANK: { [K in ItemKind]: Omit<ItemOf<K>, 'id'> } = {
 		value: '',
 		unit: '',
 		uncertainty: '',
-		source: ''
+		source: '',
+		taken: ''
 	},
 	calculation: {
 		kind: 'calculation',

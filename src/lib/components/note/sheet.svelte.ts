@@ -36,6 +36,8 @@ export class NoteSheet implements SheetView {
 	});
 	/** Whether the first results have come. */
 	evaluated = $state(false);
+	/** Whether a given was taken from a baseline of another note. */
+	takes = $state(false);
 	/** Why nothing is computed any more; empty while it is. */
 	failure = $state('');
 
@@ -98,6 +100,7 @@ export class NoteSheet implements SheetView {
 	#change({ upsert, remove, order, thinLimit }: NoteChange): void {
 		let kinds = order !== null;
 		for (const item of upsert) {
+			if (item.kind === 'given' && item.taken !== '') this.takes = true;
 			const entry = this.#entries.get(item.id);
 			if (!entry) this.#entries.set(item.id, new SheetEntry(item));
 			else {

@@ -4,6 +4,8 @@
  */
 import { createQuery, QueryClient } from '@tanstack/svelte-query';
 import type { ItemChange } from '$lib/note/compare';
+import type { Item } from '$lib/note/items';
+import { newerThan, readTaken, type Takeable } from '$lib/note/taken';
 import type { Side } from '$lib/note/readings';
 import type { Baseline } from '$lib/server/baselines/read';
 import type { CheckMovement } from '$lib/server/notes/written';
@@ -40,6 +42,9 @@ export class NoteSurroundings {
 	#remarks;
 	#movements;
 	#baseline;
+	#parameters;
+	/** Whether somebody looks for a parameter to take. */
+	#asked = $state(false);
 
 	/** Called while a component is being set up: its queries live as long as the component. */
 	constructor({ noteId, me, role, session, sheet }: Given) {
@@ -48,19 +53,29 @@ export class NoteSurroundings {
 		this.#role = role;
 		this.#session = session;
 		this.#sheet = sheet;
-		const query = <T>(kind: string, path: string) =>
+		const query = <T>(
+			kind: string,
+			path: string,
+			more: { wanted?: () => boolean; every?: number } = {}
+		) =>
 			createQuery(
 				() => ({
 					queryKey: [kind],
 					queryFn: () => fetchJson<T>(`/api/notes/${noteId}/${path}`),
 					// What is beside the text comes after the text.
-					enabled: sheet.evaluated
+					enabled: sheet.evaluated && (more.wanted?.() ?? true),
+					...(more.every && { refetchInterval: more.every })
 				}),
 				() => this.#client
 			);
 		this.#remarks = query<RemarkView[]>('remarks', 'remarks');
 		this.#movements = query<CheckMovement[]>('movements', 'movements');
 		this.#baseline = query<Baseline | null>('baselines', 'baselines/latest');
+		// Other notes tell this one nothing: their baselines are looked for now and then.
+		this.#parameters = query<Takeable[]>('parameters', 'parameters', {
+			wanted: () => this.#asked || sheet.takes,
+			every: 60_000
+		});
 
 		$effect(() =>
 			session.on('event', ({ kind }) => {
@@ -82,6 +97,28 @@ export class NoteSurroundings {
 
 	get remarks(): RemarkView[] {
 		return this.#remarks.data ?? [];
+	}
+
+	/** What other notes of the programme have frozen; undefined before it is fetched. */
+	get parameters(): Takeable[] | undefined {
+		return this.#parameters.data;
+	}
+
+	get parametersFailed(): boolean {
+		return this.#parameters.isError;
+	}
+
+	/** Fetches them, also where no given of the note is taken from a baseline yet. */
+	askParameters(): void {
+		this.#asked = true;
+	}
+
+	/** The same quantity in a newer baseline than the given was taken from, where it says otherwise now. */
+	newerOf(item: Item): Takeable | null {
+		const taken = item.kind === 'given' ? readTaken(item.taken) : null;
+		const result = this.#sheet.result(item.id);
+		if (!taken || result?.kind !== 'given') return null;
+		return newerThan(taken, result.outcome, this.parameters ?? []);
 	}
 
 	readonly #remarksByItem = $derived.by(() => groupBy(this.remarks, ({ itemId }) => itemId));

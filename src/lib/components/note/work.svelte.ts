@@ -4,7 +4,8 @@
  */
 import { tick } from 'svelte';
 import { copyItems, duplicateItem, pasteItems } from '$lib/note/clipboard';
-import { addItem, completeFields, moveItem, removeItem } from '$lib/note/document';
+import { addItem, completeFields, moveItem, removeItem, writeFields } from '$lib/note/document';
+import { fieldsOf, takenText, type Takeable } from '$lib/note/taken';
 import { KIND_NAMES, type Item, type ItemKind } from '$lib/note/items';
 import type { NoteSession } from '$lib/sync/note-session.svelte';
 import { AsItWas } from './as-it-was';
@@ -126,6 +127,21 @@ export class NoteWork {
 		this.said = `${KIND_NAMES[kind]} added as ${this.sheet.number(id)}.`;
 		this.mounted = Math.max(this.mounted, this.sheet.order.indexOf(id) + 2);
 		this.edit(id);
+	}
+
+	/** Fills a given from a baseline of another note; symbol and words only where it has none. */
+	take(id: string, from: Takeable): void {
+		const item = this.sheet.item(id);
+		const fields = fieldsOf(from);
+		if (!this.mayEdit || item?.kind !== 'given' || !fields) return;
+		const { doc, origin } = this.session;
+		completeFields(doc, id);
+		const named = {
+			...(item.symbol.trim() === '' && !from.output && { symbol: from.symbol }),
+			...(item.description.trim() === '' && { description: from.description })
+		};
+		writeFields(doc, id, { ...fields, ...named }, { taken: takenText(from) }, origin);
+		this.said = `Taken from ${fields.source}.`;
 	}
 
 	move(id: string, after: string | null): void {

@@ -1,27 +1,15 @@
 /** The parameters of a programme: every quantity that its notes have frozen last. */
 import { desc, eq } from 'drizzle-orm';
-import type { Outcome } from '$lib/engine/calc/results';
 import { numberItems } from '$lib/note/numbering';
 import { readingsOf } from '$lib/note/readings';
+import type { Takeable } from '$lib/note/taken';
 import type { CsvCell } from '$lib/csv';
 import { db } from '../db';
 import { baseline, note } from '../db/schema';
 import { opened, type Baseline } from './read';
 import { CAUTION, figureCells } from './tables';
 
-export type FrozenParameter = {
-	baselineId: string;
-	noteNumber: string;
-	revision: string;
-	itemId: string;
-	/** Of the item in its note, as it was. */
-	number: string;
-	/** As other items of the note name it. */
-	symbol: string;
-	symbolTex: string;
-	description: string;
-	outcome: Outcome;
-};
+export type FrozenParameter = Takeable & { baselineId: string };
 
 /** By note and item; items without a symbol are no parameters. */
 export async function parametersOf(programmeId: string): Promise<FrozenParameter[]> {
@@ -40,8 +28,9 @@ function parametersIn({ id, revision, head, content, results }: Baseline): Froze
 	return content.items.flatMap((item) =>
 		readingsOf(item, found.get(item.id))
 			.filter(({ symbol, check }) => symbol !== '' && !check)
-			.map(({ itemId, symbol, symbolTex, description, outcome }) => ({
-				...{ baselineId: id, noteNumber: head.note.number, revision, itemId },
+			.map(({ itemId, output, symbol, symbolTex, description, outcome }) => ({
+				...{ baselineId: id, noteId: head.note.id, noteNumber: head.note.number },
+				...{ revision, itemId, output },
 				number: numbers.get(itemId) ?? '',
 				...{ symbol, symbolTex, description, outcome }
 			}))
