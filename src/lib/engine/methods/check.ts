@@ -58,7 +58,7 @@ function checkOne(
 	faults: InputFault[]
 ): unknown {
 	const fail = (message: string) => void faults.push({ path, message: `${path} ${message}` });
-	if (given === undefined || given === null) {
+	if (given === undefined) {
 		if ('default' in parameter && parameter.default !== undefined) return parameter.default;
 		if ('optional' in parameter && parameter.optional) return undefined;
 		return fail(`(${parameter.label}) is missing.`);

@@ -39,7 +39,16 @@ function one(parameter: Parameter): JsonSchema {
 				...preset(parameter)
 			};
 		case 'integer':
-			return { ...about, type: 'integer', ...bounds(parameter.range), ...preset(parameter) };
+			return {
+				...about,
+				type: 'integer',
+				...bounds({
+					...parameter.range,
+					// What a double holds to the last digit.
+					...(parameter.range.most === undefined && { most: Number.MAX_SAFE_INTEGER })
+				}),
+				...preset(parameter)
+			};
 		case 'flag':
 			return { ...about, type: 'boolean', ...preset(parameter) };
 		case 'choice':

@@ -55,7 +55,7 @@ describe('a linear model of independent givens', () => {
 		);
 	});
 
-	it('swings as far up as down, by c u each', () => {
+	it('swings by c u to either side of its estimate', () => {
 		fc.assert(
 			fc.property(givens, (of) => {
 				const reaches = named(of).map((reach) => ({ ...reach, least: undefined, most: undefined }));
@@ -65,7 +65,10 @@ describe('a linear model of independent givens', () => {
 				const swings = swingsOf(linear(of.map(({ slope }) => slope)), reaches, 1);
 				swings.forEach(({ low, high }, i) => {
 					if ('refusal' in low || 'refusal' in high) throw new Error('Refused.');
-					near(high.outputs[0]! - low.outputs[0]!, 2 * of[i]!.slope * of[i]!.u, largest, 1e-12);
+					const estimate = of.reduce((sum, { slope, value }) => sum + slope * value, 0);
+					const swing = of[i]!.slope * of[i]!.u;
+					near(high.outputs[0]! - estimate, swing, of.length * largest, 1e-12);
+					near(estimate - low.outputs[0]!, swing, of.length * largest, 1e-12);
 				});
 			})
 		);
