@@ -8,8 +8,9 @@ import { freeze } from '$lib/server/baselines/freeze';
 import { digestOf } from '$lib/server/baselines/digest';
 import { findBaseline } from '$lib/server/baselines/read';
 import { verifyBaseline } from '$lib/server/baselines/verify';
+import { canonicalJson } from '$lib/note/canonical';
 import { db } from '$lib/server/db';
-import { baselineEvidence, evidenceFile, note as noteTable } from '$lib/server/db/schema';
+import { baseline, baselineEvidence, evidenceFile, note as noteTable } from '$lib/server/db/schema';
 import { closeEngine } from '$lib/server/engine/evaluate';
 import { deleteObject, putObject } from '$lib/server/evidence/store';
 import { POST as verifyRoute } from '../../src/routes/api/baselines/[baseline]/verify/+server';
@@ -104,11 +105,29 @@ test('a baseline just frozen holds in every part', async () => {
 	});
 });
 
+test('a baseline sealed before an item had all fields of today still holds', async () => {
+	const row = (await findBaseline(id))!;
+	const content = row.content.replace('"taken":"",', '');
+	expect(content).not.toBe(row.content);
+	const head = row.head.replace('"revision":"A"', '"revision":"Z"');
+	const texts = { ...row, head, content, evidence: canonicalJson(row.evidence), waivers: '[]' };
+	const [older] = await db
+		.insert(baseline)
+		.values({ ...row, id: undefined, revision: 'Z', head, content, digest: digestOf(texts) })
+		.returning();
+	expect(await verifyBaseline(older!)).toMatchObject({
+		holds: true,
+		quantities: { agree: 2, of: 2 },
+		text: { agree: 5, of: 5 },
+		digest: { agrees: true }
+	});
+});
+
 test('the stored texts are canonical, and sha256sum finds the same digest', async () => {
 	const row = (await findBaseline(id))!;
 	expect(row.content).toBe(
 		'{"format":"holdfast-note","items":[' +
-			'{"description":"","id":"g","kind":"given","source":"","symbol":"rho","uncertainty":"","unit":"kg/m^3","value":"1520"},' +
+			'{"description":"","id":"g","kind":"given","source":"","symbol":"rho","taken":"","uncertainty":"","unit":"kg/m^3","value":"1520"},' +
 			'{"description":"","digits":"","expression":"1/rho","id":"v","kind":"calculation","symbol":"v","unit":"m^3/kg"},' +
 			`{"description":"Coupons","files":[{"fileId":"${file.id}","mediaType":"text/csv","name":"coupons.csv","sha256":"as typed","size":1}],"id":"e","kind":"evidence"}` +
 			'],"thinLimit":"0.10","version":1}'
