@@ -1,5 +1,5 @@
 import { expect, test } from './harness';
-import { field, openNote, row, saved, value } from './note-page';
+import { field, itemCount, openNote, row, saved, value } from './note-page';
 
 test('two people write one calculation at once; both see every keystroke and the result', async ({
 	as
@@ -61,7 +61,7 @@ test('items are added, moved, duplicated, removed and put back by keyboard', asy
 	const page = await as('quispe');
 	await openNote(page, 'ML-DN-002');
 	const rows = page.locator('[data-item]');
-	const before = await rows.count();
+	const before = await itemCount(page);
 
 	await row(page, 'ml2-a1').focus();
 	await page.keyboard.press('Alt+Enter');
@@ -102,7 +102,7 @@ test('an item is copied from one note of a programme into another', async ({ as 
 	await row(page, 'cl4-fs').getByRole('button', { name: 'Copy' }).click();
 	await openNote(page, 'CL-DN-005');
 	const rows = page.locator('[data-item]');
-	const before = await rows.count();
+	const before = await itemCount(page);
 	await row(page, 'cl5-n').focus();
 	await page.keyboard.press('Alt+Enter');
 	await page.getByRole('button', { name: 'Paste what was copied' }).first().click();

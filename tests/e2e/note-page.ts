@@ -12,6 +12,13 @@ export const row = (page: Page, id: string): Locator => page.locator(`[id="${id}
 /** A figure of a row, as text. */
 export const value = (page: Page, id: string): Locator => row(page, id).locator('.val');
 
+/** How many items the note has, as told below the last of them: rows beyond the first screen come a moment later. */
+export async function itemCount(page: Page): Promise<number> {
+	const end = page.getByText(/^End of /);
+	await expect(end).toBeVisible();
+	return Number(/(\d+) items?\.?$/.exec((await end.innerText()).trim())![1]);
+}
+
 export const saved = (page: Page): Locator => page.getByRole('status').first();
 
 /** Opens a row for editing and answers with its field. */
