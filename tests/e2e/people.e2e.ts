@@ -98,7 +98,10 @@ test('five wrong passwords close the door for a while, to that account only', as
 	for (let tries = 0; tries < 5; tries++) {
 		await page.getByLabel('Address').fill('abara@halden.example');
 		await page.getByLabel('Password', { exact: true }).fill(`not it ${tries}`);
+		// What the try before was told still stands on the page.
+		const answered = page.waitForResponse((response) => response.request().method() === 'POST');
 		await page.getByRole('button', { name: 'Sign in' }).click();
+		await answered;
 		await expect(page.getByRole('main')).toContainText(/Not signed in|Too many tries/);
 	}
 	await page.goto('/sign-in');
