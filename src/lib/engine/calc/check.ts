@@ -5,7 +5,7 @@ import { conditionTex } from './condition-tex';
 import { fault } from './faults';
 import type { Refreshed } from './entry';
 import type { Formula, FormulaOutcome } from './formula';
-import type { ValueType } from './infer';
+import type { ValueType } from './value-type';
 import type { CheckItem } from './items';
 import { joined, type Derived } from './linear';
 import { marginKind, marginOf, marginSlopes, verdictOf } from './margin';

@@ -2,7 +2,7 @@
 import { Refusal } from './faults';
 import { functionNamed } from './functions';
 import { asText } from './print';
-import { placeOf, type Comparison, type Expr } from './tree';
+import { fixedFigure, placeOf, type Comparison, type Expr } from './tree';
 
 /** Reads the values of names by their place in the list given to `compile`. */
 export type Program = (values: ArrayLike<number>) => number;
@@ -12,19 +12,9 @@ export const LARGEST = 1e300;
 
 export function compile(expr: Expr, names: readonly string[]): Program {
 	const value = (child: Expr): Program => compile(child, names);
+	const figure = fixedFigure(expr);
+	if (figure !== null) return () => figure;
 	switch (expr.kind) {
-		case 'number': {
-			const { value } = expr;
-			return () => value;
-		}
-		case 'literal': {
-			const { si } = expr;
-			return () => si;
-		}
-		case 'constant': {
-			const { value } = expr.constant;
-			return () => value;
-		}
 		case 'name': {
 			const slot = names.indexOf(expr.name);
 			return (values) => values[slot]!;

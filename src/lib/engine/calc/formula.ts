@@ -3,18 +3,20 @@ import { significant } from '../quantities/number';
 import { equal, isPure } from '../quantities/dimension';
 import { compile, type Program } from './compile';
 import { Refusal } from './faults';
+import { notSingle } from './dimension-refusals';
 import { compileGradient, type Gradient } from './gradient';
 import { Inputs, type Figures } from './figures';
-import { PICK_ONE, inferType, type ValueType } from './infer';
+import { inferType } from './infer';
+import type { ValueType } from './value-type';
 import type { Carried, Derived } from './linear';
 import { compileLists, hasList, type ListProgram } from './lists';
 import { ambiguousName, modelName, unknownName } from './name-refusals';
 import { parse, type Parsed } from './parse';
-import { asTex, asText } from './print';
+import { asTex } from './print';
 import type { Fault } from './results';
 import type { Scope } from './scope';
 import { sameManner, type Manner, type Slot } from './slot';
-import { leaves, placeOf, type Expr } from './tree';
+import { leaves, type Expr } from './tree';
 
 /** Unit and digits where something in it had them. */
 export type FormulaValue = {
@@ -241,12 +243,6 @@ function read(inputs: readonly Slot[]): Float64Array {
 
 const figuresOf = (inputs: readonly Slot[], shares: readonly (Float64Array | null)[]): Figures[] =>
 	inputs.map(({ si, list }, i) => ({ values: list ?? [si], shares: shares[i] ?? null }));
-
-const notSingle = (expr: Expr) =>
-	new Refusal('dimension', `${asText(expr)} is a list, where one value is wanted.`, {
-		remedy: PICK_ONE,
-		place: placeOf(expr)
-	});
 
 function asFault(error: unknown, field: string): Fault {
 	if (error instanceof Refusal) return error.in(field);

@@ -29,12 +29,9 @@ export function total(values: ArrayLike<number>): number {
 	return Number.isFinite(sum) ? sum + lost : sum;
 }
 
-/** By their largest, so that a mean which can be told does not fail on a sum that cannot. */
-export function mean(values: ArrayLike<number>): number {
-	const size = Math.max(Math.abs(least(values)), Math.abs(greatest(values)));
-	if (size === 0) return 0;
-	return size * (total(Array.from(values, (value) => value / size)) / values.length);
-}
+/** Arithmetic mean, found by shares: a mean that can be told does not fail on a sum that cannot. */
+export const mean: Gather = (values) => meanAndDeviation(Float64Array.from(values)).mean;
 
-/** Standard deviation of a sample (n − 1); not a number for a single value. */
-export const deviation: Gather = (values) => meanAndDeviation(Float64Array.from(values)).s;
+/** Standard deviation of a sample (n − 1); not a number for a single value, which has none. */
+export const deviation: Gather = (values) =>
+	values.length > 1 ? meanAndDeviation(Float64Array.from(values)).s : NaN;

@@ -2,7 +2,7 @@
 import { parseUnit } from '../quantities/units';
 import type { Entry, ResultLinks } from './entry';
 import { evaluateGiven } from './given';
-import { valueType } from './infer';
+import { valueType } from './value-type';
 import type { GivenItem } from './items';
 import type { Fault, Outcome, QuantityResult } from './results';
 import type { Scope } from './scope';

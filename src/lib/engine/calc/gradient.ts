@@ -7,7 +7,7 @@
 import { functionNamed } from './functions';
 import { SLOPES } from './slopes';
 import { compile, compileCondition } from './compile';
-import type { Expr } from './tree';
+import { fixedFigure, type Expr } from './tree';
 
 /** Writes the slope by each name, in the order of the list given to `compileGradient`. */
 export type Gradient = (values: ArrayLike<number>, slopes: Float64Array) => void;
@@ -29,13 +29,9 @@ export function compileGradient(expr: Expr, names: readonly string[]): Gradient 
 }
 
 function part(expr: Expr, names: readonly string[]): Part {
+	const figure = fixedFigure(expr);
+	if (figure !== null) return { rise: () => figure, fall: () => {} };
 	switch (expr.kind) {
-		case 'number':
-			return fixed(expr.value);
-		case 'literal':
-			return fixed(expr.si);
-		case 'constant':
-			return fixed(expr.constant.value);
 		case 'name': {
 			const at = names.indexOf(expr.name);
 			return {
@@ -76,8 +72,6 @@ function part(expr: Expr, names: readonly string[]): Part {
 			throw new Error('A condition has no slope.');
 	}
 }
-
-const fixed = (value: number): Part => ({ rise: () => value, fall: () => {} });
 
 function joined(
 	parts: readonly Part[],

@@ -1,38 +1,29 @@
 /** The dimension of every node, checked once per edit; after it the numbers are plain SI floats. */
+import { PURE, equal, isPure, over, times, toPower } from '../quantities/dimension';
 import {
-	PURE,
-	equal,
-	inWords,
-	isPure,
-	over,
-	times,
-	toPower,
-	type Dimension
-} from '../quantities/dimension';
-import { Refusal } from './faults';
+	fromDifference,
+	listFor,
+	mismatch,
+	noColumn,
+	noCondition,
+	noMultiple,
+	noSumOf,
+	noTotal,
+	noValue,
+	notPure,
+	nothingToPick,
+	unlikeBranches,
+	unlikeScales,
+	whichZero
+} from './dimension-refusals';
+import { power } from './exponent';
 import { functionNamed } from './functions';
-import { asText } from './print';
-import { placeOf, type Expr } from './tree';
-
-/**
- * Temperatures on a scale with a zero of its own (20 °C) are points; what lies between two of them is
- * a difference. A kelvin may be either ("plain"), as may everything that is no temperature.
- */
-export type Scale = 'plain' | 'point' | 'difference';
-
-/** A list has many values, all of one dimension. */
-export type ValueType = { kind: 'value'; dimension: Dimension; scale: Scale; list: boolean };
-export type Type = ValueType | { kind: 'truth' };
+import type { Expr } from './tree';
+import { valueType, type Type, type ValueType } from './value-type';
 
 export type TypeOf = (name: string) => ValueType;
 
 const TRUTH: Type = { kind: 'truth' };
-
-export const valueType = (
-	dimension: Dimension,
-	scale: Scale = 'plain',
-	list = false
-): ValueType => ({ kind: 'value', dimension, scale, list });
 
 /** What is known while one expression is looked through: each part is, once, however often it is asked for. */
 type Known = { typeOf: TypeOf; types: Map<Expr, Type> };
@@ -44,10 +35,7 @@ export const inferType = (expr: Expr, typeOf: TypeOf): ValueType =>
 function inferValue(expr: Expr, known: Known): ValueType {
 	const type = infer(expr, known);
 	if (type.kind === 'value') return type;
-	throw new Refusal('dimension', `${asText(expr)} is true or false, not a value.`, {
-		remedy: 'Use it as a condition: condition ? value : other value.',
-		place: placeOf(expr)
-	});
+	throw noValue(expr);
 }
 
 function infer(expr: Expr, known: Known): Type {
@@ -98,52 +86,31 @@ function inferred(expr: Expr, known: Known): Type {
 	}
 }
 
-/** What to do with a list where one value is wanted. */
-export const PICK_ONE = 'Take one of its values, e.g. x[1], or its min, max, sum or mean.';
-
 /** @throws Refusal where a list stands in the place of one value. */
 function single(expr: Expr, known: Known, place: string): void {
 	if (!inferValue(expr, known).list) return;
-	throw new Refusal('dimension', `${place} takes one value; ${asText(expr)} is a list.`, {
-		remedy: PICK_ONE,
-		place: placeOf(expr)
-	});
+	throw listFor(place, expr);
 }
 
 function branches({ yes, no }: Expr & { kind: 'choose' }, known: Known): ValueType {
 	const type = alike(yes, no, 'taken for each other', known);
 	const [first, second] = [yes, no].map((branch) => inferValue(branch, known).list);
 	if (first === second) return type;
-	throw new Refusal(
-		'dimension',
-		`${asText(yes)} and ${asText(no)} cannot be taken for each other: one is a list, the other one value.`,
-		{ place: placeOf(no) ?? placeOf(yes) }
-	);
+	throw unlikeBranches(yes, no);
 }
 
 function pick({ of, index }: Expr & { kind: 'pick' }, known: Known): ValueType {
 	const type = inferValue(of, known);
-	if (!type.list) {
-		throw new Refusal('dimension', `${asText(of)} is one value: it has no others to pick from.`, {
-			place: placeOf(of)
-		});
-	}
+	if (!type.list) throw nothingToPick(of);
 	single(index, known, 'The number of a value');
 	const { dimension } = inferValue(index, known);
 	if (isPure(dimension)) return { ...type, list: false };
-	throw new Refusal(
-		'dimension',
-		`The number of a value is a pure number; ${asText(index)} is ${inWords(dimension)}.`,
-		{ place: placeOf(index) }
-	);
+	throw notPure('The number of a value is a pure number', index, dimension);
 }
 
 function condition(expr: Expr, known: Known): void {
 	if (infer(expr, known).kind === 'truth') return;
-	throw new Refusal('dimension', `${asText(expr)} is a value, where a condition is wanted.`, {
-		remedy: 'Compare it with something, e.g. x > 0.',
-		place: placeOf(expr)
-	});
+	throw noCondition(expr);
 }
 
 function binary(expr: Expr & { kind: 'binary' }, known: Known): ValueType {
@@ -168,16 +135,6 @@ function refuseScaled(expr: Expr & { kind: 'binary' }, left: ValueType, right: V
 	if (isScaled) throw noMultiple(expr);
 }
 
-const noMultiple = (expr: Expr) =>
-	new Refusal(
-		'dimension',
-		`${asText(expr)} has no meaning: a temperature on a scale with its own zero has no multiples.`,
-		{
-			remedy: 'Give the temperature in K, or multiply a difference of two.',
-			place: placeOf(expr)
-		}
-	);
-
 function sum(expr: Expr & { kind: 'binary' }, known: Known): ValueType {
 	const left = inferValue(expr.left, known);
 	const right = inferValue(expr.right, known);
@@ -189,18 +146,10 @@ function sum(expr: Expr & { kind: 'binary' }, known: Known): ValueType {
 	}
 	if (left.scale === 'point' && right.scale === 'point') {
 		if (!added) return valueType(fits.dimension, 'difference', list);
-		throw new Refusal(
-			'dimension',
-			`${asText(expr.right)} cannot be added: two temperatures on a scale with its own zero have no sum.`,
-			{ remedy: 'Write the difference in K.', place: placeOf(expr.right) }
-		);
+		throw noSumOf(expr.right);
 	}
 	if (!added && right.scale === 'point' && left.scale === 'difference') {
-		throw new Refusal(
-			'dimension',
-			`${asText(expr.right)} cannot be subtracted: it is a temperature; ${asText(expr.left)} before it is a difference of temperatures.`,
-			{ place: placeOf(expr.right) }
-		);
+		throw fromDifference(expr.left, expr.right);
 	}
 	if (!added && right.scale === 'point') return valueType(fits.dimension, 'difference', list);
 	const scales = [left.scale, right.scale];
@@ -222,16 +171,6 @@ function fit(a: Expr, left: ValueType, b: Expr, right: ValueType): ValueType | n
 	return null;
 }
 
-function mismatch(a: Expr, left: ValueType, b: Expr, right: ValueType, done: string): Refusal {
-	const what = asText(b);
-	return new Refusal(
-		'dimension',
-		`${what} cannot be ${done}: it is ${inWords(right.dimension)}; ` +
-			`${asText(a)} before it is ${inWords(left.dimension)}.`,
-		{ place: placeOf(b) ?? placeOf(a) }
-	);
-}
-
 function alike(a: Expr, b: Expr, done: string, known: Known): ValueType {
 	const left = inferValue(a, known);
 	const right = inferValue(b, known);
@@ -239,78 +178,13 @@ function alike(a: Expr, b: Expr, done: string, known: Known): ValueType {
 	if (!fits) throw mismatch(a, left, b, right, done);
 	const zero = isZero(a) ? a : b;
 	if (isZero(zero) && (left.scale === 'point' || right.scale === 'point')) {
-		throw new Refusal('dimension', '0 beside a temperature may be that of any scale.', {
-			remedy: 'Write 0 degC or 0 K.',
-			place: placeOf(zero)
-		});
+		throw whichZero(zero);
 	}
 	if ([left.scale, right.scale].sort().join() === 'difference,point') {
-		throw new Refusal(
-			'dimension',
-			`${asText(b)} cannot be ${done}: one of the two is a temperature, the other a difference of temperatures.`,
-			{ place: placeOf(b) }
-		);
+		throw unlikeScales(b, done);
 	}
 	const scale = left.scale === right.scale ? left.scale : 'plain';
 	return valueType(fits.dimension, scale, left.list || right.list);
-}
-
-function power(expr: Expr & { kind: 'binary' }, base: ValueType, exponent: ValueType): ValueType {
-	const shown = asText(expr.right);
-	if (!isPure(exponent.dimension)) {
-		throw new Refusal(
-			'dimension',
-			`The exponent ${shown} must be a pure number; it is ${inWords(exponent.dimension)}.`,
-			{ place: placeOf(expr.right) }
-		);
-	}
-	const list = base.list || exponent.list;
-	if (isPure(base.dimension)) return valueType(PURE, 'plain', list);
-	const value = constantValue(expr.right);
-	if (value === null) {
-		throw new Refusal(
-			'dimension',
-			`${asText(expr.left)} is ${inWords(base.dimension)}: its exponent must be a number written out, not ${shown}.`,
-			{ remedy: 'Only a pure number may have a variable exponent.', place: placeOf(expr.right) }
-		);
-	}
-	if (!rational(value)) {
-		throw new Refusal(
-			'dimension',
-			`${asText(expr.left)} is ${inWords(base.dimension)}: its exponent must be a simple fraction, not ${shown}.`,
-			{ place: placeOf(expr.left) }
-		);
-	}
-	return valueType(toPower(base.dimension, value), 'plain', list);
-}
-
-const rational = (value: number) =>
-	Math.abs(value) <= 20 &&
-	[1, 2, 3, 4, 5, 6, 7, 8, 9, 10].some((n) => Math.abs(value * n - Math.round(value * n)) < 1e-9);
-
-/** The value of an exponent made of plain numbers only, else null. */
-function constantValue(expr: Expr): number | null {
-	if (expr.kind === 'number') return expr.value;
-	if (expr.kind === 'negate') {
-		const value = constantValue(expr.of);
-		return value === null ? null : -value;
-	}
-	if (expr.kind !== 'binary') return null;
-	const left = constantValue(expr.left);
-	const right = constantValue(expr.right);
-	if (left === null || right === null) return null;
-	switch (expr.op) {
-		case '+':
-			return left + right;
-		case '-':
-			return left - right;
-		case '*':
-			return left * right;
-		case '/':
-			return right === 0 ? null : left / right;
-		case '^':
-			return left ** right;
-	}
 }
 
 function call(expr: Expr & { kind: 'call' }, known: Known): ValueType {
@@ -322,11 +196,7 @@ function call(expr: Expr & { kind: 'call' }, known: Known): ValueType {
 			const { dimension, list } = inferValue(arg, known);
 			anyList ||= list;
 			if (isPure(dimension)) continue;
-			throw new Refusal(
-				'dimension',
-				`${expr.name} takes a pure number; ${asText(arg)} is ${inWords(dimension)}.`,
-				{ place: placeOf(arg) }
-			);
+			throw notPure(`${expr.name} takes a pure number`, arg, dimension);
 		}
 		return valueType(PURE, 'plain', anyList);
 	}
@@ -342,11 +212,7 @@ function call(expr: Expr & { kind: 'call' }, known: Known): ValueType {
 	const found = allAlike(expr.args, known);
 	const type = gathers ? { ...found, list: false } : found;
 	if (rule === 'total' && type.scale === 'point') {
-		throw new Refusal(
-			'dimension',
-			`${asText(expr)} has no value: temperatures on a scale with its own zero have no sum.`,
-			{ remedy: 'Take their mean.', place: placeOf(expr) }
-		);
+		throw noTotal(expr);
 	}
 	if (rule === 'spread' && type.scale === 'point') return { ...type, scale: 'difference' };
 	return rule === 'alike to pure' ? valueType(PURE, 'plain', type.list) : type;
@@ -375,11 +241,7 @@ function interpolation(expr: Expr & { kind: 'call' }, known: Known): ValueType {
 	const [x, xs, ys] = expr.args as [Expr, Expr, Expr];
 	for (const column of [xs, ys]) {
 		if (inferValue(column, known).list) continue;
-		throw new Refusal(
-			'dimension',
-			`${expr.name} reads from two lists; ${asText(column)} is one value.`,
-			{ remedy: 'Write interpolate(x, list of x, list of y).', place: placeOf(column) }
-		);
+		throw noColumn(expr, column);
 	}
 	alike(xs, x, 'looked up in it', known);
 	return { ...inferValue(ys, known), list: inferValue(x, known).list };

@@ -6,7 +6,7 @@ import { outOfRange } from '../methods/check';
 import type { Told } from '../methods/parameter';
 import { fault } from './faults';
 import type { Formula, FormulaOutcome } from './formula';
-import { valueType } from './infer';
+import { valueType } from './value-type';
 import type { LineModelItem } from './items';
 import {
 	MODEL_FIELDS,

@@ -124,6 +124,7 @@ describe('what cannot be', () => {
 		['n > 1 ? 1 : 2', 'dimension', /A comparison takes one value; n is a list/],
 		['a > b ? n : 1', 'dimension', /one is a list, the other one value/],
 		['std(3)', 'domain', /at least two values/],
+		['std([3])', 'domain', /at least two values/],
 		['n + sum', 'unknown-symbol', /sum/]
 	])('%s is told as %s', (expression, code, words) => {
 		const fault = faultIn(expression);

@@ -10,7 +10,7 @@ import { ARITHMETIC_SLOPES } from './gradient';
 import { interpolated } from './interpolation';
 import { each, fixed, gathered, listed, picked, type Part } from './list-parts';
 import { SLOPES } from './slopes';
-import { children, type Expr } from './tree';
+import { children, fixedFigure, type Expr } from './tree';
 
 export type ListProgram = (inputs: Inputs) => Figures;
 
@@ -31,13 +31,9 @@ export function compileLists(
 		return (inputs: Inputs) => run(inputs).values[0]!;
 	};
 	function part(expr: Expr): Part {
+		const figure = fixedFigure(expr);
+		if (figure !== null) return fixed(figure);
 		switch (expr.kind) {
-			case 'number':
-				return fixed(expr.value);
-			case 'literal':
-				return fixed(expr.si);
-			case 'constant':
-				return fixed(expr.constant.value);
 			case 'name': {
 				const at = names.indexOf(expr.name);
 				return { list: isList(expr.name), run: ({ named }) => named[at]! };

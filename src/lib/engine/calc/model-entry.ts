@@ -2,7 +2,7 @@
 import { slopesOf } from '../numerics/slope';
 import type { Entry, ResultLinks } from './entry';
 import { Formula } from './formula';
-import { valueType } from './infer';
+import { valueType } from './value-type';
 import type { LineModelItem } from './items';
 import { joined, type Derived } from './linear';
 import { evaluateLineModel, fieldsRead, outputsAt, type ModelFormulas } from './line-model';

@@ -4,7 +4,7 @@ import { preferredUnit } from '../quantities/prefer';
 import { fromSi, parseUnit, type Unit } from '../quantities/units';
 import { LARGEST } from './compile';
 import { Refusal, fault } from './faults';
-import type { ValueType } from './infer';
+import type { ValueType } from './value-type';
 import type { Fault, Outcome, Quantity } from './results';
 
 export const DEFAULT_DIGITS = 4;

@@ -3,7 +3,7 @@
  * it and read the figure without looking the name up.
  */
 import { equal } from '../quantities/dimension';
-import type { ValueType } from './infer';
+import type { ValueType } from './value-type';
 
 /** How a value is typed and shown. What names it is checked anew only where this changes. */
 export type Manner = { type: ValueType; unit: string; digits: number };

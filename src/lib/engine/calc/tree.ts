@@ -24,6 +24,13 @@ export type Expr =
 	/** One value of a list, counted from 1. */
 	| { kind: 'pick'; of: Expr; index: Expr };
 
+/** The figure, in SI, of a part that names nothing; null for any other. */
+export function fixedFigure(expr: Expr): number | null {
+	if (expr.kind === 'number') return expr.value;
+	if (expr.kind === 'literal') return expr.si;
+	return expr.kind === 'constant' ? expr.constant.value : null;
+}
+
 export function children(expr: Expr): Expr[] {
 	switch (expr.kind) {
 		case 'negate':

@@ -1,6 +1,7 @@
 /** What a set of coupon results comes to: mean, spread, single results far from the rest. */
 import { studentUpper } from '../numerics/gamma';
 import { root } from '../numerics/root';
+import { meanAndDeviation } from '../numerics/sample';
 
 export type Summary = {
 	n: number;
@@ -10,19 +11,12 @@ export type Summary = {
 	greatest: number;
 };
 
-/** Standard deviation with n − 1, in two passes. */
 export function summarise(values: readonly number[]): Summary {
-	const n = values.length;
-	const mean = values.reduce((sum, x) => sum + x, 0) / n;
-	let [square, rest] = [0, 0];
-	for (const x of values) {
-		square += (x - mean) ** 2;
-		rest += x - mean;
-	}
+	const { mean, s } = meanAndDeviation(Float64Array.from(values));
 	return {
-		n,
-		mean: mean + rest / n,
-		deviation: Math.sqrt(Math.max(0, square - (rest * rest) / n) / (n - 1)),
+		n: values.length,
+		mean,
+		deviation: s,
 		least: Math.min(...values),
 		greatest: Math.max(...values)
 	};
